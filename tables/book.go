@@ -1,0 +1,31 @@
+package tables
+
+// A book is the tables of one code. What an edition prints otherwise is chosen
+// by the edition where the book takes one. A nil entry is a table that the code
+// does not have.
+type book struct {
+	fullLoad         [motorTableCount]func() *motorTable
+	lockedRotor1     func(Edition) *motorTable
+	lockedRotor3     func() *motorTable
+	duty             func() *dutyTable
+	devices          func() *deviceTable
+	ceilings         func() *ceilingTable
+	instantaneous    func() *instantaneousTable
+	ratings          func(Edition, Device) *ratingTable
+	overloadUnits    func() *unitsTable
+	supplyInsulation func() *supplyInsulationTable
+	raceway          [materialCount]func() *ampacityData
+	freeAir          [materialCount]func() *ampacityData
+	ambient          func() *ambientTable
+	count            func() *countTable
+	spacing          func() *countTable
+	insulations      func() *insulationTable
+	smallConductors  func() []smallConductor
+}
+
+func (e Edition) book() *book {
+	if e.Code() == CEC {
+		return &cecBook
+	}
+	return &necBook
+}

@@ -1,0 +1,109 @@
+package tables
+
+import "example.org/motorcircuit/internal/exact"
+
+// This file holds the ways to make figures. A figure's mark is the weakest of
+// its rule and its operands.
+
+func newFigure(name string, op Op, e Edition, rule *Rule, value exact.Num, unit Unit, of ...Figure) Figure {
+	f := Figure{value: value, name: name, rule: rule, of: of, edition: e, unit: unit, op: op}
+	if rule != nil {
+		f.mark = rule.Mark
+	}
+	for i := range of {
+		f.mark = max(f.mark, of[i].mark)
+	}
+	return f
+}
+
+// StatedFigure returns coef × 10^-places of the unit, as the rule prints it.
+func StatedFigure(name string, e Edition, rule *Rule, unit Unit, coef int64, places int) Figure {
+	return newFigure(name, Stated, e, rule, exact.New(coef, places), unit)
+}
+
+// ProductOf returns the product of the factors, in the unit of the first.
+// Percents count as hundredths.
+func ProductOf(name string, e Edition, rule *Rule, factors ...Figure) Figure {
+	product := exact.Int(1)
+	for i, f := range factors {
+		product = product.Mul(f.value)
+		if f.unit == Percent && i > 0 {
+			product = product.Mul(exact.New(1, 2))
+		}
+	}
+	return newFigure(name, Product, e, rule, product, factors[0].unit, factors...)
+}
+
+// SumOf returns the sum of the terms, in the unit of the first.
+func SumOf(name string, e Edition, rule *Rule, terms ...Figure) Figure {
+	var sum exact.Num
+	for _, t := range terms {
+		sum = sum.Add(t.value)
+	}
+	return newFigure(name, Sum, e, rule, sum, terms[0].unit, terms...)
+}
+
+// LargestOf returns the largest of the figures; absent ones are left out. It is
+// absent if all are.
+func LargestOf(name string, e Edition, rule *Rule, figures ...Figure) Figure {
+	return extreme(name, Largest, e, rule, 1, figures)
+}
+
+// SmallestOf returns the smallest of the figures; absent ones are left out. It
+// is absent if all are.
+func SmallestOf(name string, e Edition, rule *Rule, figures ...Figure) Figure {
+	return extreme(name, Smallest, e, rule, -1, figures)
+}
+
+func extreme(name string, op Op, e Edition, rule *Rule, sign int, figures []Figure) Figure {
+	present := make([]Figure, 0, len(figures))
+	best := -1
+	for _, f := range figures {
+		if f.IsZero() {
+			continue
+		}
+		present = append(present, f)
+		if best < 0 || f.Cmp(present[best])*sign > 0 {
+			best = len(present) - 1
+		}
+	}
+	if best < 0 {
+		return Figure{}
+	}
+	return newFigure(name, op, e, rule, present[best].value, present[best].unit, present...)
+}
+
+// RaisedTo returns f, or the least value if f is below it; the note says why.
+func RaisedTo(name string, e Edition, rule *Rule, f, least Figure, note string) Figure {
+	if f.Cmp(least) >= 0 {
+		return f
+	}
+	g := newFigure(name, AtLeast, e, rule, least.value, f.unit, f)
+	g.note = note
+	return g
+}
+
+// As returns f under another name and rule: the same value, put to a use that
+// the rule decides.
+func (f Figure) As(name string, e Edition, rule *Rule) Figure {
+	if f.IsZero() {
+		return f
+	}
+	f.name, f.edition, f.rule = name, e, rule
+	if rule != nil {
+		f.mark = max(f.mark, rule.Mark)
+	}
+	return f
+}
+
+// StandIn returns f as an assumed value of another name: it stands in for what
+// was not given, and a caution must say so.
+func (f Figure) StandIn(name string, e Edition, rule *Rule) Figure {
+	return newFigure(name, Assumed, e, rule, f.value, f.unit, f)
+}
+
+// WithNote returns f with a note on how it came about.
+func (f Figure) WithNote(note string) Figure {
+	f.note = note
+	return f
+}

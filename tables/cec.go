@@ -1,0 +1,65 @@
+package tables
+
+// The CEC's system voltages for a column of rated motor volts: notes of Tables
+// 44 and 45.
+var cecVolts = []voltRange{{115, 115, 120}, {230, 230, 240}, {460, 460, 480}, {575, 575, 600}}
+
+// Under the note of Table 45 the 200 V and 208 V currents are the 230 V ones
+// plus 15 and 10 percent.
+var cecSinglePhaseNote = []derivedColumn{{200, 230, 115, &cecTable45}, {208, 230, 110, &cecTable45}}
+
+var (
+	cecTable44 = Rule{Ref: "Table 44", Mark: MarkB}
+	cecTable45 = Rule{Ref: "Table 45"}
+	cecTableD2 = Rule{Ref: "Table D2", Mark: MarkC}
+	cecTable27 = Rule{Ref: "Table 27"}
+	cecTable29 = Rule{Ref: "Table 29"}
+	cecTable25 = Rule{Ref: "Table 25", Mark: MarkB}
+	cecTable37 = Rule{Ref: "Table 37", Mark: MarkC}
+	cecTable13 = Rule{Ref: "Table 13", Mark: MarkB}
+
+	cecTable2   = Rule{Ref: "Table 2"}
+	cecTable4   = Rule{Ref: "Table 4"}
+	cecTable1   = Rule{Ref: "Table 1", Mark: MarkC}
+	cecTable3   = Rule{Ref: "Table 3", Mark: MarkC}
+	cecTable5A  = Rule{Ref: "Table 5A", Mark: MarkB}
+	cecTable5B  = Rule{Ref: "Table 5B"}
+	cecTable5C  = Rule{Ref: "Table 5C"}
+	cecTable19  = Rule{Ref: "Table 19", Mark: MarkB}
+	cecRaise    = Rule{Ref: "Rule 28-200(4)"}
+	cecInstant  = Rule{Ref: "Rule 28-210"}
+	cecSmall    = Rule{Ref: "Rule 14-104(2)"}
+	cecBigTrade = Rule{Ref: "Table 13", Note: "ratings above 800 A: common practice, no source", Mark: MarkC}
+)
+
+var cecBook = book{
+	fullLoad: [motorTableCount]func() *motorTable{
+		DirectCurrentTable: loadMotorTable("cec/motor_flc_dc.csv", &cecTableD2, nil, nil, nil),
+		SinglePhaseTable:   loadMotorTable("cec/motor_flc_1ph.csv", &cecTable45, cecVolts, cecSinglePhaseNote, nil),
+		InductionTable:     loadMotorTable("cec/motor_flc_3ph_induction.csv", &cecTable44, cecVolts, nil, nil),
+		SynchronousTable:   loadMotorTable("cec/motor_flc_3ph_synchronous.csv", &cecTable44, cecVolts, nil, nil),
+	},
+	duty:             loadDuty("cec/motor_service_duty_percent.csv", &cecTable27),
+	devices:          loadDevices("cec/motor_ocpd_max_percent.csv", &cecTable29),
+	ceilings:         loadCeilings("cec/motor_ocpd_increase_caps.csv", &cecRaise),
+	instantaneous:    loadInstantaneous("cec/motor_instantaneous_trip_caps.csv", &cecInstant),
+	ratings:          func(Edition, Device) *ratingTable { return cecRatings() },
+	overloadUnits:    loadUnits("cec/motor_table25_overload_count.csv", &cecTable25, map[int]string{0: "one_phase_ac_or_dc_2_wire_one_conductor_grounded", 1: "one_phase_ac_or_dc_2_wire_one_conductor_grounded", 2: "two_phase_4_wire_ac", 3: "three_phase_ac_any"}),
+	supplyInsulation: loadSupplyInsulation("cec/motor_insulation_temperature.csv", &cecTable37),
+	raceway: [materialCount]func() *ampacityData{
+		Copper:   loadAmpacity("cec/conductor_ampacity_copper_raceway.csv", Copper, &cecTable2),
+		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_raceway.csv", Aluminum, &cecTable4),
+	},
+	freeAir: [materialCount]func() *ampacityData{
+		Copper:   loadAmpacity("cec/conductor_ampacity_copper_free_air.csv", Copper, &cecTable1),
+		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_free_air.csv", Aluminum, &cecTable3),
+	},
+	ambient:         loadAmbient("cec/conductor_ambient.csv", "ambient_c", true, &cecTable5A),
+	count:           loadCounts("cec/conductor_count_5c.csv", &cecTable5C, Plain),
+	spacing:         loadCounts("cec/conductor_spacing_5b.csv", &cecTable5B, Plain),
+	insulations:     loadInsulationsCEC("cec/conductor_insulations.csv", &cecTable19),
+	smallConductors: loadSmallConductors("cec/conductor_small_14_104.csv", func([]string) *Rule { return &cecSmall }),
+}
+
+// Ratings to 800 A are those of Table 13; above, those that the trade makes.
+var cecRatings = loadTable13("cec/conductor_ocpd_table13.csv", &cecTable13, &cecBigTrade, 1000, 1200, 1600, 2000, 2500, 3000, 4000, 5000, 6000)

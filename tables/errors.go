@@ -1,0 +1,92 @@
+package tables
+
+import (
+	"fmt"
+	"strings"
+)
+
+// An InputError reports a value that cannot stand: one field of an input, or
+// a text that does not parse.
+type InputError struct {
+	Field string   // path of the field, such as "motor.nameplate.service_factor"
+	Value string   // what was given, shortened if long; "" if nothing was
+	Want  string   // what is allowed
+	Cite  Citation // the rule that says so, if one does
+}
+
+func (e *InputError) Error() string {
+	var b strings.Builder
+	b.WriteString(e.Field)
+	if e.Value != "" {
+		fmt.Fprintf(&b, " %q", e.Value)
+	} else {
+		b.WriteString(" is not given")
+	}
+	b.WriteString(": want ")
+	b.WriteString(e.Want)
+	if !e.Cite.IsZero() {
+		fmt.Fprintf(&b, " [%v]", e.Cite)
+	}
+	return b.String()
+}
+
+// A NotTabulatedError reports a table that was asked for what it does not
+// print. Nothing is interpolated or guessed in its place.
+type NotTabulatedError struct {
+	Field  string // path of the input field that chose the missing entry
+	Table  Citation
+	Row    string // "51 hp"
+	Col    string // "460 V"
+	Covers string // what the table does print
+}
+
+func (e *NotTabulatedError) Error() string {
+	at := ""
+	if e.Col != "" {
+		at = " at " + e.Col
+	}
+	return fmt.Sprintf("%s: %v has no %s%s; it covers %s", e.Field, e.Table, e.Row, at, e.Covers)
+}
+
+// A NoSizeError reports a requirement that no size or rating meets.
+type NoSizeError struct {
+	Field      string // path of the input field that sets the requirement
+	Constraint string // the limit that no size meets
+	Need       Figure // the figure required, if there is one
+	Cite       Citation
+}
+
+func (e *NoSizeError) Error() string {
+	s := e.Field + ": " + e.Constraint
+	if !e.Need.IsZero() {
+		s += fmt.Sprintf(" for %s of %v", e.Need.Name(), e.Need)
+	}
+	if !e.Cite.IsZero() {
+		s += fmt.Sprintf(" [%v]", e.Cite)
+	}
+	return s
+}
+
+// clip shortens text that goes into a message.
+func clip(s string) string {
+	const most = 40
+	if len(s) <= most {
+		return s
+	}
+	return strings.ToValidUTF8(s[:most], "") + "..."
+}
+
+// A Caution is what a designer should know of a result although it stands: an
+// assumption, a default taken, a limit that is near, a reading of a rule.
+type Caution struct {
+	Text string   `json:"text"`
+	Cite Citation `json:"cite,omitzero"`
+}
+
+// String returns the text with its citation.
+func (c Caution) String() string {
+	if c.Cite.IsZero() {
+		return c.Text
+	}
+	return c.Text + " [" + c.Cite.String() + "]"
+}

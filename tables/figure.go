@@ -1,0 +1,213 @@
+package tables
+
+import (
+	"encoding/json"
+	"slices"
+	"strings"
+
+	"github.com/shopspring/decimal"
+
+	"example.org/motorcircuit/internal/exact"
+)
+
+// An Op tells how a figure came about.
+type Op uint8
+
+// The ways in which a figure comes about.
+const (
+	Given        Op = iota // the caller's input
+	Assumed                // a default, or a stand-in that a caution tells of
+	Tabulated              // read from a table, at the place that Note names
+	Stated                 // printed in the rule itself
+	Product                // of the operands; percents count as hundredths
+	Sum                    // of the operands
+	QuotientUp             // first operand ÷ the others, rounded up
+	QuotientDown           // first operand ÷ the others, rounded down
+	Largest                // of the operands
+	Smallest               // of the operands
+	NextUp                 // the first standard rating at or above the operand
+	NextDown               // the highest standard rating not above the operand
+	AtLeast                // the operand, raised to a least value that Note names
+)
+
+var opTexts = [...]string{
+	"given", "assumed", "tabulated", "stated", "product", "sum", "quotient_rounded_up", "quotient_rounded_down",
+	"largest", "smallest", "next_standard_up", "next_standard_down", "at_least",
+}
+
+// String returns the stable text form.
+func (o Op) String() string {
+	if int(o) < len(opTexts) {
+		return opTexts[o]
+	}
+	return ""
+}
+
+// MarshalText is [Op.String].
+func (o Op) MarshalText() ([]byte, error) { return []byte(o.String()), nil }
+
+// A Figure is a number of a result and the way it came about: what it is, its
+// value and unit, the operation and operands, and the rule that decided it.
+// Words are made only when somebody asks. The zero Figure is "does not apply".
+type Figure struct {
+	value   exact.Num
+	name    string
+	note    string
+	rule    *Rule
+	of      []Figure
+	edition Edition
+	unit    Unit
+	op      Op
+	mark    Mark
+}
+
+// IsZero reports whether the figure is absent: not asked for or not applicable.
+func (f Figure) IsZero() bool { return f.name == "" }
+
+// Name says what the number is, in the trade's words.
+func (f Figure) Name() string { return f.name }
+
+// Value returns the number, exactly.
+func (f Figure) Value() decimal.Decimal { return f.value.Decimal() }
+
+// Unit returns the unit of the value.
+func (f Figure) Unit() Unit { return f.unit }
+
+// Op returns how the figure came about.
+func (f Figure) Op() Op { return f.op }
+
+// Note returns the place in a table, or another detail of how; often "".
+func (f Figure) Note() string { return f.note }
+
+// Operands returns a copy of the figures that this one was worked out from.
+func (f Figure) Operands() []Figure { return slices.Clone(f.of) }
+
+// Citation returns the rule or table that decided this figure; zero for a
+// caller's input.
+func (f Figure) Citation() Citation { return f.rule.In(f.edition) }
+
+// Citations returns the citation of the figure, then those of its operands and
+// theirs, each once.
+func (f Figure) Citations() []Citation {
+	var all []Citation
+	f.walk(func(g Figure) {
+		if c := g.Citation(); !c.IsZero() && !slices.Contains(all, c) {
+			all = append(all, c)
+		}
+	})
+	return all
+}
+
+// Mark returns how sure the figure is: the weakest mark among its own rule or
+// table and those of its operands.
+func (f Figure) Mark() Mark { return f.mark }
+
+// Weakest returns the citations of f and its operands whose own mark is C.
+func (f Figure) weakest(yield func(Citation)) {
+	if f.mark != MarkC {
+		return
+	}
+	if f.rule != nil && f.rule.Mark == MarkC {
+		yield(f.Citation())
+	}
+	for i := range f.of {
+		f.of[i].weakest(yield)
+	}
+}
+
+func (f Figure) walk(visit func(Figure)) {
+	visit(f)
+	for _, g := range f.of {
+		g.walk(visit)
+	}
+}
+
+// Cmp compares the values: -1, 0 or 1.
+func (f Figure) Cmp(g Figure) int { return f.value.Cmp(g.value) }
+
+// Text returns the value alone, as a plain decimal; "" for the zero Figure.
+func (f Figure) Text() string {
+	if f.IsZero() {
+		return ""
+	}
+	return f.value.String()
+}
+
+// String returns value and unit, such as "81.25 A"; "" for the zero Figure.
+func (f Figure) String() string {
+	if f.IsZero() {
+		return ""
+	}
+	return withUnit(f.value, f.unit)
+}
+
+// How says in one line how the figure came about, such as
+// "full-load current 65 A × 125 %".
+func (f Figure) How() string {
+	var b strings.Builder
+	join := func(word string) {
+		for i, g := range f.of {
+			if i > 0 {
+				b.WriteString(word)
+			}
+			if g.unit == Ampere || g.note != "" || g.op == Assumed {
+				b.WriteString(g.name + " ")
+			}
+			b.WriteString(g.String())
+		}
+	}
+	switch f.op {
+	case Given:
+		b.WriteString("as given")
+	case Assumed:
+		b.WriteString("assumed")
+		if len(f.of) > 0 {
+			b.WriteString(": ")
+			join(", ")
+		}
+	case Tabulated:
+		b.WriteString("from the table")
+	case Stated:
+		b.WriteString("as the rule says")
+	case Product:
+		join(" × ")
+	case Sum:
+		join(" + ")
+	case QuotientUp, QuotientDown:
+		join(" ÷ ")
+	case Largest:
+		b.WriteString("the largest of ")
+		join(", ")
+	case Smallest:
+		b.WriteString("the smallest of ")
+		join(", ")
+	case NextUp:
+		b.WriteString("the first standard rating at or above ")
+		join("")
+	case NextDown:
+		b.WriteString("the highest standard rating not above ")
+		join("")
+	case AtLeast:
+		join(", ")
+	}
+	if f.note != "" {
+		b.WriteString(", " + f.note)
+	}
+	return b.String()
+}
+
+// MarshalJSON writes name, value (a string, so that no reader rounds it), unit,
+// op, how and the citations.
+func (f Figure) MarshalJSON() ([]byte, error) {
+	if f.IsZero() {
+		return []byte("null"), nil
+	}
+	return json.Marshal(struct {
+		Name  string     `json:"name"`
+		Value string     `json:"value"`
+		Unit  Unit       `json:"unit,omitzero"`
+		Op    Op         `json:"op"`
+		How   string     `json:"how"`
+		Cites []Citation `json:"cites,omitempty"`
+	}{f.name, f.Text(), f.unit, f.op, f.How(), f.Citations()})
+}

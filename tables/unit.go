@@ -1,0 +1,30 @@
+package tables
+
+// A Unit is the unit of a [Figure].
+type Unit uint8
+
+// The units. The zero Unit is a plain number.
+const (
+	Plain Unit = iota
+	Ampere
+	Volt
+	Percent
+	Horsepower
+	Kilowatt
+	Celsius
+	KVAPerHorsepower
+	Conductors
+)
+
+var unitSymbols = [...]string{"", "A", "V", "%", "hp", "kW", "°C", "kVA/hp", "conductors"}
+
+// String returns the unit's symbol, "" for a plain number.
+func (u Unit) String() string {
+	if int(u) < len(unitSymbols) {
+		return unitSymbols[u]
+	}
+	return ""
+}
+
+// MarshalText is [Unit.String].
+func (u Unit) MarshalText() ([]byte, error) { return []byte(u.String()), nil }
