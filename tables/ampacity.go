@@ -124,6 +124,26 @@ func (t AmpacityTable) Ampacity(s Size, column int) Figure {
 	return Figure{}
 }
 
+// AtLeast returns the smallest size, of those from least to most, whose ampacity
+// in that column is at or above need; 0 if there is none.
+func (t AmpacityTable) AtLeast(need Figure, column int, least, most Size) Size {
+	want, col := need.value.HundredthsUp(), -1
+	for i, c := range t.columns {
+		if c == column {
+			col = i
+		}
+	}
+	if col < 0 {
+		return 0
+	}
+	for s := least; s <= most && int(s) < len(t.cells); s++ {
+		if cells := t.cells[s]; cells != nil && cells[col] >= want {
+			return s
+		}
+	}
+	return 0
+}
+
 // Citation returns the table's citation.
 func (t AmpacityTable) Citation() Citation { return t.rule.In(t.edition) }
 

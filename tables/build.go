@@ -83,17 +83,12 @@ func RaisedTo(name string, e Edition, rule *Rule, f, least Figure, note string) 
 	return g
 }
 
-// As returns f under another name and rule: the same value, put to a use that
-// the rule decides.
+// As returns f under another name, as the value that a rule takes for a purpose.
 func (f Figure) As(name string, e Edition, rule *Rule) Figure {
 	if f.IsZero() {
 		return f
 	}
-	f.name, f.edition, f.rule = name, e, rule
-	if rule != nil {
-		f.mark = max(f.mark, rule.Mark)
-	}
-	return f
+	return newFigure(name, Taken, e, rule, f.value, f.unit, f)
 }
 
 // StandIn returns f as an assumed value of another name: it stands in for what
@@ -106,4 +101,32 @@ func (f Figure) StandIn(name string, e Edition, rule *Rule) Figure {
 func (f Figure) WithNote(note string) Figure {
 	f.note = note
 	return f
+}
+
+// QuotientOf returns dividend ÷ divisors, rounded up to a hundredth, in the unit
+// of the dividend. Percents count as hundredths. A divisor must not be 0.
+func QuotientOf(name string, e Edition, rule *Rule, dividend Figure, divisors ...Figure) Figure {
+	under := exact.Int(1)
+	for _, d := range divisors {
+		under = under.Mul(d.value)
+		if d.unit == Percent {
+			under = under.Mul(exact.New(1, 2))
+		}
+	}
+	of := append([]Figure{dividend}, divisors...)
+	return newFigure(name, QuotientUp, e, rule, dividend.value.DivUp(under, 2), dividend.unit, of...).WithNote("rounded up to 0.01")
+}
+
+// Whole returns a whole number as a figure: a count that the caller chose or
+// that follows from the circuit.
+func Whole(name string, unit Unit, n int) Figure {
+	return newFigure(name, Given, 0, nil, exact.Int(int64(n)), unit)
+}
+
+// IsOne reports a factor of 1 or 100 %, which changes nothing.
+func (f Figure) IsOne() bool {
+	if f.unit == Percent {
+		return f.value.Cmp(exact.Int(100)) == 0
+	}
+	return f.value.Cmp(exact.Int(1)) == 0
 }

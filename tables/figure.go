@@ -19,6 +19,7 @@ const (
 	Assumed                // a default, or a stand-in that a caution tells of
 	Tabulated              // read from a table, at the place that Note names
 	Stated                 // printed in the rule itself
+	Taken                  // the operand, as the rule takes it for a purpose
 	Product                // of the operands; percents count as hundredths
 	Sum                    // of the operands
 	QuotientUp             // first operand ÷ the others, rounded up
@@ -31,7 +32,7 @@ const (
 )
 
 var opTexts = [...]string{
-	"given", "assumed", "tabulated", "stated", "product", "sum", "quotient_rounded_up", "quotient_rounded_down",
+	"given", "assumed", "tabulated", "stated", "taken", "product", "sum", "quotient_rounded_up", "quotient_rounded_down",
 	"largest", "smallest", "next_standard_up", "next_standard_down", "at_least",
 }
 
@@ -102,17 +103,22 @@ func (f Figure) Citations() []Citation {
 // table and those of its operands.
 func (f Figure) Mark() Mark { return f.mark }
 
-// Weakest returns the citations of f and its operands whose own mark is C.
-func (f Figure) weakest(yield func(Citation)) {
+// FromMemory returns the citations of mark C that the figure rests on, each
+// once: what nobody has yet held against a readable copy.
+func (f Figure) FromMemory() []Citation {
 	if f.mark != MarkC {
-		return
+		return nil
 	}
-	if f.rule != nil && f.rule.Mark == MarkC {
-		yield(f.Citation())
-	}
-	for i := range f.of {
-		f.of[i].weakest(yield)
-	}
+	var all []Citation
+	f.walk(func(g Figure) {
+		if g.rule == nil || g.rule.Mark != MarkC {
+			return
+		}
+		if c := g.Citation(); !slices.Contains(all, c) {
+			all = append(all, c)
+		}
+	})
+	return all
 }
 
 func (f Figure) walk(visit func(Figure)) {
@@ -142,58 +148,64 @@ func (f Figure) String() string {
 }
 
 // How says in one line how the figure came about, such as
-// "full-load current 65 A × 125 %".
+// "design current 65 A × 125 %".
 func (f Figure) How() string {
 	var b strings.Builder
-	join := func(word string) {
-		for i, g := range f.of {
+	list := func(before, between string, of []Figure) {
+		b.WriteString(before)
+		for i, g := range of {
 			if i > 0 {
-				b.WriteString(word)
+				b.WriteString(between)
 			}
-			if g.unit == Ampere || g.note != "" || g.op == Assumed {
-				b.WriteString(g.name + " ")
-			}
-			b.WriteString(g.String())
+			b.WriteString(g.asOperand())
 		}
 	}
 	switch f.op {
 	case Given:
 		b.WriteString("as given")
 	case Assumed:
-		b.WriteString("assumed")
-		if len(f.of) > 0 {
-			b.WriteString(": ")
-			join(", ")
-		}
+		list("assumed from ", ", ", f.of)
 	case Tabulated:
 		b.WriteString("from the table")
 	case Stated:
 		b.WriteString("as the rule says")
+	case Taken:
+		list("the ", "", f.of)
 	case Product:
-		join(" × ")
+		list("", " × ", f.of)
 	case Sum:
-		join(" + ")
+		list("", " + ", f.of)
 	case QuotientUp, QuotientDown:
-		join(" ÷ ")
+		list("", " ÷ ", f.of)
 	case Largest:
-		b.WriteString("the largest of ")
-		join(", ")
+		list("the largest of ", ", ", f.of)
 	case Smallest:
-		b.WriteString("the smallest of ")
-		join(", ")
+		list("the smallest of ", ", ", f.of)
 	case NextUp:
-		b.WriteString("the first standard rating at or above ")
-		join("")
+		list("the first standard rating at or above ", "", f.of[:1])
 	case NextDown:
-		b.WriteString("the highest standard rating not above ")
-		join("")
+		list("the highest standard rating not above ", "", f.of[:1])
 	case AtLeast:
-		join(", ")
+		list("raised from ", ", ", f.of)
 	}
 	if f.note != "" {
 		b.WriteString(", " + f.note)
 	}
 	return b.String()
+}
+
+// asOperand words a figure inside of another's How: currents and temperatures
+// by name, percents and factors by what they are for.
+func (f Figure) asOperand() string {
+	switch {
+	case f.unit == Percent && f.note != "":
+		return f.String() + " (" + f.note + ")"
+	case f.unit == Plain && f.op == Tabulated:
+		return f.String() + " (" + f.name + ")"
+	case f.unit == Percent || f.unit == Plain || f.unit == KVAPerHorsepower:
+		return f.String()
+	}
+	return f.name + " " + f.String()
 }
 
 // MarshalJSON writes name, value (a string, so that no reader rounds it), unit,

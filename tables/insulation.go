@@ -108,7 +108,7 @@ func loadInsulationsNEC(path string, rule *Rule) func() *insulationTable {
 		}
 		t := &insulationTable{rule: rule, byName: make(map[string]int)}
 		for row, cells := range g.Rows {
-			ins := Insulation{Type: cells[0], Note: cells[7]}
+			ins := Insulation{Type: cells[0], Note: condition(cells[7])}
 			for i := range locationCount {
 				if ins.Celsius[i], err = g.Int(row, 2+int(i), 0); err != nil {
 					return nil, err
@@ -127,6 +127,14 @@ func loadInsulationsNEC(path string, rule *Rule) func() *insulationTable {
 		}
 		return t, nil
 	})
+}
+
+// condition drops from a note what is a remark on the transcription.
+func condition(note string) string {
+	for _, remark := range []string{"table lists dry and wet; damp implied", "damp implied", "dual rating"} {
+		note = strings.TrimPrefix(strings.TrimPrefix(note, remark), "; ")
+	}
+	return note
 }
 
 // loadInsulationsCEC reads one rated temperature and the conditions of use.

@@ -43,7 +43,7 @@ func (e Edition) FullLoadCurrent(t MotorTable, p Power, volts int) (Figure, erro
 	if err != nil {
 		return Figure{}, err
 	}
-	return m.figure("full-load current", e, p, volts)
+	return m.figure("table current", e, p, volts)
 }
 
 // LockedRotorCurrent returns the locked-rotor current by which the NEC chooses
@@ -54,7 +54,7 @@ func (e Edition) LockedRotorCurrent(phases int, p Power, volts int) (Figure, err
 	if err != nil {
 		return Figure{}, err
 	}
-	return m.figure("locked-rotor current", e, p, volts)
+	return m.figure("table locked-rotor current", e, p, volts)
 }
 
 // PowerAtOrAbove returns the least power whose table current at that voltage is

@@ -111,6 +111,14 @@ func (s Size) String() string {
 	return s.Name() + " AWG"
 }
 
+// Smaller returns the next smaller size of the series of s, 0 if s is the smallest.
+func (s Size) Smaller() Size {
+	if !s.IsValid() || s == metricBase || s == 1 {
+		return 0
+	}
+	return s - 1
+}
+
 // Area returns the cross-section in mm²: for AWG and kcmil sizes that of NFPA
 // 70, Chapter 9 Table 8; 0 for the zero Size.
 func (s Size) Area() decimal.Decimal {

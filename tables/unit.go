@@ -13,10 +13,10 @@ const (
 	Kilowatt
 	Celsius
 	KVAPerHorsepower
-	Conductors
+	Metre
 )
 
-var unitSymbols = [...]string{"", "A", "V", "%", "hp", "kW", "°C", "kVA/hp", "conductors"}
+var unitSymbols = [...]string{"", "A", "V", "%", "hp", "kW", "°C", "kVA/hp", "m"}
 
 // String returns the unit's symbol, "" for a plain number.
 func (u Unit) String() string {

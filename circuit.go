@@ -1,0 +1,101 @@
+package motorcircuit
+
+import (
+	"errors"
+	"strconv"
+
+	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/protection"
+	"example.org/motorcircuit/tables"
+)
+
+// A Circuit is the branch circuit of one motor, as a designer knows it. Edition
+// and the motor's kind, power and voltage are required; every other field has a
+// default that its comment names and the result tells of.
+type Circuit struct {
+	Tag     string           `json:"tag,omitzero"`    // the caller's name for the circuit, carried through
+	Edition tables.Edition   `json:"edition"`         // the code in force
+	Motor   motor.Motor      `json:"motor"`           // the motor and its nameplate
+	Device  tables.Device    `json:"device,omitzero"` // short-circuit device; zero takes a time-delay fuse, which has the lowest ceilings
+	Wiring  conductor.Wiring `json:"wiring,omitzero"` // how the circuit is run
+}
+
+// MaxVolts is the highest motor voltage that [Size] takes, in volts: above it
+// other parts of the codes hold.
+const MaxVolts = 1000
+
+// Validate reports every field that cannot stand, joined: each error is a
+// [*tables.InputError].
+func (c Circuit) Validate() error {
+	if err := c.Edition.Check(); err != nil {
+		return errors.Join(err, c.Motor.Validate())
+	}
+	faults := []error{c.Motor.Validate(), c.Wiring.Validate(c.Edition)}
+	if c.Motor.Voltage > MaxVolts {
+		faults = append(faults, &tables.InputError{Field: "motor.voltage", Value: strconv.Itoa(c.Motor.Voltage), Want: "1000 V or less: motors of higher voltage fall under other parts of the code"})
+	}
+	if c.Device != 0 && !c.Device.IsValid() {
+		faults = append(faults, &tables.InputError{Field: "device", Value: strconv.Itoa(int(c.Device)), Want: "a kind of short-circuit device"})
+	}
+	return errors.Join(faults...)
+}
+
+// Size works out the branch circuit of one motor. All faults of the input come
+// back together, joined; [errors.As] finds each: [*tables.InputError] for a
+// field that cannot stand, [*tables.NotTabulatedError] for what the code does
+// not print, [*tables.NoSizeError] for a requirement that no size meets. With an
+// error comes the zero Result.
+func Size(c Circuit) (Result, error) {
+	if err := c.Validate(); err != nil {
+		return Result{}, err
+	}
+	e, m := c.Edition, c.Motor
+	device := c.Device
+	if device == 0 {
+		device = protection.TimeDelayFuse
+	}
+	d, err := m.Demand(e)
+	if err != nil {
+		return Result{}, err
+	}
+	r := Result{Circuit: c, Demand: d}
+	var faults []error
+	note := func(err error) {
+		if err != nil {
+			faults = append(faults, err)
+		}
+	}
+	note(r.conductors(e, c, d))
+	r.Overload, err = protection.SizeOverload(e, m, d)
+	note(err)
+	r.ShortCircuit, err = protection.SizeShortCircuit(e, device, m, d)
+	note(err)
+	if len(faults) > 0 {
+		return Result{}, errors.Join(faults...)
+	}
+	r.Disconnect = protection.SizeDisconnect(e, m, d)
+	r.Controller = protection.SizeController(e, m, d)
+	r.Cautions = r.cautions()
+	return r, nil
+}
+
+// conductors selects the branch-circuit, motor-supply and secondary conductors.
+func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
+	load := conductor.Load{Ampacity: d.Branch, Count: c.Motor.LineConductors(), Motor75: c.Motor.IsDesignBCD()}
+	var faults [3]error
+	r.Branch, faults[0] = c.Wiring.Select(e, load)
+	if !d.Supply.IsZero() {
+		load.Ampacity, load.Count = d.Supply, c.Motor.SupplyConductors()
+		if e.Code() == tables.CEC {
+			n := c.Motor.Nameplate
+			r.MotorSupply, faults[1] = c.Wiring.SelectMotorSupply(e, load, conductor.MotorEnd{InsulationClass: n.InsulationClass, NonVentilated: n.NonVentilated, Power: d.Horsepower})
+		} else {
+			r.MotorSupply, faults[1] = c.Wiring.Select(e, load)
+		}
+	}
+	if !d.Secondary.IsZero() {
+		r.Secondary, faults[2] = c.Wiring.Select(e, conductor.Load{Ampacity: d.Secondary, Count: 3})
+	}
+	return errors.Join(faults[:]...)
+}

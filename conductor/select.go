@@ -1,0 +1,216 @@
+package conductor
+
+import (
+	"strconv"
+
+	"example.org/motorcircuit/tables"
+)
+
+// A Load is what a run of conductors is asked to carry.
+type Load struct {
+	Ampacity tables.Figure // least ampacity
+	Count    int           // current-carrying conductors of the circuit itself
+	Motor75  bool          // ends at a motor marked Design B, C or D, which NEC 110.14(C)(1)(a)(4) takes at 75 °C
+}
+
+// A Selection is the conductors chosen for a load, and why.
+type Selection struct {
+	Required    tables.Figure   `json:"required"` // least ampacity asked for
+	Size        tables.Size     `json:"size"`
+	Sets        int             `json:"sets"` // conductors in parallel for each phase, 1 for none
+	Material    tables.Material `json:"material"`
+	Insulation  string          `json:"insulation"` // designation of the insulation
+	Location    tables.Location `json:"location"`
+	Run         tables.Run      `json:"run"`
+	Termination tables.Figure   `json:"termination"`           // temperature that the terminals allow, °C
+	Ambient     tables.Figure   `json:"ambient_factor"`        // factor for ambient air
+	Together    tables.Figure   `json:"together_factor"`       // factor or percent for conductors together
+	Need        tables.Figure   `json:"least_table_ampacity"`  // of one conductor, before the factors
+	Ampacity    tables.Figure   `json:"ampacity"`              // usable ampacity of all sets
+	Smaller     Rejected        `json:"next_smaller,omitzero"` // the next smaller size and why it fails
+
+	SmallLimit  tables.Figure    `json:"small_conductor_limit,omitzero"` // device limit of a small conductor outside of motor circuits, told but not applied
+	LeastRating tables.Figure    `json:"least_insulation,omitzero"`      // least insulation temperature at a motor's terminal box, where the code asks for one
+	Cautions    []tables.Caution `json:"-"`
+}
+
+// A Rejected is a size that does not do.
+type Rejected struct {
+	Size     tables.Size     `json:"size"`
+	Ampacity tables.Figure   `json:"ampacity,omitzero"` // its usable ampacity, absent if it fails for another reason
+	Why      string          `json:"why"`
+	Cite     tables.Citation `json:"cite,omitzero"`
+}
+
+// IsZero reports whether nothing was selected.
+func (s Selection) IsZero() bool { return s.Size == 0 }
+
+// Select chooses the smallest conductors of a wiring that carry the load: one
+// for each phase or, where no single one does, the fewest in parallel. Errors
+// are [*tables.InputError], [*tables.NotTabulatedError] and
+// [*tables.NoSizeError].
+func (w Wiring) Select(e tables.Edition, l Load) (Selection, error) {
+	if err := w.Validate(e); err != nil {
+		return Selection{}, err
+	}
+	ins, err := w.insulation(e)
+	if err != nil {
+		return Selection{}, err
+	}
+	r := rulesOf(e)
+	s := r.start(w, l, ins)
+	s.Termination = r.termination(e, w, l, ins.celsius)
+	return r.choose(e, w, l, ins, s, r.columns(w, ins.celsius, celsiusOf(s.Termination)))
+}
+
+// start returns a selection with what is known before a size is.
+func (r *rules) start(w Wiring, l Load, ins insulation) Selection {
+	s := Selection{Required: l.Ampacity, Material: w.Material, Insulation: ins.Type, Location: w.Location, Run: w.Run}
+	if w.Insulation == "" {
+		s.Cautions = append(s.Cautions, tables.Caution{Text: r.defaultText, Cite: ins.Citation})
+	}
+	if ins.Note != "" && (w.Insulation != "" || w.Location != tables.Dry) {
+		s.Cautions = append(s.Cautions, tables.Caution{Text: ins.Type + ": " + ins.Note, Cite: ins.Citation})
+	}
+	return s
+}
+
+// columns are the columns of the ampacity table that hold together: the one
+// that the factors apply to, and the one that holds uncorrected.
+type columns struct{ corrected, terminal int }
+
+// choose finds the smallest size for which the corrected ampacity and the
+// uncorrected one of the termination both carry the load.
+func (r *rules) choose(e tables.Edition, w Wiring, l Load, ins insulation, s Selection, cols columns) (Selection, error) {
+	run, err := r.corrections(e, w, l, ins, &s)
+	if err != nil {
+		return Selection{}, err
+	}
+	table, err := e.Ampacities(run, w.Material)
+	if err != nil {
+		return Selection{}, err
+	}
+	// Terminals go by the table for raceways, also where the run is in free air.
+	terminal, err := e.Ampacities(r.terminalRun(run), w.Material)
+	if err != nil {
+		return Selection{}, err
+	}
+	c := choice{e: e, w: w, r: r, s: &s, table: table, terminal: terminal,
+		cols: columns{table.Column(cols.corrected), terminal.Column(cols.terminal)}, most: ins.Most}
+	least := max(r.least[w.Material], ins.Least)
+	first, last := 1, MaxSets
+	if w.Sets > 0 {
+		first, last = w.Sets, w.Sets
+	}
+	for sets := first; sets <= last; sets++ {
+		from := least
+		if sets > 1 {
+			from = max(least, leastParallel)
+		}
+		if size := c.smallest(sets, from); size != 0 {
+			c.finish(size, sets, from)
+			return s, nil
+		}
+	}
+	return Selection{}, &tables.NoSizeError{Field: "wiring", Need: l.Ampacity, Cite: table.Citation(),
+		Constraint: "no " + ins.Type + " " + w.Material.String() + " conductor up to " + ins.Most.String() + " carries it in " + setsText(first, last)}
+}
+
+func setsText(first, last int) string {
+	if first == last {
+		return strconv.Itoa(first) + " in parallel"
+	}
+	return "up to " + strconv.Itoa(last) + " in parallel"
+}
+
+// A choice is a search under way.
+type choice struct {
+	e               tables.Edition
+	w               Wiring
+	r               *rules
+	s               *Selection
+	table, terminal tables.AmpacityTable
+	cols            columns
+	most            tables.Size
+}
+
+// smallest returns the smallest size from the given one that carries the load in
+// so many sets, 0 if none does.
+func (c *choice) smallest(sets int, from tables.Size) tables.Size {
+	s := c.s
+	need := s.Required
+	divisors := c.factors(sets)
+	if len(divisors) > 0 {
+		need = tables.QuotientOf("least table ampacity of one conductor", c.e, &c.r.correction, s.Required, divisors...)
+	}
+	s.Need = need
+	size := c.table.AtLeast(need, c.cols.corrected, from, c.most)
+	if size == 0 || c.cols.terminal == 0 {
+		return size
+	}
+	at := s.Required
+	if sets > 1 {
+		at = tables.QuotientOf("ampacity of one conductor at its termination", c.e, &c.r.parallel, s.Required, setsFigure(sets))
+	}
+	return c.terminal.AtLeast(at, c.cols.terminal, size, c.most)
+}
+
+func setsFigure(sets int) tables.Figure { return tables.Whole("sets in parallel", tables.Plain, sets) }
+
+// factors returns what an ampacity is multiplied by, leaving out factors of one.
+func (c *choice) factors(sets int) []tables.Figure {
+	var f []tables.Figure
+	if !c.s.Ambient.IsOne() {
+		f = append(f, c.s.Ambient)
+	}
+	if !c.s.Together.IsOne() {
+		f = append(f, c.s.Together)
+	}
+	if sets > 1 {
+		f = append(f, setsFigure(sets))
+	}
+	return f
+}
+
+// usable returns the ampacity of a size in so many sets: the corrected one, or
+// that of its termination if it is less.
+func (c *choice) usable(size tables.Size, sets int) tables.Figure {
+	corrected := c.table.Ampacity(size, c.cols.corrected)
+	if f := c.factors(sets); len(f) > 0 {
+		corrected = tables.ProductOf("corrected ampacity", c.e, &c.r.correction, append([]tables.Figure{corrected}, f...)...)
+	}
+	if c.cols.terminal == 0 {
+		return corrected
+	}
+	terminal := c.terminal.Ampacity(size, c.cols.terminal)
+	if sets > 1 {
+		terminal = tables.ProductOf("ampacity at the termination", c.e, &c.r.parallel, terminal, setsFigure(sets))
+	}
+	if c.cols.terminal == c.cols.corrected && corrected.Cmp(terminal) <= 0 {
+		return corrected
+	}
+	return tables.SmallestOf("usable ampacity", c.e, &c.r.terminalRule, corrected, terminal)
+}
+
+// finish fills in the chosen size and tells why the next smaller one fails.
+func (c *choice) finish(size tables.Size, sets int, from tables.Size) {
+	s := c.s
+	s.Size, s.Sets = size, sets
+	s.Ampacity = c.usable(size, sets)
+	s.SmallLimit = c.e.SmallConductorLimit(s.Material, size)
+	if smaller := size.Smaller(); smaller >= from {
+		s.Smaller = Rejected{Size: smaller, Ampacity: c.usable(smaller, sets), Why: "carries less than is asked for"}
+	} else if rule := &c.r.leastRule; smaller != 0 {
+		why := "below the smallest size allowed"
+		if sets > 1 {
+			rule, why = &c.r.parallel, "too small to be run in parallel"
+		}
+		s.Smaller = Rejected{Size: smaller, Why: why, Cite: rule.In(c.e)}
+	}
+	if sets > 1 {
+		s.Cautions = append(s.Cautions, tables.Caution{Text: "conductors in parallel: each set in a raceway of its own, all of one length, material, size, insulation and way of ending", Cite: c.r.parallel.In(c.e)})
+	}
+	c.r.afterwards(c.e, c.w, s)
+}
+
+func celsiusOf(f tables.Figure) int { return int(f.Value().IntPart()) }

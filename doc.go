@@ -1,0 +1,22 @@
+// Package motorcircuit sizes electric-motor branch circuits under the
+// electrical code in force, and shows the reason for every number.
+//
+// Fill a [Circuit] and call [Size]. The [Result] holds the design currents, the
+// conductors, the overload setting, the short-circuit device, the
+// disconnecting means and the controller; each number is a [tables.Figure] that
+// knows how it was worked out and which rule or table decided it. Printed, a
+// result is a derivation that an inspector can follow; as JSON, it feeds other
+// software.
+//
+// Editions covered: NFPA 70 (NEC) of 2017, 2020 and 2023; CSA C22.1 (CEC, Part
+// I) of 2021 and 2024. What a code does not tabulate is refused, never guessed.
+//
+// The packages below do each step alone: tables (editions, citations, figures,
+// the published tables), motor (currents), conductor (sizes), protection
+// (overload, devices, switches). All functions are pure and safe for concurrent
+// use.
+//
+// The figures are an aid to design. They do not replace the printed code, local
+// amendments, equipment markings, the judgement of a licensed person or the
+// decision of the authority having jurisdiction.
+package motorcircuit

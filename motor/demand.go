@@ -1,0 +1,111 @@
+package motor
+
+import "example.org/motorcircuit/tables"
+
+// A Demand is what a motor asks of its circuit under one edition: the currents
+// that the code says to use and the least ampacities that follow from them. A
+// figure is absent where it does not apply.
+type Demand struct {
+	Table       tables.Figure `json:"table_current,omitzero"`    // full-load current of the code's table, where it is used
+	Design      tables.Figure `json:"design_current,omitzero"`   // current for conductors, switches and short-circuit devices
+	Overload    tables.Figure `json:"overload_current,omitzero"` // current that overload protection is set by
+	LockedRotor LockedRotor   `json:"locked_rotor,omitzero"`
+
+	Branch    tables.Figure `json:"branch_ampacity,omitzero"`       // least ampacity of the branch-circuit conductors
+	Supply    tables.Figure `json:"motor_supply_ampacity,omitzero"` // least ampacity of the run to the motor, where the code treats it apart
+	Secondary tables.Figure `json:"secondary_ampacity,omitzero"`    // least ampacity of wound-rotor secondary conductors, slip rings to controller
+
+	Input      tables.Figure `json:"drive_input_current,omitzero"` // rated input current of the drive that feeds the motor
+	Horsepower tables.Power  `json:"horsepower,omitzero"`          // rating by which switches and controllers are chosen; of a motor marked in amperes, the least table row that carries them
+
+	Cautions []tables.Caution `json:"-"`
+}
+
+// A LockedRotor is a motor's locked-rotor current and where it comes from. Low
+// and High are the ends of a code letter's range; otherwise they are equal.
+type LockedRotor struct {
+	Source Source        `json:"source,omitzero"`
+	Low    tables.Figure `json:"low,omitzero"`
+	High   tables.Figure `json:"high,omitzero"` // absent for code letter V, which has no upper end
+}
+
+// A Source tells where a locked-rotor current comes from.
+type Source uint8
+
+// The sources of a locked-rotor current.
+const (
+	NoSource        Source = iota // not known and not needed
+	FromNameplate                 // marked in amperes
+	FromCodeLetter                // the range of a marked code letter
+	FromTable                     // the NEC's tables for choosing switches
+	FromSixTimesFLC               // six times full-load current, where nothing else is known
+)
+
+var sourceTexts = [...]string{"", "nameplate", "code_letter", "table", "six_times_full_load"}
+
+// String returns the stable text form, "" for NoSource.
+func (s Source) String() string { return tables.TextOf(s, sourceTexts[:]) }
+
+// MarshalText is [Source.String].
+func (s Source) MarshalText() ([]byte, error) { return []byte(s.String()), nil }
+
+// Demand works out the currents and least ampacities of a motor under an
+// edition. Errors are [*tables.InputError] (all faults of the motor joined) and
+// [*tables.NotTabulatedError].
+func (m Motor) Demand(e tables.Edition) (Demand, error) {
+	if err := e.Check(); err != nil {
+		return Demand{}, err
+	}
+	if err := m.Validate(); err != nil {
+		return Demand{}, err
+	}
+	d := Demand{Input: m.Nameplate.DriveInput.Figure("rated input current of the drive")}
+	var err error
+	if e.Code() == tables.CEC {
+		err = d.cec(m, e)
+	} else {
+		err = d.nec(m, e)
+	}
+	if err != nil {
+		return Demand{}, err
+	}
+	return d, nil
+}
+
+// sixTimes is the locked-rotor current of a motor of which nothing else is known.
+func (d *Demand) sixTimes(e tables.Edition, rule *tables.Rule) LockedRotor {
+	six := tables.StatedFigure("times full-load current", e, rule, tables.Plain, 6, 0)
+	f := tables.ProductOf("locked-rotor current", e, rule, d.Design, six)
+	return LockedRotor{FromSixTimesFLC, f, f}
+}
+
+// marked is the locked-rotor current in amperes that the nameplate bears.
+func (n Nameplate) marked() LockedRotor {
+	f := n.LockedRotor.Figure("marked locked-rotor current")
+	return LockedRotor{FromNameplate, f, f}
+}
+
+func (d *Demand) caution(e tables.Edition, rule *tables.Rule, text string) {
+	d.Cautions = append(d.Cautions, tables.Caution{Text: text, Cite: rule.In(e)})
+}
+
+// percentOf returns percent × current.
+func percentOf(name string, e tables.Edition, rule *tables.Rule, current tables.Figure, percent, places int) tables.Figure {
+	return tables.ProductOf(name, e, rule, current, tables.StatedFigure("of the current", e, rule, tables.Percent, int64(percent), places))
+}
+
+// dutyAmpacity returns duty percent × current.
+func (m Motor) dutyAmpacity(name string, e tables.Edition, rule *tables.Rule, current tables.Figure) (tables.Figure, error) {
+	percent, err := e.DutyPercent(m.Duty.Kind, m.Duty.Minutes)
+	if err != nil {
+		return tables.Figure{}, err
+	}
+	return tables.ProductOf(name, e, rule, current, percent), nil
+}
+
+// The names of the least ampacities.
+const (
+	branchName    = "least ampacity of the branch-circuit conductors"
+	supplyName    = "least ampacity of the conductors to the motor"
+	secondaryName = "least ampacity of the secondary conductors"
+)

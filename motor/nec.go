@@ -1,0 +1,271 @@
+package motor
+
+import (
+	"strings"
+
+	"example.org/motorcircuit/tables"
+)
+
+// Rules of NFPA 70, Articles 430 and 440, for motor currents and least ampacities.
+var (
+	necTableCurrent = tables.Rule{Ref: "430.6(A)(1)"}
+	necNameplate    = tables.Rule{Ref: "430.6(A)(1)", Note: "nameplate current in place of the table"}
+	necBeyond       = tables.Rule{Ref: "430.6(A)(1)", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.6(A)(2)"}}, Mark: tables.MarkB, Note: "motor larger than the tables cover"}
+	necOverload     = tables.Rule{Ref: "430.6(A)(2)"}
+	necFan          = tables.Rule{Ref: "430.6(A) Exception No. 2"}
+	necAppliance    = tables.Rule{Ref: "430.6(A) Exception No. 3"}
+	necTorque       = tables.Rule{Ref: "430.6(B)"}
+	necSingle       = tables.Rule{Ref: "430.22"}
+	necWyeDelta     = tables.Rule{Ref: "430.22(C)"}
+	necPartWinding  = tables.Rule{Ref: "430.22(D)"}
+	necDuty         = tables.Rule{Ref: "430.22(E)"}
+	necSecondary    = tables.Rule{Ref: "430.23(A)"}
+	necSecondaryE   = tables.Rule{Ref: "430.23(B)"}
+	necRotor        = tables.Rule{Ref: "430.110(C)(3)"}
+	necSyncNote     = tables.Rule{Ref: "Table 430.250", Note: "note on power factor"}
+	necTwoPhase     = tables.Rule{Ref: "Table 430.249"}
+	necDriveInput   = tables.Rule{Ref: "430.122(A)"}
+	necDriveOutput  = tables.Rule{Ref: "430.22", Moved: []tables.Move{{From: tables.NEC2020, Ref: "430.122(B)"}}}
+	necCompressor   = tables.Rule{Ref: "440.6(A)"}
+	necCompressorC  = tables.Rule{Ref: "440.32"}
+	necCompressorOL = tables.Rule{Ref: "440.52(A)"}
+	necCompressorLR = tables.Rule{Ref: "440.12(C)"}
+)
+
+func (d *Demand) nec(m Motor, e tables.Edition) error {
+	if err := d.necDesign(m, e); err != nil {
+		return err
+	}
+	if err := d.necLockedRotor(m, e); err != nil {
+		return err
+	}
+	d.necHorsepower(m, e)
+	if m.PhaseCount() == 2 {
+		d.caution(e, &necTwoPhase, "the figures are for a four-wire two-phase circuit: the common conductor of a three-wire one carries 1.41 times the current")
+	}
+	return d.necAmpacities(m, e)
+}
+
+// necDesign chooses the current for conductors, switches and short-circuit
+// devices (the table's, with the exceptions of 430.6) and that for overload
+// (the nameplate's).
+func (d *Demand) necDesign(m Motor, e tables.Edition) error {
+	n := m.Nameplate
+	marked := n.Amperes.Figure("nameplate full-load current")
+	switch {
+	case m.Kind == Torque: // rated by locked-rotor current
+		if marked.IsZero() {
+			return needAmperes("the locked-rotor current marked on a torque motor", &necTorque, e)
+		}
+		d.Design = n.Amperes.Figure("nameplate locked-rotor current").As("design current", e, &necTorque)
+		d.Overload = d.Design.As("overload current", e, &necTorque)
+		return nil
+	case m.Kind == Hermetic:
+		if marked.IsZero() {
+			return needAmperes("the rated-load current marked on a hermetic motor-compressor", &necCompressor, e)
+		}
+		rated := n.Amperes.Figure("rated-load current")
+		d.Design = rated.As("design current", e, &necCompressor)
+		if branch := n.BranchSelection.Figure("branch-circuit selection current"); !branch.IsZero() {
+			d.Design = tables.LargestOf("design current", e, &necCompressor, rated, branch)
+		}
+		d.Overload = rated.As("overload current", e, &necCompressorOL)
+		return nil
+	}
+	why, rule := m.necByNameplate()
+	switch {
+	case why != "" && marked.IsZero():
+		return needAmperes("the nameplate current of "+why, rule, e)
+	case why != "":
+		d.Design = marked.As("design current", e, rule)
+	case m.Power.IsZero():
+		d.Design = marked.As("design current", e, &necNameplate)
+		d.caution(e, &necTableCurrent, "the motor is marked in amperes only: its horsepower is that of the first table row to carry them")
+	case !m.Power.IsHP() && !marked.IsZero():
+		d.Design = marked.As("design current", e, &necNameplate)
+		d.caution(e, &necTableCurrent, "the motor is marked in kilowatts, which the tables do not list: taken by its amperes, as a motor that is not marked in horsepower")
+	default:
+		if err := d.necFromTable(m, e, marked); err != nil {
+			return err
+		}
+	}
+	if marked.IsZero() {
+		d.Overload = d.Design.StandIn("overload current", e, &necOverload)
+		d.caution(e, &necOverload, "no nameplate current is given: the overload figures stand on the design current for pricing only and must be redone from the nameplate")
+	} else {
+		d.Overload = marked.As("overload current", e, &necOverload)
+	}
+	return nil
+}
+
+// necByNameplate tells why, if at all, 430.6 puts the nameplate in place of
+// the table for every purpose.
+func (m Motor) necByNameplate() (why string, rule *tables.Rule) {
+	n := m.Nameplate
+	switch {
+	case n.FanMotor:
+		return "a shaded-pole or permanent-split-capacitor fan motor", &necFan
+	case n.Appliance:
+		return "a listed motor-operated appliance", &necAppliance
+	case n.Multispeed:
+		return "a multispeed motor", &necNameplate
+	case n.HighTorque:
+		return "a high-torque motor", &necNameplate
+	case n.SpeedRPM > 0 && n.SpeedRPM < 1200 && m.Kind != DirectCurrent:
+		return "a motor built for less than 1200 r/min", &necNameplate
+	}
+	return "", nil
+}
+
+// necFromTable takes the table current; a motor larger than the table's column
+// goes by its nameplate.
+func (d *Demand) necFromTable(m Motor, e tables.Edition, marked tables.Figure) error {
+	table, err := e.FullLoadCurrent(m.table(), m.Power, m.Voltage)
+	if err != nil {
+		largest, noColumn := e.LargestPower(m.table(), m.Voltage)
+		if noColumn != nil || !m.Power.IsHP() || m.Power.Cmp(largest) <= 0 || marked.IsZero() {
+			return err
+		}
+		d.Design = marked.As("design current", e, &necBeyond)
+		if e < tables.NEC2023 {
+			d.caution(e, &necBeyond, "this edition does not say that a motor larger than its tables goes by the nameplate; taken as NEC-2023 says it")
+		}
+		return nil
+	}
+	d.Table = table
+	if m.Kind == Synchronous {
+		d.Table = d.synchronous(m, e, table, &necSyncNote)
+	}
+	d.Design = d.Table.As("design current", e, &necTableCurrent)
+	return nil
+}
+
+// synchronous multiplies the unity power factor entry of the table by 1.1 at
+// 0.9 and by 1.25 at 0.8, as the note of both codes' tables says.
+func (d *Demand) synchronous(m Motor, e tables.Edition, table tables.Figure, rule *tables.Rule) tables.Figure {
+	pf := m.Nameplate.PowerFactor
+	if pf.IsZero() {
+		pf = syncRatios[2]
+		d.caution(e, rule, "no power factor is given for the synchronous motor: 0.8 taken, the most current")
+	}
+	switch {
+	case pf.Equal(syncRatios[1]):
+		table = tables.ProductOf("table current", e, rule, table, tables.StatedFigure("at 0.9 power factor", e, rule, tables.Plain, 11, 1).WithNote("at 0.9 power factor"))
+	case pf.Equal(syncRatios[2]):
+		table = tables.ProductOf("table current", e, rule, table, tables.StatedFigure("at 0.8 power factor", e, rule, tables.Plain, 125, 2).WithNote("at 0.8 power factor"))
+	}
+	return table
+}
+
+// necLockedRotor takes the marked amperes, else the range of the code letter,
+// else the table for switches, else six times full-load current.
+func (d *Demand) necLockedRotor(m Motor, e tables.Edition) error {
+	n := m.Nameplate
+	switch {
+	case !n.LockedRotor.IsZero():
+		d.LockedRotor = n.marked()
+	case m.Kind == Torque:
+		d.LockedRotor = LockedRotor{FromNameplate, d.Design, d.Design}
+	case m.Kind == DirectCurrent:
+	case m.Kind == Hermetic:
+		d.LockedRotor = d.sixTimes(e, &necCompressorLR)
+	case n.CodeLetter != "" && m.Power.IsHP():
+		low, high, err := e.LockedRotorKVA(n.CodeLetter)
+		if err != nil {
+			return err
+		}
+		d.LockedRotor = LockedRotor{Source: FromCodeLetter, Low: e.LockedRotorOf(low, m.Power, m.Voltage, m.PhaseCount(), false)}
+		if !high.IsZero() {
+			d.LockedRotor.High = e.LockedRotorOf(high, m.Power, m.Voltage, m.PhaseCount(), true)
+		}
+	case strings.EqualFold(n.DesignLetter, "A"):
+		d.caution(e, &necRotor, "the locked-rotor tables do not hold for Design A motors: give the marked locked-rotor current or the code letter")
+	case m.Kind == SquirrelCage || m.Kind == SinglePhase:
+		if f, err := e.LockedRotorCurrent(m.PhaseCount(), m.Power, m.Voltage); err == nil {
+			d.LockedRotor = LockedRotor{FromTable, f, f}
+			return nil
+		}
+		d.LockedRotor = d.sixTimes(e, &necRotor)
+	default:
+		d.LockedRotor = d.sixTimes(e, &necRotor)
+	}
+	return nil
+}
+
+// necHorsepower finds the horsepower by which switches are chosen. A hermetic
+// motor-compressor takes the larger of its equivalents by rated-load and by
+// locked-rotor current.
+func (d *Demand) necHorsepower(m Motor, e tables.Edition) {
+	if m.Power.IsHP() && m.Kind != Hermetic {
+		d.Horsepower = m.Power
+		return
+	}
+	if m.Kind == Torque {
+		return
+	}
+	p, err := e.PowerAtOrAbove(m.table(), m.Voltage, d.Design)
+	if err == nil && m.Kind == Hermetic {
+		var rotor tables.Power
+		if rotor, err = e.PowerAtOrAboveLockedRotor(m.PhaseCount(), m.Voltage, d.LockedRotor.High); rotor.Cmp(p) > 0 {
+			p = rotor
+		}
+	}
+	if err != nil {
+		d.caution(e, &necTableCurrent, "no horsepower follows from the motor's amperes: the tables have no row for them at this voltage")
+		return
+	}
+	d.Horsepower = p
+}
+
+func (d *Demand) necAmpacities(m Motor, e tables.Edition) error {
+	base := &necSingle
+	if m.Kind == Hermetic {
+		base = &necCompressorC
+	}
+	if m.Duty.Kind == Continuous {
+		d.Branch = percentOf(branchName, e, base, d.Design, 125, 0)
+	} else {
+		var err error
+		if d.Branch, err = m.dutyAmpacity(branchName, e, &necDuty, d.Overload); err != nil {
+			return err
+		}
+	}
+	switch m.Starting {
+	case WyeDelta:
+		rule := &necWyeDelta
+		if m.Kind == Hermetic {
+			rule = &necCompressorC
+		}
+		d.Supply = d.share(m, e, rule, 720, 58)
+	case PartWinding:
+		d.Supply = d.share(m, e, &necPartWinding, 625, 50)
+	case Drive:
+		d.Supply = d.Branch.As(supplyName, e, &necDriveOutput)
+		d.Branch = percentOf(branchName, e, &necDriveInput, d.Input, 125, 0)
+	}
+	if secondary := m.Nameplate.Secondary.Figure("secondary full-load current"); !secondary.IsZero() {
+		if m.Duty.Kind == Continuous {
+			d.Secondary = percentOf(secondaryName, e, &necSecondary, secondary, 125, 0)
+			return nil
+		}
+		var err error
+		d.Secondary, err = m.dutyAmpacity(secondaryName, e, &necSecondaryE, secondary)
+		return err
+	}
+	return nil
+}
+
+// share returns the ampacity of the conductors between controller and motor
+// that carry a share of the motor's current: the rule's tenths of a percent of
+// full-load current for continuous duty, else that share of the ampacity for
+// the duty.
+func (d *Demand) share(m Motor, e tables.Edition, rule *tables.Rule, tenths, sharePercent int) tables.Figure {
+	if m.Duty.Kind != Continuous {
+		return percentOf(supplyName, e, rule, d.Branch, sharePercent, 0)
+	}
+	return percentOf(supplyName, e, rule, d.Design, tenths, 1)
+}
+
+func needAmperes(what string, rule *tables.Rule, e tables.Edition) error {
+	return &tables.InputError{Field: "motor.nameplate.amperes", Want: what, Cite: rule.In(e)}
+}

@@ -1,0 +1,102 @@
+package protection
+
+import (
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/tables"
+)
+
+// The kinds of branch-circuit short-circuit and ground-fault device. A
+// time-delay Class CC fuse counts as NonTimeDelayFuse.
+const (
+	NonTimeDelayFuse     = tables.NonTimeDelayFuse
+	TimeDelayFuse        = tables.TimeDelayFuse
+	InverseTimeBreaker   = tables.InverseTimeBreaker
+	InstantaneousBreaker = tables.InstantaneousBreaker
+)
+
+// A ShortCircuit is the branch-circuit short-circuit and ground-fault
+// protection of a motor. For an instantaneous-trip breaker the limits are
+// settings and there is no rating.
+type ShortCircuit struct {
+	Device        tables.Device    `json:"kind"`
+	Limit         tables.Figure    `json:"limit"`                  // calculated ceiling: percent times current
+	Rating        tables.Figure    `json:"rating,omitzero"`        // standard rating that the code lets stand
+	StartLimit    tables.Figure    `json:"start_limit,omitzero"`   // ceiling if the motor will not start
+	StartRating   tables.Figure    `json:"start_rating,omitzero"`  // standard rating under that ceiling
+	Instantaneous tables.Figure    `json:"instantaneous,omitzero"` // greatest instantaneous-trip setting, where the code limits it
+	Cautions      []tables.Caution `json:"-"`
+}
+
+// SizeShortCircuit works out the branch-circuit device of a motor. An unknown
+// kind of device is a [*tables.InputError]; a limit that no standard rating
+// meets is a [*tables.NoSizeError].
+func SizeShortCircuit(e tables.Edition, device tables.Device, m motor.Motor, d motor.Demand) (ShortCircuit, error) {
+	if !device.IsValid() {
+		return ShortCircuit{}, &tables.InputError{Field: "device", Value: device.String(), Want: "non_time_delay_fuse, time_delay_fuse, inverse_time_breaker or instantaneous_breaker"}
+	}
+	s := ShortCircuit{Device: device}
+	var err error
+	if e.Code() == tables.CEC {
+		err = s.cec(e, m, d)
+	} else {
+		err = s.nec(e, m, d)
+	}
+	if err != nil {
+		return ShortCircuit{}, err
+	}
+	return s, nil
+}
+
+func (s *ShortCircuit) caution(e tables.Edition, rule *tables.Rule, text string) {
+	s.Cautions = append(s.Cautions, tables.Caution{Text: text, Cite: rule.In(e)})
+}
+
+// The names of the device figures.
+const (
+	limitName         = "greatest short-circuit device"
+	ratingName        = "standard rating"
+	startLimitName    = "greatest short-circuit device if the motor will not start"
+	startRatingName   = "standard rating if the motor will not start"
+	instantaneousName = "greatest instantaneous-trip setting"
+	instantStartName  = "greatest instantaneous-trip setting if the motor will not start"
+)
+
+// motorType returns the row of the device tables that a motor stands in.
+func motorType(e tables.Edition, m motor.Motor) tables.MotorType {
+	switch {
+	case m.Kind == motor.DirectCurrent:
+		return tables.DirectCurrentType
+	case m.Kind == motor.WoundRotor:
+		return tables.WoundRotorType
+	case m.Kind == motor.Synchronous:
+		return tables.SynchronousType
+	case m.PhaseCount() == 1:
+		return tables.SinglePhaseType
+	case efficientDesignB(e, m.Nameplate):
+		return tables.EfficientCageType
+	}
+	return tables.CageType
+}
+
+// startLimit returns the ceiling if the motor will not start. Where the percent
+// falls for higher ratings, the class of ratings that its own percent reaches
+// holds, and otherwise the top of the class below.
+func startLimit(e tables.Edition, rule *tables.Rule, device tables.Device, current tables.Figure) tables.Figure {
+	var limit tables.Figure
+	for _, c := range e.StartCeilings(device, current) {
+		f := tables.ProductOf(startLimitName, e, rule, current, c.Percent)
+		if !c.Over.IsZero() && f.Cmp(c.Over) <= 0 {
+			continue
+		}
+		if !c.UpTo.IsZero() && f.Cmp(c.UpTo) > 0 {
+			f = tables.SmallestOf(startLimitName, e, rule, f, c.UpTo)
+		}
+		limit = f
+	}
+	return limit
+}
+
+// noRating reports a limit that no standard rating meets.
+func noRating(e tables.Edition, device tables.Device, limit tables.Figure) error {
+	return &tables.NoSizeError{Field: "device", Need: limit, Cite: limit.Citation(), Constraint: "no standard rating of a " + device.Name()}
+}

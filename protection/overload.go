@@ -1,0 +1,60 @@
+package protection
+
+import (
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/tables"
+)
+
+// An Overload is the running overload protection of a motor. Both limits are
+// ceilings: nothing is rounded up beyond them.
+type Overload struct {
+	Limit      tables.Figure    `json:"limit"`                      // greatest trip setting
+	StartLimit tables.Figure    `json:"start_limit,omitzero"`       // greatest setting if the motor will not start or carry its load; absent where the code has no second step
+	Protector  tables.Figure    `json:"thermal_protector,omitzero"` // greatest ultimate trip current of an integral thermal protector, where the motor has one (NEC)
+	Units      tables.Figure    `json:"units"`                      // number of overload units; its note says in which conductors
+	Cautions   []tables.Caution `json:"-"`
+}
+
+// SizeOverload works out the overload protection of a motor.
+func SizeOverload(e tables.Edition, m motor.Motor, d motor.Demand) (Overload, error) {
+	units, err := e.OverloadUnits(m.PhaseCount())
+	if err != nil {
+		return Overload{}, err
+	}
+	o := Overload{Units: units}
+	if e.Code() == tables.CEC {
+		o.cec(e, m, d)
+	} else {
+		o.nec(e, m, d)
+	}
+	return o, nil
+}
+
+func (o *Overload) caution(e tables.Edition, rule *tables.Rule, text string) {
+	o.Cautions = append(o.Cautions, tables.Caution{Text: text, Cite: rule.In(e)})
+}
+
+// The names of the overload figures.
+const (
+	overloadName      = "greatest overload setting"
+	overloadStartName = "greatest overload setting if the motor will not start"
+)
+
+// percentOf returns percent × current.
+func percentOf(name string, e tables.Edition, rule *tables.Rule, current tables.Figure, percent int, note string) tables.Figure {
+	p := tables.StatedFigure("of the current", e, rule, tables.Percent, int64(percent), 0)
+	if note != "" {
+		p = p.WithNote(note)
+	}
+	return tables.ProductOf(name, e, rule, current, p)
+}
+
+var (
+	servicePoint = motor.Factor("1.15")
+	risePoint    = motor.Celsius("40")
+)
+
+// highService reports a marked service factor of 1.15 or more.
+func highService(n motor.Nameplate) bool {
+	return !n.ServiceFactor.IsZero() && n.ServiceFactor.Cmp(servicePoint) >= 0
+}

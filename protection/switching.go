@@ -1,0 +1,44 @@
+package protection
+
+import (
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/tables"
+)
+
+// A Disconnect is the disconnecting means of a motor circuit: what its switch
+// must at least be rated.
+type Disconnect struct {
+	Amperes     tables.Figure    `json:"amperes"`               // least ampere rating
+	Horsepower  tables.Power     `json:"horsepower,omitzero"`   // least horsepower rating; zero where none follows from the code
+	LockedRotor tables.Figure    `json:"locked_rotor,omitzero"` // locked-rotor current that the switch must be able to break
+	Sight       tables.Figure    `json:"in_sight"`              // farthest that "in sight" reaches, in metres
+	Cautions    []tables.Caution `json:"-"`
+}
+
+// A Controller is the controller of a motor: what it must at least be rated.
+type Controller struct {
+	Horsepower  tables.Power     `json:"horsepower,omitzero"`         // least horsepower rating; zero where none follows from the code
+	Amperes     tables.Figure    `json:"amperes,omitzero"`            // least continuous rating, for motors that are not rated in horsepower
+	LockedRotor tables.Figure    `json:"locked_rotor,omitzero"`       // least locked-rotor rating, for a hermetic motor-compressor
+	GeneralUse  tables.Figure    `json:"general_use_switch,omitzero"` // least rating of a general-use switch that may serve instead; absent if none may
+	SnapSwitch  tables.Figure    `json:"snap_switch,omitzero"`        // least rating of an ac-only snap switch that may serve instead; absent if none may
+	Cautions    []tables.Caution `json:"-"`
+}
+
+// SizeDisconnect works out the least ratings of the disconnecting means.
+func SizeDisconnect(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
+	if e.Code() == tables.CEC {
+		return disconnectCEC(e, m, d)
+	}
+	return disconnectNEC(e, m, d)
+}
+
+// SizeController works out the least ratings of the controller.
+func SizeController(e tables.Edition, m motor.Motor, d motor.Demand) Controller {
+	if e.Code() == tables.CEC {
+		return controllerCEC(e, m, d)
+	}
+	return controllerNEC(e, m, d)
+}
+
+const disconnectName = "least ampere rating of the disconnecting means"

@@ -1,0 +1,167 @@
+package motorcircuit
+
+import (
+	"iter"
+	"slices"
+
+	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/protection"
+	"example.org/motorcircuit/tables"
+)
+
+// A Result is the branch circuit that [Size] works out. Every number in it is a
+// [tables.Figure], which tells how it came about; an absent figure or selection
+// does not apply to the circuit. Read in order, the figures are a derivation
+// that can be redone on paper.
+type Result struct {
+	Circuit      Circuit                 `json:"circuit"`               // the input
+	Demand       motor.Demand            `json:"demand"`                // currents and least ampacities
+	Branch       conductor.Selection     `json:"branch"`                // branch-circuit conductors
+	MotorSupply  conductor.Selection     `json:"motor_supply,omitzero"` // run to the motor, where the code treats it apart
+	Secondary    conductor.Selection     `json:"secondary,omitzero"`    // wound-rotor secondary conductors
+	Overload     protection.Overload     `json:"overload"`              // overload protection
+	ShortCircuit protection.ShortCircuit `json:"short_circuit_device"`  // short-circuit and ground-fault device
+	Disconnect   protection.Disconnect   `json:"disconnecting_means"`   // disconnecting means
+	Controller   protection.Controller   `json:"controller"`            // controller
+	Cautions     []tables.Caution        `json:"cautions"`              // assumptions, readings, limits; never empty
+}
+
+// A Section is a part of a derivation.
+type Section uint8
+
+// The sections of a derivation, in order.
+const (
+	Currents Section = iota
+	BranchConductors
+	MotorSupplyConductors
+	SecondaryConductors
+	OverloadProtection
+	ShortCircuitDevice
+	DisconnectingMeans
+	ControllerRating
+	sectionCount
+)
+
+var sectionNames = [...]string{
+	"Design currents", "Branch-circuit conductors", "Motor supply conductors", "Secondary conductors", "Overload protection",
+	"Short-circuit and ground-fault device", "Disconnecting means", "Controller",
+}
+
+// String returns the section's heading.
+func (s Section) String() string { return tables.TextOf(s, sectionNames[:]) }
+
+// Figures yields every figure of the result that is present, in the order of
+// the derivation, each with its section.
+func (r Result) Figures() iter.Seq2[Section, tables.Figure] {
+	return func(yield func(Section, tables.Figure) bool) {
+		for s := range sectionCount {
+			for _, f := range r.section(s) {
+				if !f.IsZero() && !yield(s, f) {
+					return
+				}
+			}
+		}
+	}
+}
+
+func (r *Result) section(s Section) []tables.Figure {
+	d := &r.Demand
+	switch s {
+	case Currents:
+		figures := []tables.Figure{d.Table, d.Design, d.Overload, d.Input, d.LockedRotor.Low, d.LockedRotor.High}
+		if d.LockedRotor.Source != motor.FromCodeLetter {
+			figures[4] = tables.Figure{} // one figure, not the ends of a range
+		}
+		return figures
+	case BranchConductors:
+		return selectionFigures(&r.Branch)
+	case MotorSupplyConductors:
+		return selectionFigures(&r.MotorSupply)
+	case SecondaryConductors:
+		return selectionFigures(&r.Secondary)
+	case OverloadProtection:
+		o := &r.Overload
+		return []tables.Figure{o.Limit, o.StartLimit, o.Protector, o.Units}
+	case ShortCircuitDevice:
+		x := &r.ShortCircuit
+		figures := []tables.Figure{x.Limit, x.Rating, x.StartLimit, x.StartRating, x.Instantaneous}
+		if x.Device == protection.InstantaneousBreaker {
+			figures[4] = tables.Figure{} // the same as the limit
+		}
+		return figures
+	case DisconnectingMeans:
+		x := &r.Disconnect
+		return []tables.Figure{x.Amperes, x.LockedRotor, x.Sight}
+	}
+	x := &r.Controller
+	return []tables.Figure{x.Amperes, x.LockedRotor, x.GeneralUse, x.SnapSwitch}
+}
+
+func selectionFigures(s *conductor.Selection) []tables.Figure {
+	if s.IsZero() {
+		return nil
+	}
+	figures := []tables.Figure{s.Required, s.LeastRating, s.Termination, s.Ambient, s.Together, s.Need, s.Ampacity, s.SmallLimit}
+	if s.Need.Cmp(s.Required) == 0 {
+		figures[5] = tables.Figure{} // nothing to correct
+	}
+	return figures
+}
+
+// The cautions that a circuit as such gives rise to.
+var (
+	standing       = tables.Caution{Text: "for design by or under a licensed person: the printed code in force, local amendments, equipment markings and the authority having jurisdiction decide"}
+	noDevice       = tables.Caution{Text: "no kind of short-circuit device is given: a time-delay fuse is taken, which has the lowest ceilings"}
+	noAmbient      = tables.Caution{Text: "no ambient is given: 30 °C is taken, the base of the ampacity tables"}
+	noTermination  = tables.Caution{Text: "the terminals are not marked: 60 °C is taken for circuits of 100 A or less and 75 °C above"}
+	motorMarked    = tables.Caution{Text: "the terminals are not marked: 75 °C is taken for a motor marked Design B, C or D, for which its other end must be suited too"}
+	fromMemoryText = "carried from memory and not yet held against a readable copy: check it before use"
+)
+
+// cautions gathers what each step had to say, then what the whole rests on;
+// each once, the standing caution last.
+func (r *Result) cautions() []tables.Caution {
+	list := make([]tables.Caution, 0, 16)
+	add := func(cautions ...tables.Caution) {
+		for _, c := range cautions {
+			if !slices.Contains(list, c) {
+				list = append(list, c)
+			}
+		}
+	}
+	c := &r.Circuit
+	if c.Device == 0 {
+		add(noDevice)
+	}
+	if c.Wiring.Ambient.IsZero() {
+		add(noAmbient)
+	}
+	if c.Wiring.Termination == 0 {
+		if c.Edition.Code() == tables.NEC && c.Motor.IsDesignBCD() {
+			add(motorMarked)
+		} else {
+			add(noTermination)
+		}
+	}
+	add(r.Demand.Cautions...)
+	add(r.Branch.Cautions...)
+	add(r.MotorSupply.Cautions...)
+	add(r.Secondary.Cautions...)
+	add(r.Overload.Cautions...)
+	add(r.ShortCircuit.Cautions...)
+	add(r.Disconnect.Cautions...)
+	add(r.Controller.Cautions...)
+	for s := range sectionCount {
+		for _, f := range r.section(s) {
+			for _, cite := range f.FromMemory() {
+				add(tables.Caution{Text: fromMemoryText, Cite: cite})
+			}
+		}
+	}
+	if gap := c.Edition.Gap(); gap != "" {
+		add(tables.Caution{Text: gap, Cite: tables.Citation{Edition: c.Edition, Ref: "edition"}})
+	}
+	add(standing)
+	return list
+}

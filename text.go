@@ -1,0 +1,178 @@
+package motorcircuit
+
+import (
+	"fmt"
+	"io"
+	"slices"
+	"strings"
+
+	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/tables"
+)
+
+// String returns the derivation as text: what was asked, each figure with how
+// it came about and the rule behind it, the choices made, and the cautions.
+func (r Result) String() string {
+	var b strings.Builder
+	r.write(&b)
+	return b.String()
+}
+
+// WriteTo writes the text of [Result.String].
+func (r Result) WriteTo(w io.Writer) (int64, error) {
+	n, err := io.WriteString(w, r.String())
+	return int64(n), err
+}
+
+func (r *Result) write(b *strings.Builder) {
+	c := &r.Circuit
+	fmt.Fprintf(b, "%s: %s, under %s\n", orDash(c.Tag), describe(r), c.Edition.Standard())
+	for s := range sectionCount {
+		lines := r.section(s)
+		chosen := r.chosen(s)
+		if len(lines) == 0 && chosen == "" {
+			continue
+		}
+		fmt.Fprintf(b, "\n%s", s)
+		if chosen != "" {
+			fmt.Fprintf(b, ": %s", chosen)
+		}
+		b.WriteByte('\n')
+		for _, f := range lines {
+			if !f.IsZero() {
+				fmt.Fprintf(b, "%12s  %s: %s %s\n", f, f.Name(), f.How(), refs(f))
+			}
+		}
+		b.WriteString(r.remark(s))
+	}
+	b.WriteString("\nCautions\n")
+	for _, caution := range r.Cautions {
+		fmt.Fprintf(b, "  - %s", caution.Text)
+		if cite := ref(caution.Cite); cite != "" {
+			b.WriteString(" " + cite)
+		}
+		b.WriteByte('\n')
+	}
+}
+
+// ref prints a citation without its edition, which the heading names.
+func ref(c tables.Citation) string {
+	if c.IsZero() {
+		return ""
+	}
+	c.Edition = 0
+	return "[" + c.String() + "]"
+}
+
+// refs prints the rule that decided a figure and those that its percents,
+// factors and ratings were read from.
+func refs(f tables.Figure) string {
+	cites := []tables.Citation{f.Citation()}
+	for _, g := range f.Operands() {
+		if c := g.Citation(); (g.Op() == tables.Tabulated || g.Op() == tables.Stated) && !c.IsZero() && !slices.Contains(cites, c) {
+			cites = append(cites, c)
+		}
+	}
+	texts := make([]string, len(cites))
+	for i, c := range cites {
+		c.Edition = 0
+		texts[i] = c.String()
+	}
+	return "[" + strings.Join(texts, "; ") + "]"
+}
+
+func describe(r *Result) string {
+	m := &r.Circuit.Motor
+	parts := []string{m.Kind.Name()}
+	if !m.Power.IsZero() {
+		parts = append(parts, m.Power.String())
+	}
+	parts = append(parts, fmt.Sprintf("%d V", m.Voltage))
+	if n := m.PhaseCount(); n > 0 {
+		parts = append(parts, fmt.Sprintf("%d-phase", n))
+	}
+	if m.Duty.Kind != tables.Continuous {
+		parts = append(parts, strings.ReplaceAll(m.Duty.Kind.String(), "_", "-")+" duty")
+	}
+	if m.Starting != 0 {
+		parts = append(parts, "started by "+strings.ReplaceAll(m.Starting.String(), "_", " "))
+	}
+	return strings.Join(parts, ", ")
+}
+
+// chosen says what a section comes to.
+func (r *Result) chosen(s Section) string {
+	switch s {
+	case BranchConductors:
+		return wires(&r.Branch)
+	case MotorSupplyConductors:
+		return wires(&r.MotorSupply)
+	case SecondaryConductors:
+		return wires(&r.Secondary)
+	case OverloadProtection:
+		return "set at not more than " + r.Overload.Limit.String()
+	case ShortCircuitDevice:
+		if x := &r.ShortCircuit; !x.Rating.IsZero() {
+			return x.Rating.String() + " " + x.Device.Name()
+		}
+		return r.ShortCircuit.Device.Name() + " set at not more than " + r.ShortCircuit.Limit.String()
+	case DisconnectingMeans:
+		return rating(r.Disconnect.Amperes, r.Disconnect.Horsepower)
+	case ControllerRating:
+		return rating(r.Controller.Amperes, r.Controller.Horsepower)
+	}
+	return ""
+}
+
+func rating(amps tables.Figure, p tables.Power) string {
+	switch {
+	case amps.IsZero() && p.IsZero():
+		return ""
+	case amps.IsZero():
+		return "at least " + p.String()
+	case p.IsZero():
+		return "at least " + amps.String()
+	}
+	return "at least " + amps.String() + " and " + p.String()
+}
+
+func wires(s *conductor.Selection) string {
+	if s.IsZero() {
+		return ""
+	}
+	text := fmt.Sprintf("%v %v %s", s.Size, s.Material, s.Insulation)
+	if s.Sets > 1 {
+		text = fmt.Sprintf("%d in parallel, each %s", s.Sets, text)
+	}
+	return text + ", " + strings.ReplaceAll(s.Run.String(), "_", " ") + ", " + s.Location.String()
+}
+
+// remark says why the next smaller size of a section fails.
+func (r *Result) remark(s Section) string {
+	var x *conductor.Selection
+	switch s {
+	case BranchConductors:
+		x = &r.Branch
+	case MotorSupplyConductors:
+		x = &r.MotorSupply
+	case SecondaryConductors:
+		x = &r.Secondary
+	default:
+		return ""
+	}
+	switch small := x.Smaller; {
+	case small.Size == 0:
+		return ""
+	case small.Ampacity.IsZero():
+		return fmt.Sprintf("%12s  next smaller size, fails: %s %s\n", small.Size, small.Why, ref(small.Cite))
+	default:
+		return fmt.Sprintf("%12s  next smaller size, fails: carries %v, %s\n", small.Size, small.Ampacity, small.Ampacity.How())
+	}
+}
+
+func orDash(s string) string {
+	if s == "" {
+		return "-"
+	}
+	return s
+}
