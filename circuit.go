@@ -87,6 +87,7 @@ func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
 	r.Branch, faults[0] = c.Wiring.Select(e, load)
 	if !d.Supply.IsZero() {
 		load.Ampacity, load.Count = d.Supply, c.Motor.SupplyConductors()
+		c.Wiring.Conductors = atLeastOwn(c.Wiring.Conductors, load.Count)
 		if e.Code() == tables.CEC {
 			n := c.Motor.Nameplate
 			r.MotorSupply, faults[1] = c.Wiring.SelectMotorSupply(e, load, conductor.MotorEnd{InsulationClass: n.InsulationClass, NonVentilated: n.NonVentilated, Power: d.Horsepower})
@@ -95,7 +96,17 @@ func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
 		}
 	}
 	if !d.Secondary.IsZero() {
+		c.Wiring.Conductors = atLeastOwn(c.Wiring.Conductors, 3)
 		r.Secondary, faults[2] = c.Wiring.Select(e, conductor.Load{Ampacity: d.Secondary, Count: 3})
 	}
 	return errors.Join(faults[:]...)
+}
+
+// atLeastOwn carries a count given for the branch circuit over to another run,
+// which holds its own conductors at least.
+func atLeastOwn(given, own int) int {
+	if given == 0 {
+		return 0
+	}
+	return max(given, own)
 }

@@ -1,0 +1,89 @@
+package motorcircuit_test
+
+import (
+	"encoding/json"
+	"errors"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"example.org/motorcircuit"
+	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/tables"
+)
+
+// FuzzSize sizes arbitrary circuits: never a panic; an error comes with the zero
+// result and names a field; a result is whole, prints and encodes.
+func FuzzSize(f *testing.F) {
+	f.Add(uint8(3), uint8(1), 3, "7-1/2 hp", 460, "10.4", "1.15", "40", "H", "B", uint8(0), 0, uint8(0), uint8(3), "THWN-2", "40", 6, 75, uint8(0), 0)
+	f.Add(uint8(5), uint8(4), 0, "30 hp", 600, "", "", "", "", "", uint8(2), 15, uint8(1), uint8(2), "RW90", "-5", 0, 0, uint8(2), 3)
+	f.Add(uint8(1), uint8(7), 1, "", 230, "38", "3", "41", "", "A", uint8(4), 7, uint8(6), uint8(4), "", "200", 1000, 90, uint8(1), 12)
+	f.Add(uint8(9), uint8(0), -1, "1e9999 hp", -5, "٥", "65.", "-1", "I", "Ω", uint8(9), -9, uint8(9), uint8(9), "\x00", "1e9", -3, 61, uint8(9), 99)
+	f.Fuzz(func(t *testing.T, edition, kind uint8, phases int, power string, volts int, amps, service, rise, letter, design string,
+		duty uint8, minutes int, starting, device uint8, insulation, ambient string, conductors, termination int, run uint8, sets int) {
+		p, _ := tables.ParsePower(power)
+		a, _ := tables.ParseCurrent(amps)
+		sf, _ := tables.ParseRatio(service)
+		tr, _ := tables.ParseTemperature(rise)
+		air, _ := tables.ParseTemperature(ambient)
+		c := motorcircuit.Circuit{
+			Edition: tables.Edition(edition),
+			Motor: motor.Motor{
+				Kind: motor.Kind(kind), Phases: phases, Power: p, Voltage: volts,
+				Nameplate: motor.Nameplate{Amperes: a, Secondary: a, LockedRotor: a, DriveInput: a, ServiceFactor: sf, TemperatureRise: tr, CodeLetter: letter, DesignLetter: design,
+					EfficiencyClass: motor.Efficiency(sets), SpeedRPM: conductors, InsulationClass: design},
+				Duty: motor.Duty{Kind: tables.Duty(duty), Minutes: minutes}, Starting: motor.Starting(starting),
+			},
+			Device: tables.Device(device),
+			Wiring: conductor.Wiring{Material: tables.Material(run), Insulation: insulation, Location: tables.Location(run), Run: tables.Run(run), Ambient: air,
+				Conductors: conductors, Termination: termination, Sets: sets, Reading: conductor.Reading(run)},
+		}
+		if c.Motor.Kind != motor.WoundRotor {
+			c.Motor.Nameplate.Secondary = tables.Current{}
+		}
+		if c.Motor.Starting != motor.Drive {
+			c.Motor.Nameplate.DriveInput = tables.Current{}
+		}
+		r, err := motorcircuit.Size(c)
+		if err != nil {
+			require.Equal(t, motorcircuit.Result{}, r)
+			requireNamed(t, err)
+			return
+		}
+		require.NotEmpty(t, r.Cautions)
+		require.GreaterOrEqual(t, r.Branch.Ampacity.Cmp(r.Demand.Branch), 0)
+		require.NotEmpty(t, r.String())
+		_, err = json.Marshal(r)
+		require.NoError(t, err)
+	})
+}
+
+// requireNamed holds that every joined error is typed and names its field.
+func requireNamed(t *testing.T, err error) {
+	t.Helper()
+	if many, ok := err.(interface{ Unwrap() []error }); ok {
+		for _, one := range many.Unwrap() {
+			requireNamed(t, one)
+		}
+		return
+	}
+	var (
+		input *tables.InputError
+		none  *tables.NotTabulatedError
+		size  *tables.NoSizeError
+	)
+	switch {
+	case errors.As(err, &input):
+		require.NotEmpty(t, input.Field)
+		require.NotEmpty(t, input.Want)
+	case errors.As(err, &none):
+		require.NotEmpty(t, none.Field)
+		require.NotEmpty(t, none.Covers)
+	case errors.As(err, &size):
+		require.NotEmpty(t, size.Field)
+		require.NotEmpty(t, size.Constraint)
+	default:
+		t.Fatalf("an error that is not typed: %v", err)
+	}
+}

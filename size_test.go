@@ -1,0 +1,169 @@
+package motorcircuit_test
+
+import (
+	"encoding/json"
+	"errors"
+	"strings"
+	"testing"
+
+	"github.com/stretchr/testify/assert"
+	"github.com/stretchr/testify/require"
+
+	"example.org/motorcircuit"
+	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/motor"
+	"example.org/motorcircuit/protection"
+	"example.org/motorcircuit/tables"
+)
+
+// conveyor is a circuit with every step in it.
+func conveyor() motorcircuit.Circuit {
+	return motorcircuit.Circuit{
+		Tag:     "CV-204",
+		Edition: tables.NEC2023,
+		Motor: motor.Motor{
+			Kind: motor.SquirrelCage, Phases: 3, Power: motor.HP("7-1/2"), Voltage: 460,
+			Nameplate: motor.Nameplate{Amperes: motor.Amps("10.4"), ServiceFactor: motor.Factor("1.15"), CodeLetter: "H"},
+		},
+		Device: protection.InverseTimeBreaker,
+		Wiring: conductor.Wiring{Insulation: "THWN-2", Ambient: motor.Celsius("40"), Conductors: 6},
+	}
+}
+
+func TestSizeReportsAllFaultsTogether(t *testing.T) {
+	c := conveyor()
+	c.Motor.Nameplate.ServiceFactor = motor.Factor("3")
+	c.Motor.Phases = 1
+	c.Wiring.Ambient = motor.Celsius("200")
+	c.Wiring.Insulation = "RW90"
+	c.Device = 9
+	r, err := motorcircuit.Size(c)
+	require.Error(t, err)
+	assert.Equal(t, motorcircuit.Result{}, r)
+	for _, field := range []string{"motor.phases", "motor.nameplate.service_factor", "wiring.ambient", "wiring.insulation", "device"} {
+		assert.Contains(t, err.Error(), field)
+	}
+	var input *tables.InputError
+	require.ErrorAs(t, err, &input)
+}
+
+func TestSizeRefusals(t *testing.T) {
+	for _, tt := range []struct {
+		name   string
+		change func(*motorcircuit.Circuit)
+		field  string
+		as     any
+	}{
+		{"no edition", func(c *motorcircuit.Circuit) { c.Edition = 0 }, "edition", new(*tables.InputError)},
+		{"no kind", func(c *motorcircuit.Circuit) { c.Motor.Kind = 0 }, "motor.kind", new(*tables.InputError)},
+		{"no power", func(c *motorcircuit.Circuit) {
+			c.Motor.Power, c.Motor.Nameplate.Amperes = tables.Power{}, tables.Current{}
+		}, "motor.power", new(*tables.InputError)},
+		{"no voltage", func(c *motorcircuit.Circuit) { c.Motor.Voltage = 0 }, "motor.voltage", new(*tables.InputError)},
+		{"over 1000 V", func(c *motorcircuit.Circuit) { c.Motor.Voltage = 2300 }, "motor.voltage", new(*tables.InputError)},
+		{"power between rows", func(c *motorcircuit.Circuit) { c.Motor.Power = motor.HP("35") }, "motor.power", new(*tables.NotTabulatedError)},
+		{"voltage between columns", func(c *motorcircuit.Circuit) { c.Motor.Voltage = 415 }, "motor.voltage", new(*tables.NotTabulatedError)},
+		{"hot for the insulation", func(c *motorcircuit.Circuit) { c.Wiring.Ambient = motor.Celsius("86") }, "wiring.ambient", new(*tables.NotTabulatedError)},
+		{"single-phase synchronous", func(c *motorcircuit.Circuit) { c.Motor.Kind, c.Motor.Phases = motor.Synchronous, 1 }, "motor.phases", new(*tables.InputError)},
+		{"dc with phases", func(c *motorcircuit.Circuit) { c.Motor.Kind = motor.DirectCurrent }, "motor.phases", new(*tables.InputError)},
+		{"too much for one set", func(c *motorcircuit.Circuit) {
+			c.Motor.Power, c.Wiring.Sets, c.Wiring.Conductors = motor.HP("500"), 1, 40
+		}, "wiring", new(*tables.NoSizeError)},
+	} {
+		t.Run(tt.name, func(t *testing.T) {
+			c := conveyor()
+			tt.change(&c)
+			_, err := motorcircuit.Size(c)
+			require.Error(t, err)
+			assert.True(t, errors.As(err, tt.as), "%T %v", err, err)
+			assert.Contains(t, err.Error(), tt.field)
+		})
+	}
+}
+
+// TestEveryFigureIsCited walks every result of the published examples: a figure
+// is the caller's input or names a rule, and so are all that it was made from.
+func TestEveryFigureIsCited(t *testing.T) {
+	for _, x := range readExamples(t) {
+		if notYet[x.id] != "" {
+			continue
+		}
+		for _, e := range tables.Editions() {
+			if e.Code().String() != x.code {
+				continue
+			}
+			r, err := motorcircuit.Size(x.in.circuit(t, e))
+			require.NoError(t, err)
+			count := 0
+			for section, f := range r.Figures() {
+				count++
+				requireCited(t, e, section, f)
+			}
+			assert.Greater(t, count, 15)
+		}
+	}
+}
+
+func requireCited(t *testing.T, e tables.Edition, s motorcircuit.Section, f tables.Figure) {
+	t.Helper()
+	require.NotEmpty(t, f.How(), "%v %s", s, f.Name())
+	if f.Op() != tables.Given {
+		require.NotEmpty(t, f.Citation().Ref, "%v %s", s, f.Name())
+		require.Equal(t, e, f.Citation().Edition, "%v %s", s, f.Name())
+	}
+	for _, g := range f.Operands() {
+		requireCited(t, e, s, g)
+	}
+}
+
+func TestCautionsTellDefaultsAndConfidence(t *testing.T) {
+	c := motorcircuit.Circuit{Edition: tables.CEC2024, Motor: motor.Motor{Kind: motor.DirectCurrent, Power: motor.HP("10"), Voltage: 240}}
+	r, err := motorcircuit.Size(c)
+	require.NoError(t, err)
+	all := ""
+	for _, caution := range r.Cautions {
+		all += caution.String() + "\n"
+	}
+	for _, want := range []string{"time-delay fuse is taken", "30 °C is taken", "RW75 taken", "nameplate", "CSA C22.1:24 Table D2", "from memory", "edition was read in part", "authority having jurisdiction"} {
+		assert.Contains(t, all, want)
+	}
+	assert.True(t, strings.HasSuffix(strings.TrimSpace(all), "decide"), "the standing caution stands last")
+}
+
+func TestDefaultDeviceIsTimeDelayFuse(t *testing.T) {
+	c := conveyor()
+	c.Device = 0
+	r, err := motorcircuit.Size(c)
+	require.NoError(t, err)
+	assert.Equal(t, protection.TimeDelayFuse, r.ShortCircuit.Device)
+}
+
+// TestCircuitJSON holds that a circuit survives its JSON form.
+func TestCircuitJSON(t *testing.T) {
+	c := conveyor()
+	b, err := json.Marshal(c)
+	require.NoError(t, err)
+	var back motorcircuit.Circuit
+	require.NoError(t, json.Unmarshal(b, &back))
+	assert.Equal(t, c, back)
+}
+
+// TestConcurrentUse is for the race detector: any goroutine may ask.
+func TestConcurrentUse(t *testing.T) {
+	done := make(chan string)
+	for range 8 {
+		go func() {
+			r, err := motorcircuit.Size(conveyor())
+			if err != nil {
+				done <- err.Error()
+				return
+			}
+			done <- r.String()
+		}()
+	}
+	first := <-done
+	for range 7 {
+		assert.Equal(t, first, <-done)
+	}
+	assert.Contains(t, first, "CV-204")
+}
