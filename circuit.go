@@ -26,19 +26,35 @@ type Circuit struct {
 const MaxVolts = 1000
 
 // Validate reports every field that cannot stand, joined: each error is a
-// [*tables.InputError].
+// [*tables.InputError], or a [*tables.NotTabulatedError] for an ambient that the
+// insulation does not allow.
 func (c Circuit) Validate() error {
 	if err := c.Edition.Check(); err != nil {
 		return errors.Join(err, c.Motor.Validate())
 	}
-	faults := []error{c.Motor.Validate(), c.Wiring.Validate(c.Edition)}
+	return errors.Join(c.Motor.Validate(), c.validateRest())
+}
+
+// validateRest reports the faults that are not the motor's own.
+func (c Circuit) validateRest() error {
+	faults := []error{c.Wiring.Validate(c.Edition)}
 	if c.Motor.Voltage > MaxVolts {
 		faults = append(faults, &tables.InputError{Field: "motor.voltage", Value: strconv.Itoa(c.Motor.Voltage), Want: "1000 V or less: motors of higher voltage fall under other parts of the code"})
 	}
-	if c.Device != 0 && !c.Device.IsValid() {
-		faults = append(faults, &tables.InputError{Field: "device", Value: strconv.Itoa(int(c.Device)), Want: "a kind of short-circuit device"})
+	if c.Wiring.Conductors > 0 && c.Motor.Kind != 0 {
+		_, err := c.Wiring.Together(c.Motor.LineConductors())
+		faults = append(faults, err)
 	}
+	faults = append(faults, protection.ValidateDevice(c.Edition, c.device(), c.Motor.Kind))
 	return errors.Join(faults...)
+}
+
+// device returns the kind of short-circuit device, the default if none is given.
+func (c Circuit) device() tables.Device {
+	if c.Device == 0 {
+		return protection.TimeDelayFuse
+	}
+	return c.Device
 }
 
 // Size works out the branch circuit of one motor. All faults of the input come
@@ -47,16 +63,15 @@ func (c Circuit) Validate() error {
 // not print, [*tables.NoSizeError] for a requirement that no size meets. With an
 // error comes the zero Result.
 func Size(c Circuit) (Result, error) {
-	if err := c.Validate(); err != nil {
-		return Result{}, err
-	}
 	e, m := c.Edition, c.Motor
-	device := c.Device
-	if device == 0 {
-		device = protection.TimeDelayFuse
+	if err := e.Check(); err != nil {
+		return Result{}, errors.Join(err, m.Validate())
+	}
+	if m.Voltage > MaxVolts {
+		return Result{}, c.Validate()
 	}
 	d, err := m.Demand(e)
-	if err != nil {
+	if err := errors.Join(err, c.validateRest()); err != nil {
 		return Result{}, err
 	}
 	r := Result{Circuit: c, Demand: d}
@@ -69,7 +84,7 @@ func Size(c Circuit) (Result, error) {
 	note(r.conductors(e, c, d))
 	r.Overload, err = protection.SizeOverload(e, m, d)
 	note(err)
-	r.ShortCircuit, err = protection.SizeShortCircuit(e, device, m, d)
+	r.ShortCircuit, err = protection.SizeShortCircuit(e, c.device(), m, d)
 	note(err)
 	if len(faults) > 0 {
 		return Result{}, errors.Join(faults...)

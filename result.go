@@ -109,14 +109,16 @@ func selectionFigures(s *conductor.Selection) []tables.Figure {
 	return figures
 }
 
+// supplyEnd is the rule of the other end of motor supply conductors.
+var supplyEnd = tables.Rule{Ref: "Rule 4-006", Mark: tables.MarkB}
+
 // The cautions that a circuit as such gives rise to.
 var (
-	standing       = tables.Caution{Text: "for design by or under a licensed person: the printed code in force, local amendments, equipment markings and the authority having jurisdiction decide"}
-	noDevice       = tables.Caution{Text: "no kind of short-circuit device is given: a time-delay fuse is taken, which has the lowest ceilings"}
-	noAmbient      = tables.Caution{Text: "no ambient is given: 30 °C is taken, the base of the ampacity tables"}
-	noTermination  = tables.Caution{Text: "the terminals are not marked: 60 °C is taken for circuits of 100 A or less and 75 °C above"}
-	motorMarked    = tables.Caution{Text: "the terminals are not marked: 75 °C is taken for a motor marked Design B, C or D, for which its other end must be suited too"}
-	fromMemoryText = "carried from memory and not yet held against a readable copy: check it before use"
+	standing      = tables.Caution{Text: "for design by or under a licensed person: the printed code in force, local amendments, equipment markings and the authority having jurisdiction decide"}
+	noDevice      = tables.Caution{Text: "no kind of short-circuit device is given: a time-delay fuse is taken, which has the lowest ceilings"}
+	noAmbient     = tables.Caution{Text: "no ambient is given: 30 °C is taken, the base of the ampacity tables"}
+	noTermination = tables.Caution{Text: "the terminals are not marked: 60 °C is taken for circuits of 100 A or less and 75 °C above"}
+	motorMarked   = tables.Caution{Text: "the terminals are not marked: 75 °C is taken for a motor marked Design B, C or D, for which its other end must be suited too"}
 )
 
 // cautions gathers what each step had to say, then what the whole rests on;
@@ -147,6 +149,9 @@ func (r *Result) cautions() []tables.Caution {
 	add(r.Demand.Cautions...)
 	add(r.Branch.Cautions...)
 	add(r.MotorSupply.Cautions...)
+	if c.Edition.Code() == tables.CEC && !r.MotorSupply.IsZero() && r.MotorSupply.Size.Cmp(r.Branch.Size) < 0 {
+		add(tables.Caution{Text: "the motor supply conductors hold for the motor's end only: where they begin at terminals, those ask for the size of the branch-circuit conductors", Cite: supplyEnd.In(c.Edition)})
+	}
 	add(r.Secondary.Cautions...)
 	add(r.Overload.Cautions...)
 	add(r.ShortCircuit.Cautions...)
@@ -155,7 +160,7 @@ func (r *Result) cautions() []tables.Caution {
 	for s := range sectionCount {
 		for _, f := range r.section(s) {
 			for _, cite := range f.FromMemory() {
-				add(tables.Caution{Text: fromMemoryText, Cite: cite})
+				add(tables.FromMemory(cite))
 			}
 		}
 	}

@@ -7,6 +7,7 @@ import (
 	"strings"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
 
@@ -26,7 +27,7 @@ func (r Result) WriteTo(w io.Writer) (int64, error) {
 
 func (r *Result) write(b *strings.Builder) {
 	c := &r.Circuit
-	fmt.Fprintf(b, "%s: %s, under %s\n", orDash(c.Tag), describe(r), c.Edition.Standard())
+	fmt.Fprintf(b, "%s: %s, under %s\n", oneLine(c.Tag), describe(r), c.Edition.Standard())
 	for s := range sectionCount {
 		lines := r.section(s)
 		chosen := r.chosen(s)
@@ -40,7 +41,7 @@ func (r *Result) write(b *strings.Builder) {
 		b.WriteByte('\n')
 		for _, f := range lines {
 			if !f.IsZero() {
-				fmt.Fprintf(b, "%12s  %s: %s %s\n", f, f.Name(), f.How(), refs(f))
+				fmt.Fprintf(b, "%12s  %s: %s%s\n", f, f.Name(), f.How(), refs(f))
 			}
 		}
 		b.WriteString(r.remark(s))
@@ -73,12 +74,17 @@ func refs(f tables.Figure) string {
 			cites = append(cites, c)
 		}
 	}
-	texts := make([]string, len(cites))
-	for i, c := range cites {
-		c.Edition = 0
-		texts[i] = c.String()
+	var texts []string
+	for _, c := range cites {
+		if !c.IsZero() {
+			c.Edition = 0
+			texts = append(texts, c.String())
+		}
 	}
-	return "[" + strings.Join(texts, "; ") + "]"
+	if len(texts) == 0 {
+		return ""
+	}
+	return " [" + strings.Join(texts, "; ") + "]"
 }
 
 func describe(r *Result) string {
@@ -88,16 +94,22 @@ func describe(r *Result) string {
 		parts = append(parts, m.Power.String())
 	}
 	parts = append(parts, fmt.Sprintf("%d V", m.Voltage))
-	if n := m.PhaseCount(); n > 0 {
+	if n := m.PhaseCount(); n > 0 && m.Kind != motor.SinglePhase {
 		parts = append(parts, fmt.Sprintf("%d-phase", n))
 	}
 	if m.Duty.Kind != tables.Continuous {
 		parts = append(parts, strings.ReplaceAll(m.Duty.Kind.String(), "_", "-")+" duty")
 	}
 	if m.Starting != 0 {
-		parts = append(parts, "started by "+strings.ReplaceAll(m.Starting.String(), "_", " "))
+		parts = append(parts, startings[m.Starting])
 	}
 	return strings.Join(parts, ", ")
+}
+
+// startings words the ways to start a motor.
+var startings = map[motor.Starting]string{
+	motor.WyeDelta: "wye-delta start", motor.PartWinding: "part-winding start", motor.Autotransformer: "autotransformer start",
+	motor.Resistor: "resistor or reactor start", motor.SoftStarter: "soft starter", motor.Drive: "on an adjustable-speed drive",
 }
 
 // chosen says what a section comes to.
@@ -117,23 +129,24 @@ func (r *Result) chosen(s Section) string {
 		}
 		return r.ShortCircuit.Device.Name() + " set at not more than " + r.ShortCircuit.Limit.String()
 	case DisconnectingMeans:
-		return rating(r.Disconnect.Amperes, r.Disconnect.Horsepower)
+		return rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite)
 	case ControllerRating:
-		return rating(r.Controller.Amperes, r.Controller.Horsepower)
+		return rating(r.Controller.Amperes, r.Controller.Horsepower, r.Controller.Cite)
 	}
 	return ""
 }
 
-func rating(amps tables.Figure, p tables.Power) string {
+func rating(amps tables.Figure, p tables.Power, cite tables.Citation) string {
+	hp := p.String() + " " + ref(cite)
 	switch {
 	case amps.IsZero() && p.IsZero():
 		return ""
 	case amps.IsZero():
-		return "at least " + p.String()
+		return "at least " + hp
 	case p.IsZero():
 		return "at least " + amps.String()
 	}
-	return "at least " + amps.String() + " and " + p.String()
+	return "at least " + amps.String() + " and " + hp
 }
 
 func wires(s *conductor.Selection) string {
@@ -170,8 +183,9 @@ func (r *Result) remark(s Section) string {
 	}
 }
 
-func orDash(s string) string {
-	if s == "" {
+// oneLine returns a caller's text on one line, "-" if there is none.
+func oneLine(s string) string {
+	if s = strings.Join(strings.Fields(s), " "); s == "" {
 		return "-"
 	}
 	return s

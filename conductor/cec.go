@@ -22,7 +22,7 @@ var cec = rules{
 
 	termination: func(e tables.Edition, w Wiring, l Load, _ int) tables.Figure {
 		if w.Termination != 0 {
-			return tables.StatedFigure("termination temperature", e, &cecMarked, tables.Celsius, int64(w.Termination), 0).WithNote("as the terminals are marked")
+			return tables.StatedFigure("termination temperature", e, &cecMarked, tables.Celsius, int64(w.Termination), 0).WithNote("terminals so marked")
 		}
 		return unmarked(e, l, &cecUnmarked, &cecUnmarked)
 	},
@@ -36,10 +36,10 @@ var cec = rules{
 	terminalRun: func(run tables.Run) tables.Run { return run },
 	corrections: func(e tables.Edition, w Wiring, l Load, ins insulation, s *Selection) (run tables.Run, err error) {
 		// Table 5A goes by the temperature marked on the conductor.
-		if s.Ambient, err = e.AmbientFactor(ins.celsius, w.ambient()); err != nil {
+		if s.Ambient, err = e.AmbientFactor(ins.celsius, w.ambient(ins)); err != nil {
 			return 0, err
 		}
-		n, err := w.ownCount(l)
+		n, err := w.Together(l.Count)
 		if err != nil {
 			return 0, err
 		}

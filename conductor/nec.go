@@ -1,13 +1,6 @@
 package conductor
 
-import (
-	"github.com/shopspring/decimal"
-
-	"example.org/motorcircuit/tables"
-)
-
-// rooftopAdder is what is added to the ambient of a run close above a roof, in °C.
-var rooftopAdder = decimal.New(33, 0)
+import "example.org/motorcircuit/tables"
 
 // Rules of NFPA 70, Articles 110 and 310.
 var (
@@ -32,7 +25,7 @@ var nec = rules{
 	termination: func(e tables.Edition, w Wiring, l Load, insulation int) tables.Figure {
 		switch {
 		case w.Termination != 0:
-			return tables.StatedFigure("termination temperature", e, &necMarked, tables.Celsius, int64(w.Termination), 0).WithNote("as the terminals are marked")
+			return tables.StatedFigure("termination temperature", e, &necMarked, tables.Celsius, int64(w.Termination), 0).WithNote("terminals so marked")
 		case l.Motor75 && insulation >= 75 && l.Ampacity.Cmp(hundredAmps) <= 0:
 			return tables.StatedFigure("termination temperature", e, &necMotor75, tables.Celsius, 75, 0).WithNote("motor marked Design B, C or D")
 		}
@@ -45,15 +38,13 @@ var nec = rules{
 	},
 	terminalRun: func(tables.Run) tables.Run { return tables.InRaceway },
 	corrections: func(e tables.Edition, w Wiring, l Load, ins insulation, s *Selection) (run tables.Run, err error) {
-		ambient := w.ambient()
-		if w.Rooftop && ins.Type != "XHHW-2" {
-			ambient = tables.Must(tables.ParseTemperature(ambient.Decimal().Add(rooftopAdder).String()))
-			s.Cautions = append(s.Cautions, tables.Caution{Text: "33 °C added to the ambient for a run close above a roof: " + ambient.String(), Cite: necRooftop.In(e)})
-		}
-		if s.Ambient, err = e.AmbientFactor(ins.celsius, ambient); err != nil {
+		if s.Ambient, err = e.AmbientFactor(ins.celsius, w.ambient(ins)); err != nil {
 			return 0, err
 		}
-		n, err := w.ownCount(l)
+		if w.onRoof(ins) {
+			s.Cautions = append(s.Cautions, tables.Caution{Text: "33 °C added to the ambient for a run close above a roof: " + w.ambient(ins).String(), Cite: necRooftop.In(e)})
+		}
+		n, err := w.Together(l.Count)
 		if err != nil {
 			return 0, err
 		}

@@ -3,6 +3,8 @@ package conductor
 import (
 	"strconv"
 
+	"github.com/shopspring/decimal"
+
 	"example.org/motorcircuit/tables"
 )
 
@@ -38,25 +40,38 @@ func rulesOf(e tables.Edition) *rules {
 	return &nec
 }
 
-// ownCount returns the number of conductors that the factor is for: the
-// wiring's, or the circuit's own.
-func (w Wiring) ownCount(l Load) (int, error) {
+// Together returns the number of current-carrying conductors that the factor for
+// conductors together is for: the wiring's or, if it gives none, the circuit's
+// own. Fewer than those are an [*tables.InputError].
+func (w Wiring) Together(own int) (int, error) {
 	if w.Conductors == 0 {
-		return max(l.Count, 1), nil
+		return max(own, 1), nil
 	}
-	if w.Conductors < l.Count {
-		return 0, &tables.InputError{Field: "wiring.conductors", Value: strconv.Itoa(w.Conductors), Want: "at least the circuit's own " + strconv.Itoa(l.Count) + " current-carrying conductors"}
+	if w.Conductors < own {
+		return 0, &tables.InputError{Field: "wiring.conductors", Value: strconv.Itoa(w.Conductors), Want: "at least the circuit's own " + strconv.Itoa(own) + " current-carrying conductors"}
 	}
 	return w.Conductors, nil
 }
 
-// ambient returns the ambient of the run, 30 °C if none is given.
-func (w Wiring) ambient() tables.Temperature {
-	if w.Ambient.IsZero() {
-		return baseAmbient
+// ambient returns the ambient of the run, 30 °C if none is given, with what is
+// added close above a roof.
+func (w Wiring) ambient(ins insulation) tables.Temperature {
+	ambient := w.Ambient
+	if ambient.IsZero() {
+		ambient = baseAmbient
 	}
-	return w.Ambient
+	if w.onRoof(ins) {
+		ambient = tables.Must(tables.ParseTemperature(ambient.Decimal().Add(rooftopAdder).String()))
+	}
+	return ambient
 }
+
+// onRoof reports a run that is hotter than the ambient for lying close above a
+// roof; XHHW-2 is exempt.
+func (w Wiring) onRoof(ins insulation) bool { return w.Rooftop && ins.Type != "XHHW-2" }
+
+// rooftopAdder is what is added to the ambient of a run close above a roof, in °C.
+var rooftopAdder = decimal.New(33, 0)
 
 var baseAmbient = tables.Must(tables.ParseTemperature("30"))
 

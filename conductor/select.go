@@ -69,6 +69,9 @@ func (r *rules) start(w Wiring, l Load, ins insulation) Selection {
 	if w.Insulation == "" {
 		s.Cautions = append(s.Cautions, tables.Caution{Text: r.defaultText, Cite: ins.Citation})
 	}
+	if ins.Mark == tables.MarkC {
+		s.Cautions = append(s.Cautions, tables.FromMemory(ins.Citation))
+	}
 	if ins.Note != "" && (w.Insulation != "" || w.Location != tables.Dry) {
 		s.Cautions = append(s.Cautions, tables.Caution{Text: ins.Type + ": " + ins.Note, Cite: ins.Citation})
 	}
@@ -113,14 +116,14 @@ func (r *rules) choose(e tables.Edition, w Wiring, l Load, ins insulation, s Sel
 		}
 	}
 	return Selection{}, &tables.NoSizeError{Field: "wiring", Need: l.Ampacity, Cite: table.Citation(),
-		Constraint: "no " + ins.Type + " " + w.Material.String() + " conductor up to " + ins.Most.String() + " carries it in " + setsText(first, last)}
+		Constraint: "no " + ins.Type + " " + w.Material.String() + " conductor up to " + ins.Most.String() + " carries it, in " + setsText(first, last)}
 }
 
 func setsText(first, last int) string {
 	if first == last {
-		return strconv.Itoa(first) + " in parallel"
+		return strconv.Itoa(first) + " set(s)"
 	}
-	return "up to " + strconv.Itoa(last) + " in parallel"
+	return "sets of up to " + strconv.Itoa(last) + " in parallel"
 }
 
 // A choice is a search under way.
@@ -184,12 +187,12 @@ func (c *choice) usable(size tables.Size, sets int) tables.Figure {
 	}
 	terminal := c.terminal.Ampacity(size, c.cols.terminal)
 	if sets > 1 {
-		terminal = tables.ProductOf("ampacity at the termination", c.e, &c.r.parallel, terminal, setsFigure(sets))
+		terminal = tables.ProductOf("ampacity", c.e, &c.r.parallel, terminal, setsFigure(sets))
 	}
 	if c.cols.terminal == c.cols.corrected && corrected.Cmp(terminal) <= 0 {
 		return corrected
 	}
-	return tables.SmallestOf("usable ampacity", c.e, &c.r.terminalRule, corrected, terminal)
+	return tables.SmallestOf("usable ampacity", c.e, &c.r.terminalRule, corrected, terminal.Renamed(terminal.Name()+" at the terminals"))
 }
 
 // finish fills in the chosen size and tells why the next smaller one fails.
@@ -208,7 +211,7 @@ func (c *choice) finish(size tables.Size, sets int, from tables.Size) {
 		s.Smaller = Rejected{Size: smaller, Why: why, Cite: rule.In(c.e)}
 	}
 	if sets > 1 {
-		s.Cautions = append(s.Cautions, tables.Caution{Text: "conductors in parallel: each set in a raceway of its own, all of one length, material, size, insulation and way of ending", Cite: c.r.parallel.In(c.e)})
+		s.Cautions = append(s.Cautions, tables.Caution{Text: strconv.Itoa(sets) + " conductors in parallel for each phase: each set in a raceway of its own, all of one length, material, size, insulation and way of ending", Cite: c.r.parallel.In(c.e)})
 	}
 	c.r.afterwards(c.e, c.w, s)
 }

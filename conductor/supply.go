@@ -39,7 +39,7 @@ func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selec
 	}
 	r := rulesOf(e)
 	s := r.start(w, l, ins)
-	if over := excess(e, w.ambient()); !over.IsZero() {
+	if over := excess(e, w.ambient(ins)); !over.IsZero() {
 		least = tables.SumOf("motor supply conductor insulation", e, &cecSupply, least, over)
 	}
 	s.LeastRating = least

@@ -62,7 +62,8 @@ var (
 )
 
 // Validate reports every field that cannot stand under an edition, joined: each
-// error is a [*tables.InputError].
+// error is a [*tables.InputError] or, for an ambient that the insulation does
+// not allow, a [*tables.NotTabulatedError].
 func (w Wiring) Validate(e tables.Edition) error {
 	if err := e.Check(); err != nil {
 		return err
@@ -76,7 +77,9 @@ func (w Wiring) Validate(e tables.Edition) error {
 	}
 	if w.Location > tables.Wet {
 		add("location", strconv.Itoa(int(w.Location)), "dry, damp or wet")
-	} else if _, err := w.insulation(e); err != nil {
+	} else if ins, err := w.insulation(e); err != nil {
+		faults = append(faults, err)
+	} else if _, err := e.AmbientFactor(ins.celsius, w.ambient(ins)); err != nil && w.Ambient.Cmp(hottest) <= 0 {
 		faults = append(faults, err)
 	}
 	if a := w.Ambient; !a.IsZero() && (a.Cmp(coldest) < 0 || a.Cmp(hottest) > 0) {

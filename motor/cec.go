@@ -10,10 +10,10 @@ var (
 	cecOverload    = tables.Rule{Ref: "Rule 28-306(1)", Note: "full-load current rating of the motor"}
 	cecContinuous  = tables.Rule{Ref: "Rule 28-106(1)"}
 	cecDuty        = tables.Rule{Ref: "Rule 28-106(2)"}
-	cecSupply      = tables.Rule{Ref: "Rule 28-104", Mark: tables.MarkB}
 	cecSecondary   = tables.Rule{Ref: "Rule 28-112", Mark: tables.MarkB}
 	cecRotor       = tables.Rule{Ref: "Rule 28-010"}
 	cecCompressor  = tables.Rule{Ref: "Rule 28-706", Mark: tables.MarkB}
+	cecCompressorO = tables.Rule{Ref: "Rule 28-710", Mark: tables.MarkB}
 	cecCompressorR = tables.Rule{Ref: "Rule 28-704", Mark: tables.MarkB}
 	cecWyeDelta    = tables.Rule{Ref: "Rule 28-106", Mark: tables.MarkC, Note: "six leads of a star-delta start: common practice"}
 	cecPartWinding = tables.Rule{Ref: "Rule 28-804", Mark: tables.MarkB, Note: "each half-winding carries half"}
@@ -26,11 +26,18 @@ func (d *Demand) cec(m Motor, e tables.Edition) error {
 		return err
 	}
 	d.Overload = d.Design.As("overload current", e, &cecOverload)
+	if rated := m.Nameplate.Amperes.Figure("rated-load current"); m.Kind == Hermetic {
+		if rated.IsZero() {
+			rated = d.Design
+		}
+		d.Overload = rated.As("overload current", e, &cecCompressorO)
+	}
 	switch n := m.Nameplate; {
 	case !n.LockedRotor.IsZero():
 		d.LockedRotor = n.marked()
 	case m.Kind == Torque:
-		d.LockedRotor = LockedRotor{FromNameplate, d.Design, d.Design}
+		rotor := d.Design.As("locked-rotor current", e, &cecTorque)
+		d.LockedRotor = LockedRotor{FromNameplate, rotor, rotor}
 	case m.Kind == Hermetic:
 		d.LockedRotor = d.sixTimes(e, &cecCompressorR)
 	case m.Kind != DirectCurrent:
@@ -58,17 +65,20 @@ func (d *Demand) cecDesign(m Motor, e tables.Edition) error {
 			d.caution(e, &cecCompressor, "Section 28 does not speak of a branch-circuit selection current: the larger of it and the rated-load current is taken")
 		}
 		return nil
+	case !n.Amperes.IsZero() && m.Kind == Torque:
+		d.Design = n.Amperes.Figure("nameplate locked-rotor current").As("design current", e, &cecRating)
+		return nil
 	case !n.Amperes.IsZero():
 		d.Design = n.Amperes.Figure("nameplate full-load current").As("design current", e, &cecRating)
 		return nil
 	case m.Kind == Torque:
 		return needAmperes("the locked-rotor current marked on a torque motor", &cecTorque, e)
-	case n.Multispeed || n.HighTorque || n.SpeedRPM > 0 && n.SpeedRPM < 1200 && m.Kind != DirectCurrent:
+	case n.Multispeed || n.HighTorque || m.lowSpeed():
 		return needAmperes("the nameplate current of a motor of several speeds, of low speed or of high torque", &cecTorque, e)
 	}
 	table, err := e.FullLoadCurrent(m.table(), m.Power, m.Voltage)
 	if err != nil {
-		return err
+		return instead(err, "motor.nameplate.amperes, where given, sizes any motor")
 	}
 	if m.Kind == Synchronous {
 		table = d.synchronous(m, e, table, &cecSyncNote)
@@ -95,7 +105,10 @@ func (d *Demand) cecAmpacities(m Motor, e tables.Edition) (err error) {
 		return err
 	}
 	// Conductors that enter the motor's terminal box are treated apart: 28-104.
-	d.Supply = d.Branch.As(supplyName, e, &cecSupply)
+	// Compressors stand in a subsection of their own.
+	if m.Kind != Hermetic {
+		d.Supply = d.Branch.Renamed(supplyName)
+	}
 	switch m.Starting {
 	case WyeDelta:
 		d.Supply = d.share(m, e, &cecWyeDelta, 720, 58)

@@ -1,6 +1,10 @@
 package motor
 
-import "example.org/motorcircuit/tables"
+import (
+	"errors"
+
+	"example.org/motorcircuit/tables"
+)
 
 // A Demand is what a motor asks of its circuit under one edition: the currents
 // that the code says to use and the least ampacities that follow from them. A
@@ -57,7 +61,7 @@ func (m Motor) Demand(e tables.Edition) (Demand, error) {
 		return Demand{}, err
 	}
 	if err := m.Validate(); err != nil {
-		return Demand{}, err
+		return Demand{}, errors.Join(err, m.essentials().untabulated(e))
 	}
 	d := Demand{Input: m.Nameplate.DriveInput.Figure("rated input current of the drive")}
 	var err error
@@ -70,6 +74,34 @@ func (m Motor) Demand(e tables.Edition) (Demand, error) {
 		return Demand{}, err
 	}
 	return d, nil
+}
+
+// essentials returns the motor without what does not choose its table entry.
+func (m Motor) essentials() Motor {
+	return Motor{Kind: m.Kind, Phases: m.Phases, Power: m.Power, Voltage: m.Voltage, Nameplate: Nameplate{Amperes: m.Nameplate.Amperes}}
+}
+
+// untabulated returns the error of a motor that the edition's tables do not
+// cover, so that it is told together with the other faults of an input.
+func (m Motor) untabulated(e tables.Edition) error {
+	if m.Validate() != nil {
+		return nil
+	}
+	_, err := m.Demand(e)
+	var none *tables.NotTabulatedError
+	if errors.As(err, &none) {
+		return none
+	}
+	return nil
+}
+
+// instead adds to a table's refusal what would size the motor.
+func instead(err error, what string) error {
+	var none *tables.NotTabulatedError
+	if errors.As(err, &none) {
+		none.Instead = what
+	}
+	return err
 }
 
 // sixTimes is the locked-rotor current of a motor of which nothing else is known.

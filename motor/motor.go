@@ -98,6 +98,18 @@ func (m Motor) table() tables.MotorTable {
 	return tables.InductionTable
 }
 
+// lowSpeed reports a motor built for a lower speed than 1200 r/min, the
+// synchronous speed of six poles at 60 Hz. The next lower, of eight poles, is 900.
+func (m Motor) lowSpeed() bool {
+	return m.Kind != DirectCurrent && m.Nameplate.SpeedRPM > 0 && m.Nameplate.SpeedRPM <= 900
+}
+
+// sixPole reports a nameplate speed between the two, slip included: a motor
+// built for 1200 r/min, though its own speed is less.
+func (m Motor) sixPole() bool {
+	return m.Kind != DirectCurrent && m.Nameplate.SpeedRPM > 900 && m.Nameplate.SpeedRPM < 1200
+}
+
 // ReducedVoltage reports a start by autotransformer or wye-delta, which the
 // device table of the CEC tells apart.
 func (s Starting) ReducedVoltage() bool { return s == Autotransformer || s == WyeDelta }

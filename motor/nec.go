@@ -11,6 +11,7 @@ var (
 	necTableCurrent = tables.Rule{Ref: "430.6(A)(1)"}
 	necNameplate    = tables.Rule{Ref: "430.6(A)(1)", Note: "nameplate current in place of the table"}
 	necBeyond       = tables.Rule{Ref: "430.6(A)(1)", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.6(A)(2)"}}, Mark: tables.MarkB, Note: "motor larger than the tables cover"}
+	necSixPole      = tables.Rule{Ref: "430.6(A)(1)", Note: "motors built for less than 1200 r/min"}
 	necOverload     = tables.Rule{Ref: "430.6(A)(2)"}
 	necFan          = tables.Rule{Ref: "430.6(A) Exception No. 2"}
 	necAppliance    = tables.Rule{Ref: "430.6(A) Exception No. 3"}
@@ -24,6 +25,7 @@ var (
 	necRotor        = tables.Rule{Ref: "430.110(C)(3)"}
 	necSyncNote     = tables.Rule{Ref: "Table 430.250", Note: "note on power factor"}
 	necTwoPhase     = tables.Rule{Ref: "Table 430.249"}
+	necCodeLetter   = tables.Rule{Ref: "Table 430.7(B)"}
 	necDriveInput   = tables.Rule{Ref: "430.122(A)"}
 	necDriveOutput  = tables.Rule{Ref: "430.22", Moved: []tables.Move{{From: tables.NEC2020, Ref: "430.122(B)"}}}
 	necCompressor   = tables.Rule{Ref: "440.6(A)"}
@@ -77,7 +79,7 @@ func (d *Demand) necDesign(m Motor, e tables.Edition) error {
 	case why != "" && marked.IsZero():
 		return needAmperes("the nameplate current of "+why, rule, e)
 	case why != "":
-		d.Design = marked.As("design current", e, rule)
+		d.Design = marked.As("design current", e, rule).WithNote("nameplate of " + why)
 	case m.Power.IsZero():
 		d.Design = marked.As("design current", e, &necNameplate)
 		d.caution(e, &necTableCurrent, "the motor is marked in amperes only: its horsepower is that of the first table row to carry them")
@@ -111,7 +113,7 @@ func (m Motor) necByNameplate() (why string, rule *tables.Rule) {
 		return "a multispeed motor", &necNameplate
 	case n.HighTorque:
 		return "a high-torque motor", &necNameplate
-	case n.SpeedRPM > 0 && n.SpeedRPM < 1200 && m.Kind != DirectCurrent:
+	case m.lowSpeed():
 		return "a motor built for less than 1200 r/min", &necNameplate
 	}
 	return "", nil
@@ -123,8 +125,11 @@ func (d *Demand) necFromTable(m Motor, e tables.Edition, marked tables.Figure) e
 	table, err := e.FullLoadCurrent(m.table(), m.Power, m.Voltage)
 	if err != nil {
 		largest, noColumn := e.LargestPower(m.table(), m.Voltage)
-		if noColumn != nil || !m.Power.IsHP() || m.Power.Cmp(largest) <= 0 || marked.IsZero() {
+		if noColumn != nil || m.Power.IsHP() && m.Power.Cmp(largest) <= 0 {
 			return err
+		}
+		if marked.IsZero() {
+			return instead(err, "a motor larger than the table, or not marked in horsepower, goes by motor.nameplate.amperes")
 		}
 		d.Design = marked.As("design current", e, &necBeyond)
 		if e < tables.NEC2023 {
@@ -137,6 +142,10 @@ func (d *Demand) necFromTable(m Motor, e tables.Edition, marked tables.Figure) e
 		d.Table = d.synchronous(m, e, table, &necSyncNote)
 	}
 	d.Design = d.Table.As("design current", e, &necTableCurrent)
+	if m.sixPole() && !marked.IsZero() {
+		d.Design = tables.LargestOf("design current", e, &necSixPole, d.Table, marked)
+		d.caution(e, &necSixPole, "the nameplate speed is below 1200 r/min, but that of a motor built for 1200: the larger of the table and nameplate currents is taken")
+	}
 	return nil
 }
 
@@ -165,7 +174,8 @@ func (d *Demand) necLockedRotor(m Motor, e tables.Edition) error {
 	case !n.LockedRotor.IsZero():
 		d.LockedRotor = n.marked()
 	case m.Kind == Torque:
-		d.LockedRotor = LockedRotor{FromNameplate, d.Design, d.Design}
+		rotor := d.Design.As("locked-rotor current", e, &necTorque)
+		d.LockedRotor = LockedRotor{FromNameplate, rotor, rotor}
 	case m.Kind == DirectCurrent:
 	case m.Kind == Hermetic:
 		d.LockedRotor = d.sixTimes(e, &necCompressorLR)
@@ -174,10 +184,13 @@ func (d *Demand) necLockedRotor(m Motor, e tables.Edition) error {
 		if err != nil {
 			return err
 		}
-		d.LockedRotor = LockedRotor{Source: FromCodeLetter, Low: e.LockedRotorOf(low, m.Power, m.Voltage, m.PhaseCount(), false)}
-		if !high.IsZero() {
-			d.LockedRotor.High = e.LockedRotorOf(high, m.Power, m.Voltage, m.PhaseCount(), true)
+		letter := " end of code letter " + strings.ToUpper(n.CodeLetter)
+		d.LockedRotor = LockedRotor{Source: FromCodeLetter, Low: e.LockedRotorOf(low, m.Power, m.Voltage, m.PhaseCount(), false).Renamed("locked-rotor current, low" + letter)}
+		if high.IsZero() {
+			d.caution(e, &necCodeLetter, "code letter V has no upper end: the locked-rotor current may be any above its low end")
+			return nil
 		}
+		d.LockedRotor.High = e.LockedRotorOf(high, m.Power, m.Voltage, m.PhaseCount(), true).Renamed("locked-rotor current, high" + letter)
 	case strings.EqualFold(n.DesignLetter, "A"):
 		d.caution(e, &necRotor, "the locked-rotor tables do not hold for Design A motors: give the marked locked-rotor current or the code letter")
 	case m.Kind == SquirrelCage || m.Kind == SinglePhase:
@@ -225,8 +238,12 @@ func (d *Demand) necAmpacities(m Motor, e tables.Edition) error {
 	if m.Duty.Kind == Continuous {
 		d.Branch = percentOf(branchName, e, base, d.Design, 125, 0)
 	} else {
+		nameplate := m.Nameplate.Amperes.Figure("nameplate full-load current")
+		if nameplate.IsZero() {
+			nameplate = d.Overload // which stands in for it, with a caution
+		}
 		var err error
-		if d.Branch, err = m.dutyAmpacity(branchName, e, &necDuty, d.Overload); err != nil {
+		if d.Branch, err = m.dutyAmpacity(branchName, e, &necDuty, nameplate); err != nil {
 			return err
 		}
 	}
@@ -240,7 +257,10 @@ func (d *Demand) necAmpacities(m Motor, e tables.Edition) error {
 	case PartWinding:
 		d.Supply = d.share(m, e, &necPartWinding, 625, 50)
 	case Drive:
-		d.Supply = d.Branch.As(supplyName, e, &necDriveOutput)
+		d.Supply = d.Branch.Renamed(supplyName)
+		if m.Duty.Kind == Continuous {
+			d.Supply = percentOf(supplyName, e, &necDriveOutput, d.Design, 125, 0)
+		}
 		d.Branch = percentOf(branchName, e, &necDriveInput, d.Input, 125, 0)
 	}
 	if secondary := m.Nameplate.Secondary.Figure("secondary full-load current"); !secondary.IsZero() {

@@ -62,11 +62,14 @@ func (m Motor) validatePhases(f *faults) {
 
 func (m Motor) validatePower(f *faults) {
 	if m.Power.IsZero() && m.Nameplate.Amperes.IsZero() {
-		want := `rated output such as "7-1/2 hp" or "30 kW", or else motor.nameplate.amperes`
-		if m.Kind == Torque {
-			want = "rated output, or motor.nameplate.amperes"
+		switch m.Kind {
+		case Torque:
+			f.add("motor.nameplate.amperes", "", "the locked-rotor current marked on a torque motor")
+		case Hermetic:
+			f.add("motor.nameplate.amperes", "", "the rated-load current marked on a hermetic motor-compressor")
+		default:
+			f.add("motor.power", "", `rated output such as "7-1/2 hp" or "30 kW", or else motor.nameplate.amperes`)
 		}
-		f.add("motor.power", "", want)
 	}
 	if !m.Power.IsZero() && !m.Power.AtMost(100_000) {
 		f.add("motor.power", m.Power.String(), "at most 100000")

@@ -1,6 +1,8 @@
 package protection
 
 import (
+	"strconv"
+
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -31,11 +33,11 @@ type ShortCircuit struct {
 // kind of device is a [*tables.InputError]; a limit that no standard rating
 // meets is a [*tables.NoSizeError].
 func SizeShortCircuit(e tables.Edition, device tables.Device, m motor.Motor, d motor.Demand) (ShortCircuit, error) {
-	if !device.IsValid() {
-		return ShortCircuit{}, &tables.InputError{Field: "device", Value: device.String(), Want: "non_time_delay_fuse, time_delay_fuse, inverse_time_breaker or instantaneous_breaker"}
+	err := ValidateDevice(e, device, m.Kind)
+	if err != nil {
+		return ShortCircuit{}, err
 	}
 	s := ShortCircuit{Device: device}
-	var err error
 	if e.Code() == tables.CEC {
 		err = s.cec(e, m, d)
 	} else {
@@ -45,6 +47,22 @@ func SizeShortCircuit(e tables.Edition, device tables.Device, m motor.Motor, d m
 		return ShortCircuit{}, err
 	}
 	return s, nil
+}
+
+// ValidateDevice returns an [*tables.InputError] for an unknown kind of device,
+// or one that may not protect a motor of that kind.
+func ValidateDevice(e tables.Edition, device tables.Device, kind motor.Kind) error {
+	if !device.IsValid() {
+		return &tables.InputError{Field: "device", Value: strconv.Itoa(int(device)), Want: "non_time_delay_fuse, time_delay_fuse, inverse_time_breaker or instantaneous_breaker"}
+	}
+	rule := necFuseOrBreaker
+	if e.Code() == tables.CEC {
+		rule = cecCompressor
+	}
+	if device == InstantaneousBreaker && (kind == motor.Hermetic || kind == motor.Torque && e.Code() == tables.NEC) {
+		return &tables.InputError{Field: "device", Value: device.String(), Want: "a fuse or an inverse-time breaker for a " + kind.Name(), Cite: rule.In(e)}
+	}
+	return nil
 }
 
 func (s *ShortCircuit) caution(e tables.Edition, rule *tables.Rule, text string) {
@@ -98,5 +116,5 @@ func startLimit(e tables.Edition, rule *tables.Rule, device tables.Device, curre
 
 // noRating reports a limit that no standard rating meets.
 func noRating(e tables.Edition, device tables.Device, limit tables.Figure) error {
-	return &tables.NoSizeError{Field: "device", Need: limit, Cite: limit.Citation(), Constraint: "no standard rating of a " + device.Name()}
+	return &tables.NoSizeError{Field: "device", Need: limit, Cite: limit.Citation(), Constraint: "no standard rating reaches it (" + device.Name() + ")"}
 }

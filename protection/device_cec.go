@@ -22,9 +22,6 @@ var (
 func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) error {
 	s.caution(e, &cecMarkedMax, "a lower maximum marked on the motor control equipment wins")
 	if s.Device == InstantaneousBreaker {
-		if m.Kind == motor.Hermetic {
-			return &tables.InputError{Field: "device", Value: s.Device.String(), Want: "a fuse or an inverse-time breaker for a " + m.Kind.Name(), Cite: cecCompressor.In(e)}
-		}
 		s.cecInstantaneous(e, m, d)
 		s.Limit = s.Instantaneous
 		s.caution(e, &cecInstant, "an instantaneous-trip breaker must be part of a combination starter that also gives overload protection")
@@ -59,7 +56,7 @@ func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 // cecRatings takes the standard ratings at or below the limits, and 15 A where
 // that is more.
 func (s *ShortCircuit) cecRatings(e tables.Edition, limit, start *tables.Rule) {
-	floor := tables.StatedFigure("always allowed", e, &cecFloor, tables.Ampere, 15, 0)
+	floor := tables.StatedFigure("rating that is always allowed", e, &cecFloor, tables.Ampere, 15, 0)
 	s.Rating = atLeast(e, ratingName, e.RatingAtOrBelow(s.Device, s.Limit, ratingName, limit), floor)
 	s.StartRating = atLeast(e, startRatingName, e.RatingAtOrBelow(s.Device, s.StartLimit, startRatingName, start), floor)
 }
@@ -78,7 +75,8 @@ func (s *ShortCircuit) cecInstantaneous(e tables.Edition, m motor.Motor, d motor
 	ofFullLoad, ofLockedRotor, floor := e.InstantaneousCaps(m.Kind == motor.DirectCurrent, d.Horsepower)
 	s.Instantaneous = tables.ProductOf(instantaneousName, e, &cecInstant, d.Design, ofFullLoad)
 	if d.LockedRotor.Source == motor.FromNameplate && !ofLockedRotor.IsZero() {
-		marked := tables.ProductOf(instantaneousName, e, &cecInstant, d.LockedRotor.High, ofLockedRotor)
+		marked := tables.ProductOf("by locked-rotor current", e, &cecInstant, d.LockedRotor.High, ofLockedRotor)
+		s.Instantaneous = s.Instantaneous.Renamed("by full-load current")
 		s.Instantaneous = tables.SmallestOf(instantaneousName, e, &cecInstant, s.Instantaneous, marked)
 	}
 	if !floor.IsZero() {

@@ -10,14 +10,15 @@ import (
 // Rules of NFPA 70, 430.52 and 440.22, for the branch-circuit device. The next
 // higher standard rating is allowed for the first limit, never for the second.
 var (
-	necLimit        = tables.Rule{Ref: "430.52(C)(1)"}
-	necNextUp       = tables.Rule{Ref: "430.52(C)(1) Exception No. 1", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(1)(a)"}}}
-	necStart        = tables.Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(1)(b)"}}}
-	necInstant      = tables.Rule{Ref: "430.52(C)(3)"}
-	necInstantStart = tables.Rule{Ref: "430.52(C)(3) Exception No. 1", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(3)(b)(2)"}}}
-	necMarkedMax    = tables.Rule{Ref: "430.52(C)(2)"}
-	necTorqueDevice = tables.Rule{Ref: "430.52(D)"}
-	necSyncDevice   = tables.Rule{Ref: "Table 430.52", Moved: []tables.Move{{From: tables.NEC2023, Ref: "Table 430.52(C)(1)"}}, Note: "note on low-speed synchronous motors"}
+	necLimit         = tables.Rule{Ref: "430.52(C)(1)"}
+	necNextUp        = tables.Rule{Ref: "430.52(C)(1) Exception No. 1", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(1)(a)"}}}
+	necStart         = tables.Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(1)(b)"}}}
+	necInstant       = tables.Rule{Ref: "430.52(C)(3)"}
+	necInstantStart  = tables.Rule{Ref: "430.52(C)(3) Exception No. 1", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(3)(b)(2)"}}}
+	necMarkedMax     = tables.Rule{Ref: "430.52(C)(2)"}
+	necTorqueDevice  = tables.Rule{Ref: "430.52(D)"}
+	necFuseOrBreaker = tables.Rule{Ref: "430.52(D), 440.22"}
+	necSyncDevice    = tables.Rule{Ref: "Table 430.52", Moved: []tables.Move{{From: tables.NEC2023, Ref: "Table 430.52(C)(1)"}}, Note: "note on low-speed synchronous motors"}
 
 	necCompressor      = tables.Rule{Ref: "440.22(A)"}
 	necCompressorUp    = tables.Rule{Ref: "440.22(A) Exception No. 1"}
@@ -34,8 +35,6 @@ func efficientDesignB(e tables.Edition, n motor.Nameplate) bool {
 
 func (s *ShortCircuit) nec(e tables.Edition, m motor.Motor, d motor.Demand) error {
 	switch {
-	case m.Kind == motor.Torque && s.Device == InstantaneousBreaker, m.Kind == motor.Hermetic && s.Device == InstantaneousBreaker:
-		return &tables.InputError{Field: "device", Value: s.Device.String(), Want: "a fuse or an inverse-time breaker for a " + m.Kind.Name(), Cite: tables.Citation{Edition: e, Ref: "430.52(D), 440.22"}}
 	case m.Kind == motor.Torque: // nameplate current, next standard rating up
 		s.Limit = d.Design.As(limitName, e, &necTorqueDevice)
 		return s.nextUp(e, &necTorqueDevice)
@@ -53,12 +52,22 @@ func (s *ShortCircuit) nec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 		return err
 	}
 	s.StartLimit = startLimit(e, &necStart, s.Device, d.Design)
-	s.StartRating = tables.LargestOf(startRatingName, e, &necStart, s.Rating, e.RatingAtOrBelow(s.Device, s.StartLimit, startRatingName, &necStart))
+	s.startRating(e, &necStart)
 	s.caution(e, &necMarkedMax, "a lower maximum in the overload relay table or marked on the equipment wins")
 	if n := m.Nameplate; m.Kind == motor.Synchronous && n.SpeedRPM > 0 && n.SpeedRPM <= 450 {
 		s.caution(e, &necSyncDevice, "a low-torque synchronous motor of about 450 r/min or less that starts unloaded needs no more than 200 percent")
 	}
 	return nil
+}
+
+// startRating takes the standard rating at or below the higher ceiling, or the
+// ordinary one where the next size up has brought that above the ceiling already.
+func (s *ShortCircuit) startRating(e tables.Edition, rule *tables.Rule) {
+	s.StartRating = e.RatingAtOrBelow(s.Device, s.StartLimit, startRatingName, rule)
+	if s.StartRating.IsZero() || s.StartRating.Cmp(s.Rating) < 0 {
+		s.StartRating = s.Rating.As(startRatingName, e, rule).WithNote("which stands above this ceiling already")
+		s.caution(e, rule, "the ordinary rating, rounded up, already stands at or above what the higher ceiling allows")
+	}
 }
 
 // nextUp takes the standard rating at or above the limit.
@@ -94,7 +103,7 @@ func (s *ShortCircuit) necInstantaneous(e tables.Edition, m motor.Motor, d motor
 // necCompressor follows 440.22: 175 percent, 225 if it will not start, and 15 A
 // always. The next size up is allowed from 2023 on, for the first limit only.
 func (s *ShortCircuit) necCompressor(e tables.Edition, d motor.Demand) error {
-	floor := tables.StatedFigure("need not be below", e, &necCompressorFloor, tables.Ampere, 15, 0)
+	floor := tables.StatedFigure("rating that it need not be below", e, &necCompressorFloor, tables.Ampere, 15, 0)
 	s.Limit = percentOf(limitName, e, &necCompressor, d.Design, 175, "")
 	if e >= tables.NEC2023 {
 		if err := s.nextUp(e, &necCompressorUp); err != nil {
@@ -105,7 +114,7 @@ func (s *ShortCircuit) necCompressor(e tables.Edition, d motor.Demand) error {
 	}
 	s.Rating = tables.LargestOf(ratingName, e, &necCompressor, s.Rating, floor)
 	s.StartLimit = percentOf(startLimitName, e, &necCompressorStart, d.Design, 225, "")
-	s.StartRating = tables.LargestOf(startRatingName, e, &necCompressorStart, s.Rating, e.RatingAtOrBelow(s.Device, s.StartLimit, startRatingName, &necCompressorStart))
+	s.startRating(e, &necCompressorStart)
 	s.caution(e, &necCompressor, "a maximum device rating marked on the equipment wins")
 	return nil
 }

@@ -8,16 +8,18 @@ import (
 // A Disconnect is the disconnecting means of a motor circuit: what its switch
 // must at least be rated.
 type Disconnect struct {
-	Amperes     tables.Figure    `json:"amperes"`               // least ampere rating
-	Horsepower  tables.Power     `json:"horsepower,omitzero"`   // least horsepower rating; zero where none follows from the code
-	LockedRotor tables.Figure    `json:"locked_rotor,omitzero"` // locked-rotor current that the switch must be able to break
-	Sight       tables.Figure    `json:"in_sight"`              // farthest that "in sight" reaches, in metres
+	Amperes     tables.Figure    `json:"amperes"`                  // least ampere rating
+	Horsepower  tables.Power     `json:"horsepower,omitzero"`      // least horsepower rating; zero where none follows from the code
+	Cite        tables.Citation  `json:"horsepower_cite,omitzero"` // the rule that asks for the horsepower rating
+	LockedRotor tables.Figure    `json:"locked_rotor,omitzero"`    // locked-rotor current that the switch must be able to break
+	Sight       tables.Figure    `json:"in_sight"`                 // farthest that "in sight" reaches, in metres
 	Cautions    []tables.Caution `json:"-"`
 }
 
 // A Controller is the controller of a motor: what it must at least be rated.
 type Controller struct {
 	Horsepower  tables.Power     `json:"horsepower,omitzero"`         // least horsepower rating; zero where none follows from the code
+	Cite        tables.Citation  `json:"horsepower_cite,omitzero"`    // the rule that asks for the horsepower rating
 	Amperes     tables.Figure    `json:"amperes,omitzero"`            // least continuous rating, for motors that are not rated in horsepower
 	LockedRotor tables.Figure    `json:"locked_rotor,omitzero"`       // least locked-rotor rating, for a hermetic motor-compressor
 	GeneralUse  tables.Figure    `json:"general_use_switch,omitzero"` // least rating of a general-use switch that may serve instead; absent if none may

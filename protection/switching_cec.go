@@ -27,6 +27,9 @@ func disconnectCEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 		x.Sight = tables.StatedFigure("in sight within", e, &cecSight, tables.Metre, 3, 0).WithNote("refrigeration and air-conditioning equipment")
 		x.LockedRotor = d.LockedRotor.High.As("locked-rotor current for the switch", e, rule)
 	}
+	if !x.Horsepower.IsZero() {
+		x.Cite = rule.In(e)
+	}
 	base := d.Design
 	if m.Starting == motor.Drive {
 		base = tables.LargestOf("current at the disconnecting means", e, rule, d.Design, d.Input)
@@ -44,6 +47,9 @@ func disconnectCEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 
 func controllerCEC(e tables.Edition, m motor.Motor, d motor.Demand) Controller {
 	x := Controller{Horsepower: d.Horsepower}
+	if !x.Horsepower.IsZero() {
+		x.Cite = cecController.In(e)
+	}
 	if m.Kind == motor.Hermetic {
 		x.Amperes = d.Design.As("least full-load rating of the controller", e, &cecControllerHerm)
 		x.LockedRotor = d.LockedRotor.High.As("least locked-rotor rating of the controller", e, &cecControllerHerm)

@@ -13,6 +13,7 @@ var (
 	necDisconnectTorque = tables.Rule{Ref: "430.110(B)"}
 	necDisconnectRotor  = tables.Rule{Ref: "430.110(C)(1)"}
 	necDisconnectDrive  = tables.Rule{Ref: "430.128"}
+	necDrivePart        = tables.Rule{Ref: "430.130(A)"}
 	necDisconnectHerm   = tables.Rule{Ref: "440.12(A)"}
 	necDisconnectType   = tables.Rule{Ref: "430.109"}
 	necIsolating        = tables.Rule{Ref: "430.109(E)"}
@@ -34,15 +35,22 @@ func disconnectNEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 	}
 	rule, base := &necDisconnect, d.Design
 	switch {
-	case m.Starting == motor.Drive:
+	case m.Starting == motor.Drive: // in the incoming line of the drive, rated by its input
 		rule, base = &necDisconnectDrive, d.Input
+		x.Horsepower = tables.Power{}
+		caution(&necDrivePart, "the drive maker's marked maximum device and least disconnect win, and the listed drive's own protection of the motor is set from the nameplate")
 	case m.Kind == motor.Torque:
 		rule = &necDisconnectTorque
 	case m.Kind == motor.Hermetic:
 		rule = &necDisconnectHerm
 	}
 	x.Amperes = percentOf(disconnectName, e, rule, base, 115, "")
-	x.LockedRotor = rotorToBreak(e, m, d)
+	if m.Starting != motor.Drive {
+		x.LockedRotor = rotorToBreak(e, m, d)
+	}
+	if !x.Horsepower.IsZero() {
+		x.Cite = necDisconnectType.In(e)
+	}
 	if rule == &necDisconnect {
 		caution(&necUnfused, "a listed unfused switch rated in horsepower not below the motor's may have a lower ampere rating")
 	}
@@ -70,6 +78,9 @@ func rotorToBreak(e tables.Edition, m motor.Motor, d motor.Demand) tables.Figure
 
 func controllerNEC(e tables.Edition, m motor.Motor, d motor.Demand) Controller {
 	x := Controller{Horsepower: d.Horsepower}
+	if !x.Horsepower.IsZero() {
+		x.Cite = necController.In(e)
+	}
 	switch m.Kind {
 	case motor.Torque:
 		x.Amperes = d.Design.As("least continuous rating of the controller", e, &necControllerTorque)

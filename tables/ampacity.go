@@ -64,15 +64,17 @@ func (r *Run) UnmarshalText(text []byte) error {
 }
 
 // An AmpacityTable is one printed table of ampacity, of one material: amperes
-// by size and by column of conductor temperature, at an ambient of 30 °C.
+// by size and by column of conductor temperature, at an ambient of 30 °C. The
+// zero table is empty.
 type AmpacityTable struct {
 	edition Edition
 	*ampacityData
 }
 
 type ampacityData struct {
-	rule    *Rule
+	rule    func(Size, int) *Rule      // by size and column: the marks of cells differ
 	columns []int                      // °C, rising
+	names   []string                   // of a figure, by column
 	cells   [len(awgNames) + 1][]int64 // by Size, then column; nil is no row
 	notes   [len(awgNames) + 1][]string
 }
@@ -100,6 +102,9 @@ func (e Edition) Ampacities(run Run, m Material) (AmpacityTable, error) {
 // in °C; 0 if there is none.
 func (t AmpacityTable) Column(celsius int) int {
 	best := 0
+	if t.ampacityData == nil {
+		return best
+	}
 	for _, c := range t.columns {
 		if c <= celsius {
 			best = c
@@ -111,12 +116,12 @@ func (t AmpacityTable) Column(celsius int) int {
 // Ampacity returns the printed ampacity of a size in the column of that
 // temperature. The figure is absent where the table has no entry.
 func (t AmpacityTable) Ampacity(s Size, column int) Figure {
-	if int(s) >= len(t.cells) || t.cells[s] == nil {
+	if t.ampacityData == nil || int(s) >= len(t.cells) || t.cells[s] == nil {
 		return Figure{}
 	}
 	for i, c := range t.columns {
 		if c == column && t.cells[s][i] >= 0 {
-			f := newFigure("ampacity", Tabulated, t.edition, t.rule, exact.New(t.cells[s][i], 2), Ampere)
+			f := newFigure(t.names[i], Tabulated, t.edition, t.rule(s, column), exact.New(t.cells[s][i], 2), Ampere)
 			f.note = t.notes[s][i]
 			return f
 		}
@@ -127,6 +132,9 @@ func (t AmpacityTable) Ampacity(s Size, column int) Figure {
 // AtLeast returns the smallest size, of those from least to most, whose ampacity
 // in that column is at or above need; 0 if there is none.
 func (t AmpacityTable) AtLeast(need Figure, column int, least, most Size) Size {
+	if t.ampacityData == nil {
+		return 0
+	}
 	want, col := need.value.HundredthsUp(), -1
 	for i, c := range t.columns {
 		if c == column {
@@ -145,9 +153,17 @@ func (t AmpacityTable) AtLeast(need Figure, column int, least, most Size) Size {
 }
 
 // Citation returns the table's citation.
-func (t AmpacityTable) Citation() Citation { return t.rule.In(t.edition) }
+func (t AmpacityTable) Citation() Citation {
+	if t.ampacityData == nil {
+		return Citation{}
+	}
+	return t.rule(0, 0).In(t.edition)
+}
 
-func loadAmpacity(path string, m Material, rule *Rule) func() *ampacityData {
+// always is the rule of a table whose cells are all equally sure.
+func always(rule *Rule) func(Size, int) *Rule { return func(Size, int) *Rule { return rule } }
+
+func loadAmpacity(path string, m Material, rule func(Size, int) *Rule) func() *ampacityData {
 	return loaded(func() (*ampacityData, error) {
 		g, err := open(path)
 		if err != nil {
@@ -157,7 +173,7 @@ func loadAmpacity(path string, m Material, rule *Rule) func() *ampacityData {
 	})
 }
 
-func newAmpacity(g *csvgrid.Grid, m Material, rule *Rule) (*ampacityData, error) {
+func newAmpacity(g *csvgrid.Grid, m Material, rule func(Size, int) *Rule) (*ampacityData, error) {
 	t := &ampacityData{rule: rule}
 	prefix := [...]string{"cu_", "al_"}[m]
 	var cols []int
@@ -168,6 +184,7 @@ func newAmpacity(g *csvgrid.Grid, m Material, rule *Rule) (*ampacityData, error)
 				return nil, fmt.Errorf("%s: column %q", g.Path, name)
 			}
 			t.columns, cols = append(t.columns, celsius), append(cols, i)
+			t.names = append(t.names, "ampacity in the "+strconv.Itoa(celsius)+" °C column")
 		}
 	}
 	if len(cols) == 0 {
@@ -184,7 +201,7 @@ func newAmpacity(g *csvgrid.Grid, m Material, rule *Rule) (*ampacityData, error)
 			if cells[i], err = g.Hundredths(row, col); err != nil {
 				return nil, err
 			}
-			notes[i] = size.String() + " " + m.String() + ", " + strconv.Itoa(t.columns[i]) + " °C column"
+			notes[i] = size.String() + " " + m.String()
 			if i > 0 && cells[i] >= 0 && cells[i] < cells[i-1] {
 				return nil, fmt.Errorf("%s: %v falls with temperature", g.Path, size)
 			}

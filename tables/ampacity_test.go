@@ -172,7 +172,7 @@ func TestAmpacityAtLeast(t *testing.T) {
 	assert.Equal(t, "NFPA 70-2023 Table 310.16", table.Citation().String())
 	f := table.Ampacity(all[7], 75)
 	assert.Equal(t, "85 A", f.String())
-	assert.Equal(t, "from the table, 4 AWG copper, 75 °C column", f.How())
+	assert.Equal(t, "from the table, 4 AWG copper", f.How())
 	assert.True(t, table.Ampacity(tables.Must(tables.ParseSize("16 mm2")), 75).IsZero(), "metric")
 	assert.True(t, table.Ampacity(0, 75).IsZero(), "no size")
 	assert.True(t, table.Ampacity(all[7], 80).IsZero(), "no such column")

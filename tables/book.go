@@ -4,6 +4,7 @@ package tables
 // by the edition where the book takes one. A nil entry is a table that the code
 // does not have.
 type book struct {
+	motors           string // the part of the code that motors stand in
 	fullLoad         [motorTableCount]func() *motorTable
 	lockedRotor1     func(Edition) *motorTable
 	lockedRotor3     func() *motorTable

@@ -91,6 +91,14 @@ func (f Figure) As(name string, e Edition, rule *Rule) Figure {
 	return newFigure(name, Taken, e, rule, f.value, f.unit, f)
 }
 
+// Renamed returns f under another name, worked out in the same way.
+func (f Figure) Renamed(name string) Figure {
+	if !f.IsZero() {
+		f.name = name
+	}
+	return f
+}
+
 // StandIn returns f as an assumed value of another name: it stands in for what
 // was not given, and a caution must say so.
 func (f Figure) StandIn(name string, e Edition, rule *Rule) Figure {

@@ -9,30 +9,34 @@ var cecVolts = []voltRange{{115, 115, 120}, {230, 230, 240}, {460, 460, 480}, {5
 var cecSinglePhaseNote = []derivedColumn{{200, 230, 115, &cecTable45}, {208, 230, 110, &cecTable45}}
 
 var (
-	cecTable44 = Rule{Ref: "Table 44", Mark: MarkB}
-	cecTable45 = Rule{Ref: "Table 45"}
-	cecTableD2 = Rule{Ref: "Table D2", Mark: MarkC}
-	cecTable27 = Rule{Ref: "Table 27"}
-	cecTable29 = Rule{Ref: "Table 29"}
-	cecTable25 = Rule{Ref: "Table 25", Mark: MarkB}
-	cecTable37 = Rule{Ref: "Table 37", Mark: MarkC}
-	cecTable13 = Rule{Ref: "Table 13", Mark: MarkB}
+	cecTable44      = Rule{Ref: "Table 44", Mark: MarkB}
+	cecTable45      = Rule{Ref: "Table 45"}
+	cecTableD2      = Rule{Ref: "Table D2", Mark: MarkC}
+	cecTable27      = Rule{Ref: "Table 27"}
+	cecTable29      = Rule{Ref: "Table 29"}
+	cecTable25      = Rule{Ref: "Table 25", Mark: MarkB}
+	cecTable25Other = Rule{Ref: "Table 25", Mark: MarkC} // other than three-phase
+	cecTable37      = Rule{Ref: "Table 37", Mark: MarkC}
+	cecTable13      = Rule{Ref: "Table 13", Mark: MarkB}
 
-	cecTable2   = Rule{Ref: "Table 2"}
-	cecTable4   = Rule{Ref: "Table 4"}
-	cecTable1   = Rule{Ref: "Table 1", Mark: MarkC}
-	cecTable3   = Rule{Ref: "Table 3", Mark: MarkC}
-	cecTable5A  = Rule{Ref: "Table 5A", Mark: MarkB}
-	cecTable5B  = Rule{Ref: "Table 5B"}
-	cecTable5C  = Rule{Ref: "Table 5C"}
-	cecTable19  = Rule{Ref: "Table 19", Mark: MarkB}
-	cecRaise    = Rule{Ref: "Rule 28-200(4)"}
-	cecInstant  = Rule{Ref: "Rule 28-210"}
-	cecSmall    = Rule{Ref: "Rule 14-104(2)"}
-	cecBigTrade = Rule{Ref: "Table 13", Note: "ratings above 800 A: common practice, no source", Mark: MarkC}
+	cecTable2    = Rule{Ref: "Table 2"}
+	cecTable4    = Rule{Ref: "Table 4"}
+	cecTable2Hot = Rule{Ref: "Table 2", Mark: MarkB} // columns above 90 °C
+	cecTable4Hot = Rule{Ref: "Table 4", Mark: MarkB}
+	cecTable1    = Rule{Ref: "Table 1", Mark: MarkC}
+	cecTable3    = Rule{Ref: "Table 3", Mark: MarkC}
+	cecTable5A   = Rule{Ref: "Table 5A", Mark: MarkB}
+	cecTable5B   = Rule{Ref: "Table 5B"}
+	cecTable5C   = Rule{Ref: "Table 5C"}
+	cecTable19   = Rule{Ref: "Table 19", Mark: MarkB}
+	cecRaise     = Rule{Ref: "Rule 28-200(4)"}
+	cecInstant   = Rule{Ref: "Rule 28-210"}
+	cecSmall     = Rule{Ref: "Rule 14-104(2)"}
+	cecBigTrade  = Rule{Ref: "Table 13", Note: "ratings above 800 A: common practice, no source", Mark: MarkC}
 )
 
 var cecBook = book{
+	motors: "Section 28",
 	fullLoad: [motorTableCount]func() *motorTable{
 		DirectCurrentTable: loadMotorTable("cec/motor_flc_dc.csv", &cecTableD2, nil, nil, nil),
 		SinglePhaseTable:   loadMotorTable("cec/motor_flc_1ph.csv", &cecTable45, cecVolts, cecSinglePhaseNote, nil),
@@ -44,21 +48,40 @@ var cecBook = book{
 	ceilings:         loadCeilings("cec/motor_ocpd_increase_caps.csv", &cecRaise),
 	instantaneous:    loadInstantaneous("cec/motor_instantaneous_trip_caps.csv", &cecInstant),
 	ratings:          func(Edition, Device) *ratingTable { return cecRatings() },
-	overloadUnits:    loadUnits("cec/motor_table25_overload_count.csv", &cecTable25, map[int]string{0: "one_phase_ac_or_dc_2_wire_one_conductor_grounded", 1: "one_phase_ac_or_dc_2_wire_one_conductor_grounded", 2: "two_phase_4_wire_ac", 3: "three_phase_ac_any"}),
+	overloadUnits:    loadUnits("cec/motor_table25_overload_count.csv", table25Rule, map[int]string{0: "one_phase_ac_or_dc_2_wire_one_conductor_grounded", 1: "one_phase_ac_or_dc_2_wire_one_conductor_grounded", 2: "two_phase_4_wire_ac", 3: "three_phase_ac_any"}),
 	supplyInsulation: loadSupplyInsulation("cec/motor_insulation_temperature.csv", &cecTable37),
 	raceway: [materialCount]func() *ampacityData{
-		Copper:   loadAmpacity("cec/conductor_ampacity_copper_raceway.csv", Copper, &cecTable2),
-		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_raceway.csv", Aluminum, &cecTable4),
+		Copper:   loadAmpacity("cec/conductor_ampacity_copper_raceway.csv", Copper, hotColumns(&cecTable2, &cecTable2Hot)),
+		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_raceway.csv", Aluminum, hotColumns(&cecTable4, &cecTable4Hot)),
 	},
 	freeAir: [materialCount]func() *ampacityData{
-		Copper:   loadAmpacity("cec/conductor_ampacity_copper_free_air.csv", Copper, &cecTable1),
-		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_free_air.csv", Aluminum, &cecTable3),
+		Copper:   loadAmpacity("cec/conductor_ampacity_copper_free_air.csv", Copper, always(&cecTable1)),
+		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_free_air.csv", Aluminum, always(&cecTable3)),
 	},
 	ambient:         loadAmbient("cec/conductor_ambient.csv", "ambient_c", true, &cecTable5A),
 	count:           loadCounts("cec/conductor_count_5c.csv", &cecTable5C, Plain),
 	spacing:         loadCounts("cec/conductor_spacing_5b.csv", &cecTable5B, Plain),
 	insulations:     loadInsulationsCEC("cec/conductor_insulations.csv", &cecTable19),
 	smallConductors: loadSmallConductors("cec/conductor_small_14_104.csv", func([]string) *Rule { return &cecSmall }),
+}
+
+// table25Rule marks the row for three phases, which Rule 28-304(2) confirms, as
+// surer than the others.
+func table25Rule(phases int) *Rule {
+	if phases == 3 {
+		return &cecTable25
+	}
+	return &cecTable25Other
+}
+
+// hotColumns gives the columns above 90 °C a mark of their own.
+func hotColumns(rule, hot *Rule) func(Size, int) *Rule {
+	return func(_ Size, column int) *Rule {
+		if column > 90 {
+			return hot
+		}
+		return rule
+	}
 }
 
 // Ratings to 800 A are those of Table 13; above, those that the trade makes.

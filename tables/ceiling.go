@@ -98,14 +98,14 @@ func loadCeilings(path string, rule *Rule) func() *ceilingTable {
 // instantaneous-trip breaker: percents of full-load and of locked-rotor
 // current, and a least setting that need not be gone below. Absent figures do
 // not apply; all are absent under the NEC, whose percents stand in its table. A
-// direct-current motor of unknown power takes the lower limit, of large motors.
+// direct-current motor of which no horsepower is known takes the lower limit, of large motors.
 func (e Edition) InstantaneousCaps(dc bool, p Power) (ofFullLoad, ofLockedRotor, floor Figure) {
 	if !e.IsValid() || e.book().instantaneous == nil {
 		return
 	}
 	t := e.book().instantaneous()
 	for _, r := range t.rows {
-		if r.dc != dc || r.hpTo > 0 && (p.IsZero() || !p.AtMost(r.hpTo)) || r.hpOver > 0 && !p.IsZero() && p.AtMost(r.hpOver) {
+		if r.dc != dc || r.hpTo > 0 && !(p.IsHP() && p.AtMost(r.hpTo)) || r.hpOver > 0 && p.IsHP() && p.AtMost(r.hpOver) {
 			continue
 		}
 		ofFullLoad = newFigure("instantaneous-trip limit, of full-load current", Stated, e, t.rule, r.ofFullLoad, Percent)

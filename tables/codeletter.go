@@ -32,8 +32,16 @@ var codeLetters = loaded(func() (map[string]codeLetter, error) {
 
 // LockedRotorKVA returns the ends of a code letter's range of locked-rotor kVA
 // per horsepower, as printed in Table 430.7(B). High is absent for letter V,
-// which has no upper end. Letters I, O and Q are not in use.
+// which has no upper end. Letters I, O and Q are not in use. The CEC has no such
+// table: a [*NotTabulatedError].
 func (e Edition) LockedRotorKVA(letter string) (low, high Figure, err error) {
+	if err := e.Check(); err != nil {
+		return Figure{}, Figure{}, err
+	}
+	if e.Code() != NEC {
+		return Figure{}, Figure{}, &NotTabulatedError{Field: "motor.nameplate.code_letter", Table: Citation{Edition: e, Ref: "Section 28"},
+			Row: "table of code letters", Covers: "marked locked-rotor amperes, and six times full-load current"}
+	}
 	l, ok := codeLetters()[strings.ToUpper(letter)]
 	if !ok {
 		return Figure{}, Figure{}, &InputError{Field: "motor.nameplate.code_letter", Value: clip(letter),
@@ -48,8 +56,12 @@ func (e Edition) LockedRotorKVA(letter string) (low, high Figure, err error) {
 
 // LockedRotorOf turns locked-rotor kVA per horsepower into amperes at the rated
 // voltage: kVA/hp × hp × 1000 ÷ volts, ÷ 1.732 for three phases or ÷ 2 for two.
-// The low end is rounded down to 0.01 A, the high end up.
+// The low end is rounded down to 0.01 A, the high end up. It is absent for a
+// power that is not in horsepower and for no voltage.
 func (e Edition) LockedRotorOf(kva Figure, p Power, volts, phases int, up bool) Figure {
+	if !p.IsHP() || volts <= 0 {
+		return Figure{}
+	}
 	over := kva.value.Mul(exact.Int(p.num)).Mul(exact.Int(1000))
 	under := exact.Int(p.den).Mul(exact.Int(int64(volts)))
 	note := fmt.Sprintf("times %v, times 1000, over %d V", p, volts)

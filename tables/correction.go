@@ -18,6 +18,9 @@ func (e Edition) AmbientFactor(celsius int, ambient Temperature) (Figure, error)
 		return Figure{}, err
 	}
 	t := e.book().ambient()
+	if ambient.IsZero() {
+		return Figure{}, &InputError{Field: "wiring.ambient", Want: "the temperature of the air around the conductors", Cite: t.rule.In(e)}
+	}
 	col := -1
 	for i, c := range t.columns {
 		if c <= celsius {
@@ -25,7 +28,7 @@ func (e Edition) AmbientFactor(celsius int, ambient Temperature) (Figure, error)
 		}
 	}
 	if col < 0 {
-		return Figure{}, &NotTabulatedError{"wiring.insulation", t.rule.In(e), strconv.Itoa(celsius) + " °C conductor", "", "60 °C conductors and hotter"}
+		return Figure{}, &NotTabulatedError{Field: "wiring.insulation", Table: t.rule.In(e), Row: strconv.Itoa(celsius) + " °C conductor", Covers: "60 °C conductors and hotter"}
 	}
 	if t.noCredit && ambient.n.Cmp(exact.Int(30)) <= 0 {
 		f := newFigure("ambient factor", Tabulated, e, t.rule, exact.Int(1), Plain)
@@ -46,8 +49,7 @@ func (e Edition) AmbientFactor(celsius int, ambient Temperature) (Figure, error)
 			last = top
 		}
 	}
-	return Figure{}, &NotTabulatedError{"wiring.ambient", t.rule.In(e), "factor for a " + strconv.Itoa(t.columns[col]) + " °C conductor", ambient.String(),
-		fmt.Sprintf("ambients up to %d °C for it", last)}
+	return Figure{}, &NotTabulatedError{Field: "wiring.ambient", Table: t.rule.In(e), Row: "factor for a " + strconv.Itoa(t.columns[col]) + " °C conductor", Col: ambient.String(), Covers: fmt.Sprintf("ambients up to %d °C for it", last)}
 }
 
 type ambientTable struct {
@@ -93,7 +95,7 @@ func loadAmbient(path, topColumn string, noCredit bool, rule *Rule) func() *ambi
 				if row > 0 && cells[i] > t.cells[row-1][i] {
 					return nil, fmt.Errorf("%s: factor rises with ambient at %d °C", path, hottest)
 				}
-				notes[i] = fmt.Sprintf("row to %d °C, %d °C conductor", hottest, t.columns[i])
+				notes[i] = fmt.Sprintf("ambient up to %d °C, %d °C conductor", hottest, t.columns[i])
 			}
 			t.tops, t.cells, t.notes = append(t.tops, int64(hottest)), append(t.cells, cells), append(t.notes, notes)
 		}
@@ -142,8 +144,11 @@ func (t *countTable) factor(name string, e Edition, n int) (Figure, error) {
 			return newFigure(name, Tabulated, e, t.rule, b.factor, b.unit).WithNote(b.note), nil
 		}
 	}
-	return Figure{}, &InputError{"wiring.conductors", strconv.Itoa(n),
-		fmt.Sprintf("a count from %d conductors", t.bands[0].from), t.rule.In(e)}
+	want := fmt.Sprintf("a count from %d conductors", t.bands[0].from)
+	if last := t.bands[len(t.bands)-1].to; last > 0 {
+		want = fmt.Sprintf("%d to %d conductors", t.bands[0].from, last)
+	}
+	return Figure{}, &InputError{"wiring.conductors", strconv.Itoa(n), want, t.rule.In(e)}
 }
 
 // loadCounts reads bands of from, to and factor; or points of count and factor.

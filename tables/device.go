@@ -67,6 +67,9 @@ func (e Edition) DevicePercent(q DeviceQuery) (Figure, error) {
 	if err := e.Check(); err != nil {
 		return Figure{}, err
 	}
+	if !q.Device.IsValid() {
+		return Figure{}, &InputError{Field: "device", Value: fmt.Sprint(uint8(q.Device)), Want: "a kind of short-circuit device"}
+	}
 	t := e.book().devices()
 	for i := range t.rows {
 		if r := &t.rows[i]; r.matches(q) && r.percent[q.Device] >= 0 {

@@ -55,7 +55,7 @@ func (e Edition) DutyPercent(d Duty, minutes int) (Figure, error) {
 	}
 	cell := t.cells[d-1][col]
 	if cell < 0 {
-		return Figure{}, &NotTabulatedError{"motor.duty.minutes", t.rule.In(e), "figure for short-time duty", "a motor rated for continuous running", "motors rated 5, 15, 30 and 60 minutes"}
+		return Figure{}, &NotTabulatedError{Field: "motor.duty.minutes", Table: t.rule.In(e), Row: "figure for short-time duty", Col: "a motor rated for continuous running", Covers: "motors rated 5, 15, 30 and 60 minutes"}
 	}
 	return newFigure(t.names[d-1], Tabulated, e, t.rule, exact.New(cell, 2), Percent).WithNote(dutyColumns[col].label), nil
 }

@@ -38,6 +38,8 @@ type NotTabulatedError struct {
 	Row    string // "51 hp"
 	Col    string // "460 V"
 	Covers string // what the table does print
+
+	Instead string // what else would size it, where the code says so; often ""
 }
 
 func (e *NotTabulatedError) Error() string {
@@ -45,7 +47,11 @@ func (e *NotTabulatedError) Error() string {
 	if e.Col != "" {
 		at = " at " + e.Col
 	}
-	return fmt.Sprintf("%s: %v has no %s%s; it covers %s", e.Field, e.Table, e.Row, at, e.Covers)
+	s := fmt.Sprintf("%s: %v has no %s%s; it covers %s", e.Field, e.Table, e.Row, at, e.Covers)
+	if e.Instead != "" {
+		s += "; " + e.Instead
+	}
+	return s
 }
 
 // A NoSizeError reports a requirement that no size or rating meets.
@@ -57,10 +63,11 @@ type NoSizeError struct {
 }
 
 func (e *NoSizeError) Error() string {
-	s := e.Field + ": " + e.Constraint
+	s := e.Field + ": "
 	if !e.Need.IsZero() {
-		s += fmt.Sprintf(" for %s of %v", e.Need.Name(), e.Need)
+		s += fmt.Sprintf("%s %v: ", e.Need.Name(), e.Need)
 	}
+	s += e.Constraint
 	if !e.Cite.IsZero() {
 		s += fmt.Sprintf(" [%v]", e.Cite)
 	}
@@ -81,6 +88,11 @@ func clip(s string) string {
 type Caution struct {
 	Text string   `json:"text"`
 	Cite Citation `json:"cite,omitzero"`
+}
+
+// FromMemory returns the caution of a figure that rests on a mark C.
+func FromMemory(cite Citation) Caution {
+	return Caution{Text: "carried from memory and not yet held against a readable copy: check it before use", Cite: cite}
 }
 
 // String returns the text with its citation.

@@ -164,7 +164,7 @@ func TestSinglePhaseNote(t *testing.T) {
 		f, err := e.FullLoadCurrent(tables.SinglePhaseTable, hp("7-1/2"), 208)
 		require.NoError(t, err)
 		assert.Equal(t, "44 A", f.String())
-		assert.Equal(t, "full-load current 40 A × 110 %", f.How())
+		assert.Equal(t, "table current 40 A × 110 %", f.How())
 		assert.Equal(t, e.Standard()+" Table 45", f.Citation().String())
 		for _, g := range f.Operands() {
 			assert.Equal(t, e.Standard()+" Table 45", g.Citation().String())

@@ -39,6 +39,7 @@ type Insulation struct {
 	Least     Size   // smallest size it is made in
 	Most      Size   // largest size it is made in
 	NoRaceway bool   // may not be pulled into a raceway
+	Mark      Mark   // how sure the type's row is
 	Note      string // conditions of use, often ""
 }
 
@@ -99,8 +100,9 @@ func (t *insulationTable) add(ins Insulation) error {
 	return nil
 }
 
-// loadInsulationsNEC reads rated temperatures by location and the range of sizes.
-func loadInsulationsNEC(path string, rule *Rule) func() *insulationTable {
+// loadInsulationsNEC reads rated temperatures by location and the range of
+// sizes; some types are carried from memory.
+func loadInsulationsNEC(path string, rule *Rule, fromMemory ...string) func() *insulationTable {
 	return loaded(func() (*insulationTable, error) {
 		g, err := open(path)
 		if err != nil {
@@ -113,6 +115,12 @@ func loadInsulationsNEC(path string, rule *Rule) func() *insulationTable {
 				if ins.Celsius[i], err = g.Int(row, 2+int(i), 0); err != nil {
 					return nil, err
 				}
+			}
+			if ins.Celsius[Damp] == 0 { // not printed apart: the wet value is the safe one
+				ins.Celsius[Damp] = ins.Celsius[Wet]
+			}
+			if ins.Mark = rule.Mark; slices.Contains(fromMemory, ins.Type) {
+				ins.Mark = MarkC
 			}
 			// 22 and 20 AWG machine-tool wire is below the library's series.
 			if ins.Least, err = ParseSize(strings.Replace(cells[5], "22", "18", 1)); err != nil {
@@ -131,7 +139,7 @@ func loadInsulationsNEC(path string, rule *Rule) func() *insulationTable {
 
 // condition drops from a note what is a remark on the transcription.
 func condition(note string) string {
-	for _, remark := range []string{"table lists dry and wet; damp implied", "damp implied", "dual rating"} {
+	for _, remark := range []string{"table lists dry and wet; damp implied", "damp implied", "dual rating", "exempt from the rooftop temperature adder"} {
 		note = strings.TrimPrefix(strings.TrimPrefix(note, remark), "; ")
 	}
 	return note
@@ -154,7 +162,7 @@ func loadInsulationsCEC(path string, rule *Rule) func() *insulationTable {
 			if err != nil {
 				return nil, err
 			}
-			ins := Insulation{Type: cells[0], Least: 1, Most: Size(len(awgNames)), NoRaceway: cells[raceway] == "no"}
+			ins := Insulation{Type: cells[0], Mark: rule.Mark, Least: 1, Most: Size(len(awgNames)), NoRaceway: cells[raceway] == "no"}
 			for i := range locationCount {
 				switch use := cells[3+int(i)]; use {
 				case "no":

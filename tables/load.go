@@ -8,7 +8,7 @@ import (
 	"example.org/motorcircuit/internal/csvgrid"
 )
 
-//go:embed data
+//go:embed data/*/*.csv
 var files embed.FS
 
 func open(path string) (*csvgrid.Grid, error) { return csvgrid.Read(files, "data/"+path) }

@@ -88,7 +88,7 @@ func (m *motorTable) powerAtOrAbove(e Edition, volts int, current Figure) (Power
 			return p, nil
 		}
 	}
-	return Power{}, &NotTabulatedError{"motor.nameplate.amperes", m.rule.In(e), "row at or above " + current.String(), m.cols[col].label, m.covers(col)}
+	return Power{}, &NotTabulatedError{Field: "motor.nameplate.amperes", Table: m.rule.In(e), Row: "row at or above " + current.String(), Col: m.cols[col].label, Covers: m.covers(col)}
 }
 
 // LargestPower returns the largest power that the table prints at that voltage.
@@ -112,7 +112,7 @@ func (e Edition) motorTable(t MotorTable) (*motorTable, error) {
 	if load := e.book().fullLoad[min(t, motorTableCount-1)]; load != nil && t < motorTableCount {
 		return load(), nil
 	}
-	return nil, &NotTabulatedError{Field: "motor.kind", Table: Citation{Edition: e, Ref: "Section 28"}, Row: "table for " + t.String(),
+	return nil, &NotTabulatedError{Field: "motor.kind", Table: Citation{Edition: e, Ref: e.book().motors}, Row: "table for " + t.String(),
 		Covers: "three-phase, single-phase and direct-current motors"}
 }
 
@@ -250,7 +250,7 @@ func (m *motorTable) column(e Edition, volts int, row string) (int, error) {
 			fmt.Fprintf(&b, " (%d to %d)", c.low, c.high)
 		}
 	}
-	return 0, &NotTabulatedError{"motor.voltage", m.rule.In(e), row, strconv.Itoa(volts) + " V", b.String() + " V"}
+	return 0, &NotTabulatedError{Field: "motor.voltage", Table: m.rule.In(e), Row: row, Col: strconv.Itoa(volts) + " V", Covers: b.String() + " V"}
 }
 
 // span returns the first and the last power that a column prints.
@@ -301,5 +301,5 @@ func (m *motorTable) figure(name string, e Edition, p Power, volts int) (Figure,
 	if p.IsZero() {
 		row = "motor without a power"
 	}
-	return Figure{}, &NotTabulatedError{"motor.power", m.rule.In(e), row, m.cols[col].label, m.covers(col)}
+	return Figure{}, &NotTabulatedError{Field: "motor.power", Table: m.rule.In(e), Row: row, Col: m.cols[col].label, Covers: m.covers(col)}
 }

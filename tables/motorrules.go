@@ -18,13 +18,13 @@ func (e Edition) OverloadUnits(phases int) (Figure, error) {
 	t := e.book().overloadUnits()
 	u, ok := t.byPhases[phases]
 	if !ok {
-		return Figure{}, &NotTabulatedError{Field: "motor.phases", Table: t.rule.In(e), Row: strconv.Itoa(phases) + "-phase motor", Covers: "dc, one-, two- and three-phase motors"}
+		return Figure{}, &NotTabulatedError{Field: "motor.phases", Table: t.rule(3).In(e), Row: strconv.Itoa(phases) + "-phase motor", Covers: "dc, one-, two- and three-phase motors"}
 	}
-	return newFigure("overload units", Tabulated, e, t.rule, exact.Int(u.count), Plain).WithNote(u.location), nil
+	return newFigure("number of overload units", Tabulated, e, t.rule(phases), exact.Int(u.count), Plain).WithNote(u.location), nil
 }
 
 type unitsTable struct {
-	rule     *Rule
+	rule     func(phases int) *Rule
 	byPhases map[int]struct {
 		count    int64
 		location string
@@ -32,7 +32,7 @@ type unitsTable struct {
 }
 
 // loadUnits reads the rows of the given supply systems, by phases.
-func loadUnits(path string, rule *Rule, supplies map[int]string) func() *unitsTable {
+func loadUnits(path string, rule func(phases int) *Rule, supplies map[int]string) func() *unitsTable {
 	return loaded(func() (*unitsTable, error) {
 		g, err := open(path)
 		if err != nil {

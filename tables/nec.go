@@ -21,10 +21,12 @@ var (
 	necFreeAir     = Rule{Ref: "Table 310.15(B)(17)", Moved: []Move{{NEC2020, "Table 310.17"}}, Mark: MarkB}
 	necAmbient     = Rule{Ref: "Table 310.15(B)(2)(a)", Moved: []Move{{NEC2020, "Table 310.15(B)(1)"}, {NEC2023, "Table 310.15(B)(1)(1)"}}, Mark: MarkB}
 	necCount       = Rule{Ref: "Table 310.15(B)(3)(a)", Moved: []Move{{NEC2020, "Table 310.15(C)(1)"}}}
+	necRacewayBig  = Rule{Ref: necRaceway.Ref, Moved: necRaceway.Moved, Mark: MarkB} // above 600 kcmil
 	necInsulations = Rule{Ref: "Table 310.104(A)", Moved: []Move{{NEC2020, "Table 310.4(A)"}, {NEC2023, "Table 310.4(1)"}}, Mark: MarkB}
 )
 
 var necBook = book{
+	motors: "Article 430",
 	fullLoad: [motorTableCount]func() *motorTable{
 		DirectCurrentTable: loadMotorTable("nec/motor_flc_dc.csv", &necDC, nil, nil, nil),
 		SinglePhaseTable:   loadMotorTable("nec/motor_flc_1ph.csv", &nec1Ph, necVolts, nil, nil),
@@ -43,18 +45,18 @@ var necBook = book{
 	devices:       loadDevices("nec/motor_ocpd_max_percent.csv", &necDevice),
 	ceilings:      loadCeilings("nec/motor_ocpd_increase_caps.csv", &necCeiling),
 	ratings:       necRatings,
-	overloadUnits: loadUnits("nec/motor_overload_units.csv", &necUnits, map[int]string{0: "2-wire 1-phase ac or dc one conductor grounded", 1: "2-wire 1-phase ac or dc one conductor grounded", 2: "4-wire 2-phase grounded or ungrounded", 3: "any 3-phase"}),
+	overloadUnits: loadUnits("nec/motor_overload_units.csv", func(int) *Rule { return &necUnits }, map[int]string{0: "2-wire 1-phase ac or dc one conductor grounded", 1: "2-wire 1-phase ac or dc one conductor grounded", 2: "4-wire 2-phase grounded or ungrounded", 3: "any 3-phase"}),
 	raceway: [materialCount]func() *ampacityData{
-		Copper:   loadAmpacity("nec/conductor_ampacity.csv", Copper, &necRaceway),
-		Aluminum: loadAmpacity("nec/conductor_ampacity.csv", Aluminum, &necRaceway),
+		Copper:   loadAmpacity("nec/conductor_ampacity.csv", Copper, necRacewayRule),
+		Aluminum: loadAmpacity("nec/conductor_ampacity.csv", Aluminum, necRacewayRule),
 	},
 	freeAir: [materialCount]func() *ampacityData{
-		Copper:   loadAmpacity("nec/conductor_ampacity_free_air.csv", Copper, &necFreeAir),
-		Aluminum: loadAmpacity("nec/conductor_ampacity_free_air.csv", Aluminum, &necFreeAir),
+		Copper:   loadAmpacity("nec/conductor_ampacity_free_air.csv", Copper, always(&necFreeAir)),
+		Aluminum: loadAmpacity("nec/conductor_ampacity_free_air.csv", Aluminum, always(&necFreeAir)),
 	},
 	ambient:     loadAmbient("nec/conductor_ambient_30c.csv", "ambient_max_c", false, &necAmbient),
 	count:       loadCounts("nec/conductor_adjustment.csv", &necCount, Percent),
-	insulations: loadInsulationsNEC("nec/conductor_insulations.csv", &necInsulations),
+	insulations: loadInsulationsNEC("nec/conductor_insulations.csv", &necInsulations, "FEP", "MI", "SA", "SIS", "TBS", "Z", "ZW", "ZW-2"),
 	smallConductors: loadSmallConductors("nec/motor_small_conductors.csv", func(row []string) *Rule {
 		return &Rule{Ref: row[4], Moved: []Move{{NEC2023, row[5]}}, Mark: MarkB}
 	}),
@@ -66,6 +68,17 @@ var (
 	necRotor1To2020 = loadMotorTable("nec/motor_locked_rotor_1ph.csv", &necRotor1, necVolts, nil, map[string]string{"v115_as_printed_2023": ""})
 	necRotor1As2023 = loadMotorTable("nec/motor_locked_rotor_1ph.csv", &necRotor1, necVolts, nil, map[string]string{"v115": "", "v115_as_printed_2023": "v115"})
 )
+
+// necRacewayRule marks the cells above 600 kcmil, some of which 2011 changed, as
+// read in one copy.
+func necRacewayRule(s Size, _ int) *Rule {
+	if s > size600 {
+		return &necRacewayBig
+	}
+	return &necRaceway
+}
+
+var size600 = Must(ParseSize("600"))
 
 // necRatings picks the list of standard ratings: 10 A came to breakers in 2023.
 func necRatings(e Edition, d Device) *ratingTable {

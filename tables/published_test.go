@@ -17,9 +17,10 @@ import (
 )
 
 // The files of testdata/published are a second transcription of the published
-// tables, typed line by line as printed and not taken from tables/data. Every
-// cell goes through the public lookup under every edition that it holds for.
-// Sources stand at the head of each file.
+// tables, typed line by line in the shape of the printed page and not made from
+// tables/data. It rests on the same copies, so it finds slips of copying and of
+// code, not misprints of a copy. Every cell goes through the public lookup under
+// every edition that it holds for. Sources stand at the head of each file.
 
 // A line is one printed line of a published table.
 type line struct {

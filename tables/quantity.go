@@ -42,7 +42,7 @@ func (ampere) article() string  { return "amperes" }
 func (celsius) unit() Unit      { return Celsius }
 func (celsius) article() string { return "degrees Celsius" }
 func (ratio) unit() Unit        { return Plain }
-func (ratio) article() string   { return "a ratio" }
+func (ratio) article() string   { return "ratio" }
 
 // ParseCurrent reads amperes: "65", "7.6" or "7.6 A".
 func ParseCurrent(s string) (Current, error) { return parseQuantity[ampere](s) }
@@ -64,7 +64,7 @@ func Must[T any](q T, err error) T {
 
 func parseQuantity[U measure](s string) (Quantity[U], error) {
 	var u U
-	text, negative := s, false
+	text, negative := strings.TrimSpace(s), false
 	if u.unit() != Plain {
 		text = strings.TrimSpace(strings.TrimSuffix(text, u.unit().String()))
 	}
@@ -74,6 +74,9 @@ func parseQuantity[U measure](s string) (Quantity[U], error) {
 	n, err := exact.Parse(text)
 	if err != nil {
 		want := "a plain decimal in " + u.article()
+		if u.unit() == Plain {
+			want = "a plain decimal such as 0.93"
+		}
 		if !errors.Is(err, exact.ErrSyntax) {
 			want += ", with at most nine digits before the point and six after"
 		}

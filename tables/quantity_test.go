@@ -87,7 +87,7 @@ func TestQuantityErrorText(t *testing.T) {
 	_, err = tables.ParseTemperature("hot")
 	assert.EqualError(t, err, `degrees Celsius "hot": want a plain decimal in degrees Celsius`)
 	_, err = tables.ParseRatio("1.15151515")
-	assert.EqualError(t, err, `a ratio "1.15151515": want a plain decimal in a ratio, with at most nine digits before the point and six after`)
+	assert.EqualError(t, err, `ratio "1.15151515": want a plain decimal such as 0.93, with at most nine digits before the point and six after`)
 	_, err = tables.ParseCurrent(strings.Repeat("9", 1000))
 	var input *tables.InputError
 	require.ErrorAs(t, err, &input)

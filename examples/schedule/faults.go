@@ -1,0 +1,113 @@
+package main
+
+import (
+	"errors"
+	"slices"
+	"strings"
+
+	mc "example.org/motorcircuit"
+	"example.org/motorcircuit/tables"
+)
+
+// faults are the faults of one row, by column.
+type faults struct {
+	list []fault
+}
+
+type fault struct {
+	column int // in columns; -1 for the row as a whole
+	text   string
+}
+
+// add adds an error of the library in the words of its column; an error that is
+// of no column is told of the row.
+func (f *faults) add(err error, column int) {
+	name := "row"
+	if column >= 0 {
+		name = columns[column].name
+	}
+	text := err.Error()
+	var input *tables.InputError
+	var missing *tables.NotTabulatedError
+	var noSize *tables.NoSizeError
+	switch {
+	case errors.As(err, &input):
+		e := *input
+		e.Field, e.Want = name, inColumns.Replace(e.Want)
+		text = e.Error()
+	case errors.As(err, &missing):
+		e := *missing
+		e.Field = name
+		text = e.Error()
+	case errors.As(err, &noSize):
+		e := *noSize
+		e.Field = name
+		text = e.Error()
+	default:
+		text = name + ": " + text
+	}
+	f.list = append(f.list, fault{column, text})
+}
+
+// texts returns the faults in the order of columns, each on one line.
+func (f *faults) texts() []string {
+	slices.SortStableFunc(f.list, func(a, b fault) int { return a.column - b.column })
+	texts := make([]string, len(f.list))
+	for i, x := range f.list {
+		texts[i] = strings.Join(strings.Fields(x.text), " ")
+	}
+	return texts
+}
+
+// size sizes a circuit and adds what the library has to say of it. A verdict on
+// a cell that could not be read, or that rests on one, is left out: it is told
+// already.
+func size(c mc.Circuit, f *faults) mc.Result {
+	r, err := mc.Size(c)
+	unread := slices.Clone(f.list)
+	for _, e := range leaves(err) {
+		column := columnOf(fieldOf(e))
+		told := func(x fault) bool { return x.column == column || column >= 0 && rests(column, x.column) }
+		if !slices.ContainsFunc(unread, told) {
+			f.add(e, column)
+		}
+	}
+	return r
+}
+
+// rests reports whether the verdict on a column rests on another.
+func rests(column, on int) bool {
+	return on >= 0 && slices.Contains(strings.Fields(columns[column].needs), columns[on].name)
+}
+
+// leaves takes joined errors apart.
+func leaves(err error) []error {
+	if err == nil {
+		return nil
+	}
+	joined, ok := err.(interface{ Unwrap() []error })
+	if !ok {
+		return []error{err}
+	}
+	var all []error
+	for _, e := range joined.Unwrap() {
+		all = append(all, leaves(e)...)
+	}
+	return all
+}
+
+// fieldOf returns the library's name of the field that an error is about.
+func fieldOf(err error) string {
+	var input *tables.InputError
+	var missing *tables.NotTabulatedError
+	var noSize *tables.NoSizeError
+	switch {
+	case errors.As(err, &input):
+		return input.Field
+	case errors.As(err, &missing):
+		return missing.Field
+	case errors.As(err, &noSize):
+		return noSize.Field
+	}
+	return ""
+}
