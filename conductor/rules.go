@@ -67,8 +67,10 @@ func (w Wiring) ambient(ins insulation) tables.Temperature {
 }
 
 // onRoof reports a run that is hotter than the ambient for lying close above a
-// roof; XHHW-2 is exempt.
-func (w Wiring) onRoof(ins insulation) bool { return w.Rooftop && ins.Type != "XHHW-2" }
+// roof: NEC, and XHHW-2 is exempt.
+func (w Wiring) onRoof(ins insulation) bool {
+	return w.Rooftop && ins.Type != "XHHW-2" && ins.Citation.Edition.Code() == tables.NEC
+}
 
 // rooftopAdder is what is added to the ambient of a run close above a roof, in °C.
 var rooftopAdder = decimal.New(33, 0)

@@ -1,6 +1,7 @@
 package conductor
 
 import (
+	"errors"
 	"strconv"
 
 	"example.org/motorcircuit/tables"
@@ -50,7 +51,7 @@ func (s Selection) IsZero() bool { return s.Size == 0 }
 // are [*tables.InputError], [*tables.NotTabulatedError] and
 // [*tables.NoSizeError].
 func (w Wiring) Select(e tables.Edition, l Load) (Selection, error) {
-	if err := w.Validate(e); err != nil {
+	if err := w.check(e, l); err != nil {
 		return Selection{}, err
 	}
 	ins, err := w.insulation(e)
@@ -61,6 +62,15 @@ func (w Wiring) Select(e tables.Edition, l Load) (Selection, error) {
 	s := r.start(w, l, ins)
 	s.Termination = r.termination(e, w, l, ins.celsius)
 	return r.choose(e, w, l, ins, s, r.columns(w, ins.celsius, celsiusOf(s.Termination)))
+}
+
+// check reports a wiring or a load that cannot stand.
+func (w Wiring) check(e tables.Edition, l Load) error {
+	err := w.Validate(e)
+	if l.Ampacity.Unit() != tables.Ampere || l.Ampacity.Cmp(tables.Figure{}) <= 0 {
+		err = errors.Join(err, &tables.InputError{Field: "load.ampacity", Value: l.Ampacity.String(), Want: "a least ampacity above 0 A"})
+	}
+	return err
 }
 
 // start returns a selection with what is known before a size is.

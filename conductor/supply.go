@@ -22,7 +22,7 @@ var cecSupply = tables.Rule{Ref: "Rule 28-104", Mark: tables.MarkB}
 // insulation rated at least as Table 37 says, with what the ambient exceeds
 // 30 °C by added. The NEC does not treat them apart: use [Wiring.Select].
 func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selection, error) {
-	if err := w.Validate(e); err != nil {
+	if err := w.check(e, l); err != nil {
 		return Selection{}, err
 	}
 	ins, err := w.insulation(e)
@@ -46,14 +46,15 @@ func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selec
 	if end.InsulationClass == "" {
 		s.Cautions = append(s.Cautions, tables.Caution{Text: "no insulation class of the motor is given: class B taken for the insulation of the motor supply conductors", Cite: least.Citation()})
 	}
-	if leastCelsius := int(least.Value().Ceil().IntPart()); leastCelsius > 75 {
+	leastCelsius := int(least.Value().Ceil().IntPart())
+	if leastCelsius > 75 {
 		s.Cautions = append(s.Cautions, supplyRun(e, end))
-		if leastCelsius > ins.celsius {
-			s.Cautions = append(s.Cautions, tables.Caution{Cite: cecSupply.In(e),
-				Text: ins.Type + " is not rated for the motor's terminal box: the motor supply conductors need insulation of " + least.String() + " or more, spliced to the branch conductors"})
-			ins.celsius, ins.Type = leastCelsius, least.String()+" insulation"
-			s.Insulation = ins.Type
-		}
+	}
+	if leastCelsius > ins.celsius {
+		s.Cautions = append(s.Cautions, tables.Caution{Cite: cecSupply.In(e),
+			Text: ins.Type + " is not rated for the motor's terminal box: the motor supply conductors need insulation of " + least.String() + " or more, spliced to the branch conductors"})
+		ins.celsius, ins.Type = leastCelsius, least.String()+" insulation"
+		s.Insulation = ins.Type
 	}
 	column := int64(75)
 	note := "whatever the insulation"

@@ -36,12 +36,12 @@ func (d *Demand) cec(m Motor, e tables.Edition) error {
 	case !n.LockedRotor.IsZero():
 		d.LockedRotor = n.marked()
 	case m.Kind == Torque:
-		rotor := d.Design.As("locked-rotor current", e, &cecTorque)
+		rotor := d.Design.As("locked-rotor current", e, &cecRotor)
 		d.LockedRotor = LockedRotor{FromNameplate, rotor, rotor}
 	case m.Kind == Hermetic:
-		d.LockedRotor = d.sixTimes(e, &cecCompressorR)
+		d.LockedRotor = sixTimes(e, &cecCompressorR, d.Overload)
 	case m.Kind != DirectCurrent:
-		d.LockedRotor = d.sixTimes(e, &cecRotor)
+		d.LockedRotor = sixTimes(e, &cecRotor, d.Design)
 	}
 	if m.Power.IsHP() {
 		d.Horsepower = m.Power

@@ -104,10 +104,11 @@ func instead(err error, what string) error {
 	return err
 }
 
-// sixTimes is the locked-rotor current of a motor of which nothing else is known.
-func (d *Demand) sixTimes(e tables.Edition, rule *tables.Rule) LockedRotor {
+// sixTimes is the locked-rotor current of a motor of which nothing else is known
+// than its full-load or rated-load current.
+func sixTimes(e tables.Edition, rule *tables.Rule, current tables.Figure) LockedRotor {
 	six := tables.StatedFigure("times full-load current", e, rule, tables.Plain, 6, 0)
-	f := tables.ProductOf("locked-rotor current", e, rule, d.Design, six)
+	f := tables.ProductOf("locked-rotor current", e, rule, current, six)
 	return LockedRotor{FromSixTimesFLC, f, f}
 }
 

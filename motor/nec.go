@@ -178,7 +178,7 @@ func (d *Demand) necLockedRotor(m Motor, e tables.Edition) error {
 		d.LockedRotor = LockedRotor{FromNameplate, rotor, rotor}
 	case m.Kind == DirectCurrent:
 	case m.Kind == Hermetic:
-		d.LockedRotor = d.sixTimes(e, &necCompressorLR)
+		d.LockedRotor = sixTimes(e, &necCompressorLR, d.Overload)
 	case n.CodeLetter != "" && m.Power.IsHP():
 		low, high, err := e.LockedRotorKVA(n.CodeLetter)
 		if err != nil {
@@ -198,9 +198,9 @@ func (d *Demand) necLockedRotor(m Motor, e tables.Edition) error {
 			d.LockedRotor = LockedRotor{FromTable, f, f}
 			return nil
 		}
-		d.LockedRotor = d.sixTimes(e, &necRotor)
+		d.LockedRotor = sixTimes(e, &necRotor, d.Design)
 	default:
-		d.LockedRotor = d.sixTimes(e, &necRotor)
+		d.LockedRotor = sixTimes(e, &necRotor, d.Design)
 	}
 	return nil
 }

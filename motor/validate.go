@@ -14,10 +14,10 @@ import (
 func (m Motor) Validate() error {
 	f := &faults{}
 	if m.Kind == 0 || m.Kind >= kindCount {
-		f.add("motor.kind", m.Kind.String(), "one of "+strings.Join(kindTexts[1:], ", "))
-		return f.err()
+		f.add("motor.kind", intText(int(m.Kind)), "one of "+strings.Join(kindTexts[1:], ", "))
+	} else {
+		m.validatePhases(f)
 	}
-	m.validatePhases(f)
 	m.validatePower(f)
 	m.Nameplate.validate(f, m)
 	m.validateDuty(f)

@@ -52,6 +52,9 @@ func SizeShortCircuit(e tables.Edition, device tables.Device, m motor.Motor, d m
 // ValidateDevice returns an [*tables.InputError] for an unknown kind of device,
 // or one that may not protect a motor of that kind.
 func ValidateDevice(e tables.Edition, device tables.Device, kind motor.Kind) error {
+	if err := e.Check(); err != nil {
+		return err
+	}
 	if !device.IsValid() {
 		return &tables.InputError{Field: "device", Value: strconv.Itoa(int(device)), Want: "non_time_delay_fuse, time_delay_fuse, inverse_time_breaker or instantaneous_breaker"}
 	}
@@ -114,7 +117,22 @@ func startLimit(e tables.Edition, rule *tables.Rule, device tables.Device, curre
 	return limit
 }
 
+// oneFuse holds one time-delay fuse for both halves of a part winding to 150
+// percent, and to the standard rating at or below that or the floor.
+func (s *ShortCircuit) oneFuse(e tables.Edition, rule *tables.Rule, d motor.Demand, floor tables.Figure) error {
+	s.Limit = percentOf(limitName, e, rule, d.Design, 150, "one time-delay fuse for both halves of the winding")
+	s.Rating = e.RatingAtOrBelow(s.Device, s.Limit, ratingName, rule)
+	if s.Rating.IsZero() {
+		s.Rating = floor
+	}
+	if s.Rating.IsZero() {
+		return noRating(e, s.Device, s.Limit)
+	}
+	s.StartLimit, s.StartRating = s.Limit.Renamed(startLimitName), s.Rating.Renamed(startRatingName)
+	return nil
+}
+
 // noRating reports a limit that no standard rating meets.
 func noRating(e tables.Edition, device tables.Device, limit tables.Figure) error {
-	return &tables.NoSizeError{Field: "device", Need: limit, Cite: limit.Citation(), Constraint: "no standard rating reaches it (" + device.Name() + ")"}
+	return &tables.NoSizeError{Field: "device", Need: limit, Cite: limit.Citation(), Constraint: "no standard rating meets it (" + device.Name() + ")"}
 }

@@ -8,15 +8,16 @@ import (
 // Rules of CSA C22.1, Section 28, for the branch-circuit device. The rating is
 // never above the limit, but 15 A is always allowed.
 var (
-	cecLimit      = tables.Rule{Ref: "Rule 28-200(3)"}
-	cecStart      = tables.Rule{Ref: "Rule 28-200(4)"}
-	cecFloor      = tables.Rule{Ref: "Rule 28-200(3)", Note: "15 A is always allowed"}
-	cecMagnetic   = tables.Rule{Ref: "Rule 28-200(5)"}
-	cecInstant    = tables.Rule{Ref: "Rule 28-210"}
-	cecMarkedMax  = tables.Rule{Ref: "Rule 28-202"}
-	cecCompressor = tables.Rule{Ref: "Rule 28-708", Mark: tables.MarkB}
-	cecSyncDevice = tables.Rule{Ref: "Table 29", Note: "note on low-speed synchronous motors", Mark: tables.MarkB}
-	cecSoft       = tables.Rule{Ref: "Table 29", Note: "soft starters are not listed", Mark: tables.MarkB}
+	cecLimit       = tables.Rule{Ref: "Rule 28-200(3)"}
+	cecStart       = tables.Rule{Ref: "Rule 28-200(4)"}
+	cecFloor       = tables.Rule{Ref: "Rule 28-200(3)", Note: "15 A is always allowed"}
+	cecMagnetic    = tables.Rule{Ref: "Rule 28-200(5)"}
+	cecInstant     = tables.Rule{Ref: "Rule 28-210"}
+	cecMarkedMax   = tables.Rule{Ref: "Rule 28-202"}
+	cecCompressor  = tables.Rule{Ref: "Rule 28-708", Mark: tables.MarkB}
+	cecSyncDevice  = tables.Rule{Ref: "Table 29", Note: "note on low-speed synchronous motors", Mark: tables.MarkB}
+	cecPartWinding = tables.Rule{Ref: "Rule 28-806", Mark: tables.MarkB}
+	cecSoft        = tables.Rule{Ref: "Table 29", Note: "soft starters are not listed", Mark: tables.MarkB}
 )
 
 func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) error {
@@ -40,6 +41,11 @@ func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 	s.Limit = tables.ProductOf(limitName, e, &cecLimit, d.Design, percent)
 	s.StartLimit = startLimit(e, &cecStart, s.Device, d.Design)
 	s.cecRatings(e, &cecLimit, &cecStart)
+	if m.Starting == motor.PartWinding && s.Device == TimeDelayFuse {
+		if err := s.oneFuse(e, &cecPartWinding, d, cecFloorRating(e)); err != nil {
+			return err
+		}
+	}
 	if s.Device == InverseTimeBreaker {
 		s.cecInstantaneous(e, m, d)
 		s.caution(e, &cecMagnetic, "the instantaneous limit binds a breaker whose instantaneous trip is adjusted apart")
@@ -56,9 +62,14 @@ func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 // cecRatings takes the standard ratings at or below the limits, and 15 A where
 // that is more.
 func (s *ShortCircuit) cecRatings(e tables.Edition, limit, start *tables.Rule) {
-	floor := tables.StatedFigure("rating that is always allowed", e, &cecFloor, tables.Ampere, 15, 0)
+	floor := cecFloorRating(e)
 	s.Rating = atLeast(e, ratingName, e.RatingAtOrBelow(s.Device, s.Limit, ratingName, limit), floor)
 	s.StartRating = atLeast(e, startRatingName, e.RatingAtOrBelow(s.Device, s.StartLimit, startRatingName, start), floor)
+}
+
+// cecFloorRating is the rating that is always allowed.
+func cecFloorRating(e tables.Edition) tables.Figure {
+	return tables.StatedFigure("rating that is always allowed", e, &cecFloor, tables.Ampere, 15, 0)
 }
 
 func atLeast(e tables.Edition, name string, rating, floor tables.Figure) tables.Figure {

@@ -15,6 +15,8 @@ var (
 	necStart         = tables.Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(1)(b)"}}}
 	necInstant       = tables.Rule{Ref: "430.52(C)(3)"}
 	necInstantStart  = tables.Rule{Ref: "430.52(C)(3) Exception No. 1", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(3)(b)(2)"}}}
+	necPartWinding   = tables.Rule{Ref: "430.4"}
+	necDriveInstant  = tables.Rule{Ref: "430.130(A)(4)"}
 	necMarkedMax     = tables.Rule{Ref: "430.52(C)(2)"}
 	necTorqueDevice  = tables.Rule{Ref: "430.52(D)"}
 	necFuseOrBreaker = tables.Rule{Ref: "430.52(D), 440.22"}
@@ -37,6 +39,10 @@ func (s *ShortCircuit) nec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 	switch {
 	case m.Kind == motor.Torque: // nameplate current, next standard rating up
 		s.Limit = d.Design.As(limitName, e, &necTorqueDevice)
+		if s.Limit.Cmp(eightHundred) > 0 { // the step up of 240.4(B) ends there
+			s.Rating = e.RatingAtOrBelow(s.Device, s.Limit, ratingName, &necTorqueDevice)
+			return nil
+		}
 		return s.nextUp(e, &necTorqueDevice)
 	case m.Kind == motor.Hermetic:
 		return s.necCompressor(e, d)
@@ -48,6 +54,12 @@ func (s *ShortCircuit) nec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 		return err
 	}
 	s.Limit = tables.ProductOf(limitName, e, &necLimit, d.Design, percent)
+	if m.Starting == motor.PartWinding {
+		s.caution(e, &necPartWinding, "two devices, one for each half of the winding, are each sized at one-half of these figures; one device for both must let the motor start")
+		if s.Device == TimeDelayFuse {
+			return s.oneFuse(e, &necPartWinding, d, tables.Figure{})
+		}
+	}
 	if err := s.nextUp(e, &necNextUp); err != nil {
 		return err
 	}
@@ -87,6 +99,9 @@ func (s *ShortCircuit) necInstantaneous(e tables.Edition, m motor.Motor, d motor
 	}
 	s.Limit = tables.ProductOf(instantaneousName, e, &necInstant, d.Design, percent)
 	s.Instantaneous = s.Limit
+	if m.Starting == motor.Drive {
+		s.caution(e, &necDriveInstant, "ahead of a drive an instantaneous-trip breaker stands only in an assembly listed with the drive")
+	}
 	s.caution(e, &necInstant, "an instantaneous-trip breaker must be adjustable and part of a listed combination controller")
 	if m.Kind == motor.DirectCurrent {
 		return nil

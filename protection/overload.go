@@ -50,6 +50,7 @@ func percentOf(name string, e tables.Edition, rule *tables.Rule, current tables.
 }
 
 var (
+	eightHundred = tables.Whole("rating", tables.Ampere, 800)
 	servicePoint = motor.Factor("1.15")
 	risePoint    = motor.Celsius("40")
 )

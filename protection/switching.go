@@ -27,20 +27,28 @@ type Controller struct {
 	Cautions    []tables.Caution `json:"-"`
 }
 
-// SizeDisconnect works out the least ratings of the disconnecting means.
+// SizeDisconnect works out the least ratings of the disconnecting means; the
+// zero Disconnect without an edition.
 func SizeDisconnect(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
-	if e.Code() == tables.CEC {
+	switch e.Code() {
+	case tables.NEC:
+		return disconnectNEC(e, m, d)
+	case tables.CEC:
 		return disconnectCEC(e, m, d)
 	}
-	return disconnectNEC(e, m, d)
+	return Disconnect{}
 }
 
-// SizeController works out the least ratings of the controller.
+// SizeController works out the least ratings of the controller; the zero
+// Controller without an edition.
 func SizeController(e tables.Edition, m motor.Motor, d motor.Demand) Controller {
-	if e.Code() == tables.CEC {
+	switch e.Code() {
+	case tables.NEC:
+		return controllerNEC(e, m, d)
+	case tables.CEC:
 		return controllerCEC(e, m, d)
 	}
-	return controllerNEC(e, m, d)
+	return Controller{}
 }
 
 const disconnectName = "least ampere rating of the disconnecting means"
