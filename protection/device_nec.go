@@ -127,7 +127,9 @@ func (s *ShortCircuit) necCompressor(e tables.Edition, d motor.Demand) error {
 	} else {
 		s.Rating = e.RatingAtOrBelow(s.Device, s.Limit, ratingName, &necCompressor)
 	}
-	s.Rating = tables.LargestOf(ratingName, e, &necCompressor, s.Rating, floor)
+	if s.Rating.IsZero() || s.Rating.Cmp(floor) < 0 {
+		s.Rating = floor.As(ratingName, e, &necCompressorFloor)
+	}
 	s.StartLimit = percentOf(startLimitName, e, &necCompressorStart, d.Design, 225, "")
 	s.startRating(e, &necCompressorStart)
 	s.caution(e, &necCompressor, "a maximum device rating marked on the equipment wins")

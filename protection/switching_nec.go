@@ -50,6 +50,9 @@ func disconnectNEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 	}
 	if !x.Horsepower.IsZero() {
 		x.Cite = necDisconnectType.In(e)
+		if m.Kind == motor.Hermetic {
+			x.Cite = rule.In(e)
+		}
 	}
 	if rule == &necDisconnect {
 		caution(&necUnfused, "a listed unfused switch rated in horsepower not below the motor's may have a lower ampere rating")
@@ -67,6 +70,9 @@ func disconnectNEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 // rotorToBreak is the locked-rotor current by which the NEC rates switches: the
 // table's, or for Design A and motors outside of it what is known of the motor.
 func rotorToBreak(e tables.Edition, m motor.Motor, d motor.Demand) tables.Figure {
+	if m.Kind == motor.Hermetic {
+		return d.LockedRotor.High.As("locked-rotor current for the switch", e, &necDisconnectHerm)
+	}
 	cage := m.Kind == motor.SquirrelCage || m.Kind == motor.SinglePhase
 	if cage && !strings.EqualFold(m.Nameplate.DesignLetter, "A") {
 		if f, err := e.LockedRotorCurrent(m.PhaseCount(), d.Horsepower, m.Voltage); err == nil {
@@ -86,6 +92,7 @@ func controllerNEC(e tables.Edition, m motor.Motor, d motor.Demand) Controller {
 		x.Amperes = d.Design.As("least continuous rating of the controller", e, &necControllerTorque)
 		return x
 	case motor.Hermetic:
+		x.Cite = necControllerHerm.In(e)
 		x.Amperes = d.Design.As("least full-load rating of the controller", e, &necControllerHerm)
 		x.LockedRotor = d.LockedRotor.High.As("least locked-rotor rating of the controller", e, &necControllerHerm)
 		return x
