@@ -98,7 +98,7 @@ func Size(c Circuit) (Result, error) {
 // conductors selects the branch-circuit, motor-supply and secondary conductors.
 func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
 	load := conductor.Load{Ampacity: d.Branch, Count: c.Motor.LineConductors(), Motor75: c.Motor.IsDesignBCD()}
-	var faults [3]error
+	var faults [5]error
 	r.Branch, faults[0] = c.Wiring.Select(e, load)
 	if !d.Supply.IsZero() {
 		load.Ampacity, load.Count = d.Supply, c.Motor.SupplyConductors()
@@ -113,6 +113,14 @@ func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
 	if !d.Secondary.IsZero() {
 		c.Wiring.Conductors = atLeastOwn(c.Wiring.Conductors, 3)
 		r.Secondary, faults[2] = c.Wiring.Select(e, conductor.Load{Ampacity: d.Secondary, Count: 3})
+	}
+	if !d.Resistor.IsZero() {
+		c.Wiring.Conductors = atLeastOwn(c.Wiring.Conductors, 3)
+		r.Resistor, faults[3] = c.Wiring.Select(e, conductor.Load{Ampacity: d.Resistor, Count: 3})
+	}
+	for _, w := range d.Windings {
+		s, err := c.Wiring.Select(e, conductor.Load{Ampacity: w.Ampacity, Count: c.Motor.LineConductors(), Motor75: c.Motor.IsDesignBCD()})
+		r.Windings, faults[4] = append(r.Windings, s), errors.Join(faults[4], err)
 	}
 	return errors.Join(faults[:]...)
 }

@@ -20,6 +20,8 @@ type Result struct {
 	Branch       conductor.Selection     `json:"branch"`                // branch-circuit conductors
 	MotorSupply  conductor.Selection     `json:"motor_supply,omitzero"` // run to the motor, where the code treats it apart
 	Secondary    conductor.Selection     `json:"secondary,omitzero"`    // wound-rotor secondary conductors
+	Resistor     conductor.Selection     `json:"resistor,omitzero"`     // conductors to resistors apart from the controller
+	Windings     []conductor.Selection   `json:"windings,omitempty"`    // runs to the windings of a multispeed motor, in the order given
 	Overload     protection.Overload     `json:"overload"`              // overload protection
 	ShortCircuit protection.ShortCircuit `json:"short_circuit_device"`  // short-circuit and ground-fault device
 	Disconnect   protection.Disconnect   `json:"disconnecting_means"`   // disconnecting means
@@ -36,6 +38,8 @@ const (
 	BranchConductors
 	MotorSupplyConductors
 	SecondaryConductors
+	ResistorConductors
+	WindingConductors
 	OverloadProtection
 	ShortCircuitDevice
 	DisconnectingMeans
@@ -44,7 +48,7 @@ const (
 )
 
 var sectionNames = [...]string{
-	"Design currents", "Branch-circuit conductors", "Motor supply conductors", "Secondary conductors", "Overload protection",
+	"Design currents", "Branch-circuit conductors", "Motor supply conductors", "Secondary conductors", "Conductors to the resistors", "Conductors to each winding", "Overload protection",
 	"Short-circuit and ground-fault device", "Disconnecting means", "Controller",
 }
 
@@ -80,12 +84,24 @@ func (r *Result) section(s Section) []tables.Figure {
 		return selectionFigures(&r.MotorSupply)
 	case SecondaryConductors:
 		return selectionFigures(&r.Secondary)
+	case ResistorConductors:
+		return selectionFigures(&r.Resistor)
+	case WindingConductors:
+		var figures []tables.Figure
+		for i := range r.Windings {
+			figures = append(figures, selectionFigures(&r.Windings[i])...)
+		}
+		return figures
 	case OverloadProtection:
 		o := &r.Overload
-		return []tables.Figure{o.Limit, o.StartLimit, o.Protector, o.Units}
+		figures := []tables.Figure{o.Limit, o.StartLimit, o.Share, o.Protector, o.Units}
+		for _, w := range o.Windings {
+			figures = append(figures, w.Limit, w.StartLimit)
+		}
+		return figures
 	case ShortCircuitDevice:
 		x := &r.ShortCircuit
-		figures := []tables.Figure{x.Limit, x.Rating, x.StartLimit, x.StartRating, x.Instantaneous}
+		figures := []tables.Figure{x.Limit, x.Rating, x.StartLimit, x.StartRating, x.Instantaneous, x.Half, x.Smallest}
 		if x.Device == protection.InstantaneousBreaker {
 			figures[4] = tables.Figure{} // the same as the limit
 		}
@@ -124,14 +140,8 @@ var (
 // cautions gathers what each step had to say, then what the whole rests on;
 // each once, the standing caution last.
 func (r *Result) cautions() []tables.Caution {
-	list := make([]tables.Caution, 0, 16)
-	add := func(cautions ...tables.Caution) {
-		for _, c := range cautions {
-			if !slices.Contains(list, c) {
-				list = append(list, c)
-			}
-		}
-	}
+	list := make(cautionList, 0, 16)
+	add := list.add
 	c := &r.Circuit
 	if c.Device == 0 {
 		add(noDevice)
@@ -153,6 +163,10 @@ func (r *Result) cautions() []tables.Caution {
 		add(tables.Caution{Text: "the motor supply conductors hold for the motor's end only: where they begin at terminals, those ask for the size of the branch-circuit conductors", Cite: supplyEnd.In(c.Edition)})
 	}
 	add(r.Secondary.Cautions...)
+	add(r.Resistor.Cautions...)
+	for _, w := range r.Windings {
+		add(w.Cautions...)
+	}
 	add(r.Overload.Cautions...)
 	add(r.ShortCircuit.Cautions...)
 	add(r.Disconnect.Cautions...)
@@ -164,9 +178,25 @@ func (r *Result) cautions() []tables.Caution {
 			}
 		}
 	}
-	if gap := c.Edition.Gap(); gap != "" {
-		add(tables.Caution{Text: gap, Cite: tables.Citation{Edition: c.Edition, Ref: "edition"}})
-	}
-	add(standing)
+	list.finish(c.Edition)
 	return list
+}
+
+// A cautionList holds each caution once.
+type cautionList []tables.Caution
+
+func (l *cautionList) add(cautions ...tables.Caution) {
+	for _, c := range cautions {
+		if !slices.Contains(*l, c) {
+			*l = append(*l, c)
+		}
+	}
+}
+
+// finish adds what of the edition was not read, and the standing caution.
+func (l *cautionList) finish(e tables.Edition) {
+	if gap := e.Gap(); gap != "" {
+		l.add(tables.Caution{Text: gap, Cite: tables.Citation{Edition: e, Ref: "edition"}})
+	}
+	l.add(standing)
 }

@@ -41,13 +41,23 @@ func (r *Result) write(b *strings.Builder) {
 		b.WriteByte('\n')
 		for _, f := range lines {
 			if !f.IsZero() {
-				fmt.Fprintf(b, "%12s  %s: %s%s\n", f, f.Name(), f.How(), refs(f))
+				writeFigure(b, f)
 			}
 		}
 		b.WriteString(r.remark(s))
 	}
+	writeCautions(b, r.Cautions)
+}
+
+// writeFigure writes one line of a derivation: the value, what it is, how it
+// came about and the rules behind it.
+func writeFigure(b *strings.Builder, f tables.Figure) {
+	fmt.Fprintf(b, "%12s  %s: %s%s\n", f, oneLine(f.Name()), f.How(), refs(f))
+}
+
+func writeCautions(b *strings.Builder, cautions []tables.Caution) {
 	b.WriteString("\nCautions\n")
-	for _, caution := range r.Cautions {
+	for _, caution := range cautions {
 		fmt.Fprintf(b, "  - %s", caution.Text)
 		if cite := ref(caution.Cite); cite != "" {
 			b.WriteString(" " + cite)
@@ -103,6 +113,15 @@ func describe(r *Result) string {
 	if m.Starting != 0 {
 		parts = append(parts, startings[m.Starting])
 	}
+	if m.Use != motor.Ordinary {
+		parts = append(parts, strings.ReplaceAll(m.Use.String(), "_", " "))
+	}
+	if m.Bypass {
+		parts = append(parts, "with bypass")
+	}
+	if n := len(m.Nameplate.Windings); n > 0 {
+		parts = append(parts, fmt.Sprintf("%d speeds", n))
+	}
 	return strings.Join(parts, ", ")
 }
 
@@ -121,7 +140,18 @@ func (r *Result) chosen(s Section) string {
 		return wires(&r.MotorSupply)
 	case SecondaryConductors:
 		return wires(&r.Secondary)
+	case ResistorConductors:
+		return wires(&r.Resistor)
+	case WindingConductors:
+		texts := make([]string, len(r.Windings))
+		for i := range r.Windings {
+			texts[i] = wires(&r.Windings[i])
+		}
+		return strings.Join(texts, "; ")
 	case OverloadProtection:
+		if r.Overload.Limit.IsZero() {
+			return "none"
+		}
 		return "set at not more than " + r.Overload.Limit.String()
 	case ShortCircuitDevice:
 		if x := &r.ShortCircuit; !x.Rating.IsZero() {
@@ -162,17 +192,20 @@ func wires(s *conductor.Selection) string {
 
 // remark says why the next smaller size of a section fails.
 func (r *Result) remark(s Section) string {
-	var x *conductor.Selection
 	switch s {
 	case BranchConductors:
-		x = &r.Branch
+		return whySmallerFails(&r.Branch)
 	case MotorSupplyConductors:
-		x = &r.MotorSupply
+		return whySmallerFails(&r.MotorSupply)
 	case SecondaryConductors:
-		x = &r.Secondary
-	default:
-		return ""
+		return whySmallerFails(&r.Secondary)
+	case ResistorConductors:
+		return whySmallerFails(&r.Resistor)
 	}
+	return ""
+}
+
+func whySmallerFails(x *conductor.Selection) string {
 	switch small := x.Smaller; {
 	case small.Size == 0:
 		return ""

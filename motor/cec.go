@@ -11,6 +11,8 @@ var (
 	cecContinuous  = tables.Rule{Ref: "Rule 28-106(1)"}
 	cecDuty        = tables.Rule{Ref: "Rule 28-106(2)"}
 	cecSecondary   = tables.Rule{Ref: "Rule 28-112", Mark: tables.MarkB}
+	cecSecondaryR  = tables.Rule{Ref: "Rule 28-112", Mark: tables.MarkB, Note: "controller to resistors"}
+	cecWinding     = tables.Rule{Ref: "Rule 28-804", Mark: tables.MarkB}
 	cecRotor       = tables.Rule{Ref: "Rule 28-010"}
 	cecCompressor  = tables.Rule{Ref: "Rule 28-706", Mark: tables.MarkB}
 	cecCompressorO = tables.Rule{Ref: "Rule 28-710", Mark: tables.MarkB}
@@ -56,6 +58,7 @@ func (d *Demand) cec(m Motor, e tables.Edition) error {
 // which are guides, where it is not given.
 func (d *Demand) cecDesign(m Motor, e tables.Edition) error {
 	n := m.Nameplate
+	n.Amperes = n.amperes()
 	switch {
 	case !n.Amperes.IsZero() && m.Kind == Hermetic:
 		rated := n.Amperes.Figure("rated-load current")
@@ -73,7 +76,7 @@ func (d *Demand) cecDesign(m Motor, e tables.Edition) error {
 		return nil
 	case m.Kind == Torque:
 		return needAmperes("the locked-rotor current marked on a torque motor", &cecTorque, e)
-	case n.Multispeed || n.HighTorque || m.lowSpeed():
+	case n.Multispeed || m.Use == ValveActuator || n.HighTorque || m.lowSpeed():
 		return needAmperes("the nameplate current of a motor of several speeds, of low speed or of high torque", &cecTorque, e)
 	}
 	table, err := e.FullLoadCurrent(m.table(), m.Power, m.Voltage)
@@ -115,14 +118,22 @@ func (d *Demand) cecAmpacities(m Motor, e tables.Edition) (err error) {
 	case PartWinding:
 		d.Supply = d.share(m, e, &cecPartWinding, 625, 50)
 	case Drive:
+		onLine := d.Branch.Renamed("by the motor on bypass")
 		d.Branch = percentOf(branchName, e, &cecDrive, d.Input, 125, 0)
-	}
-	if secondary := m.Nameplate.Secondary.Figure("secondary full-load current"); !secondary.IsZero() {
-		if m.Duty.Kind == Continuous {
-			d.Secondary = percentOf(secondaryName, e, &cecSecondary, secondary, 125, 0)
-			return nil
+		if m.Bypass {
+			d.Branch = tables.LargestOf(branchName, e, &cecDrive, d.Branch.Renamed("by drive input"), onLine)
 		}
-		d.Secondary, err = m.dutyAmpacity(secondaryName, e, &cecSecondary, secondary)
 	}
-	return err
+	if marked := m.Nameplate.MinimumAmpacity.Figure("marked minimum circuit ampacity"); !marked.IsZero() {
+		d.Branch = tables.LargestOf(branchName, e, &cecCompressor, d.Branch, marked)
+	}
+	if m.Kind == DirectCurrent {
+		if err := d.resistor(m, e, &cecSecondaryR, d.Design); err != nil {
+			return err
+		}
+	}
+	if err := d.windings(m, e, &cecWinding, &cecDuty); err != nil {
+		return err
+	}
+	return d.secondary(m, e, &cecSecondary, &cecSecondary, &cecSecondaryR)
 }

@@ -19,6 +19,9 @@ type Demand struct {
 	Supply    tables.Figure `json:"motor_supply_ampacity,omitzero"` // least ampacity of the run to the motor, where the code treats it apart
 	Secondary tables.Figure `json:"secondary_ampacity,omitzero"`    // least ampacity of wound-rotor secondary conductors, slip rings to controller
 
+	Resistor tables.Figure   `json:"resistor_ampacity,omitzero"` // least ampacity of the conductors to resistors apart from the controller
+	Windings []WindingDemand `json:"windings,omitempty"`         // of a multispeed motor, in the order given
+
 	Input      tables.Figure `json:"drive_input_current,omitzero"` // rated input current of the drive that feeds the motor
 	Horsepower tables.Power  `json:"horsepower,omitzero"`          // rating by which switches and controllers are chosen; of a motor marked in amperes, the least table row that carries them
 
@@ -63,6 +66,9 @@ func (m Motor) Demand(e tables.Edition) (Demand, error) {
 	if err := m.Validate(); err != nil {
 		return Demand{}, errors.Join(err, m.essentials().untabulated(e))
 	}
+	if err := m.checkEdition(e); err != nil {
+		return Demand{}, err
+	}
 	d := Demand{Input: m.Nameplate.DriveInput.Figure("rated input current of the drive")}
 	var err error
 	if e.Code() == tables.CEC {
@@ -93,6 +99,18 @@ func (m Motor) untabulated(e tables.Edition) error {
 		return none
 	}
 	return nil
+}
+
+// checkEdition reports what an edition has no rules for that are carried here.
+func (m Motor) checkEdition(e tables.Edition) error {
+	f := &faults{}
+	if e.Code() == tables.CEC && m.Use == FirePump {
+		f.add("motor.use", m.Use.String(), "ordinary or valve_actuator: the CEC's rules for fire pumps are not carried here")
+	}
+	if e.Code() == tables.CEC && m.Rectifier != NoRectifier {
+		f.add("motor.rectifier", m.Rectifier.String(), "none: the CEC has no rule for motors on rectifiers that is carried here")
+	}
+	return f.err()
 }
 
 // instead adds to a table's refusal what would size the motor.

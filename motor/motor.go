@@ -13,6 +13,11 @@ type Motor struct {
 	Nameplate Nameplate    `json:"nameplate,omitzero"` // what the motor is marked with
 	Duty      Duty         `json:"duty,omitzero"`      // zero is continuous
 	Starting  Starting     `json:"starting,omitzero"`  // zero is across the line
+
+	Bypass    bool                `json:"bypass,omitzero"`    // the drive can be bypassed, so that the line feeds the motor
+	Resistor  tables.ResistorDuty `json:"resistor,omitzero"`  // duty of resistors apart from the controller; zero is none
+	Rectifier Rectifier           `json:"rectifier,omitzero"` // single-phase rectifier that feeds a direct-current motor (NEC)
+	Use       Use                 `json:"use,omitzero"`       // zero is ordinary
 }
 
 // A Nameplate is what a motor is marked with. Each zero field is "not marked".
@@ -22,6 +27,10 @@ type Nameplate struct {
 	LockedRotor     tables.Current     `json:"locked_rotor_amperes,omitzero"`     // marked locked-rotor current
 	BranchSelection tables.Current     `json:"branch_selection_amperes,omitzero"` // branch-circuit selection current of a hermetic compressor
 	DriveInput      tables.Current     `json:"drive_input_amperes,omitzero"`      // rated input current of the drive that feeds the motor
+	RectifierInput  tables.Current     `json:"rectifier_input_amperes,omitzero"`  // rated input current of the rectifier that feeds a direct-current motor
+	MinimumAmpacity tables.Current     `json:"minimum_circuit_ampacity,omitzero"` // marked on refrigeration equipment
+	MaximumDevice   tables.Current     `json:"maximum_device_rating,omitzero"`    // marked on the equipment or its controller: never exceeded
+	Windings        []Winding          `json:"windings,omitempty"`                // of a multispeed motor, in place of Amperes
 	ServiceFactor   tables.Ratio       `json:"service_factor,omitzero"`           // 1 to 2
 	TemperatureRise tables.Temperature `json:"temperature_rise,omitzero"`         // in °C
 	PowerFactor     tables.Ratio       `json:"power_factor,omitzero"`             // above 0, at most 1; of a synchronous motor 1, 0.9 or 0.8

@@ -16,6 +16,13 @@ var (
 	necFan          = tables.Rule{Ref: "430.6(A) Exception No. 2"}
 	necAppliance    = tables.Rule{Ref: "430.6(A) Exception No. 3"}
 	necTorque       = tables.Rule{Ref: "430.6(B)"}
+	necValve        = tables.Rule{Ref: "430.6(D)"}
+	necBypass       = tables.Rule{Ref: "430.122(B)", Moved: []tables.Move{{From: tables.NEC2020, Ref: "430.122(C)"}}}
+	necRectifier    = tables.Rule{Ref: "430.22(A)"}
+	necMultispeed   = tables.Rule{Ref: "430.22(B)"}
+	necSecondaryR   = tables.Rule{Ref: "430.23(C)"}
+	necDCResistor   = tables.Rule{Ref: "430.29"}
+	necMarked       = tables.Rule{Ref: "440.35"}
 	necSingle       = tables.Rule{Ref: "430.22"}
 	necWyeDelta     = tables.Rule{Ref: "430.22(C)"}
 	necPartWinding  = tables.Rule{Ref: "430.22(D)"}
@@ -53,7 +60,7 @@ func (d *Demand) nec(m Motor, e tables.Edition) error {
 // (the nameplate's).
 func (d *Demand) necDesign(m Motor, e tables.Edition) error {
 	n := m.Nameplate
-	marked := n.Amperes.Figure("nameplate full-load current")
+	marked := n.amperes().Figure("nameplate full-load current")
 	switch {
 	case m.Kind == Torque: // rated by locked-rotor current
 		if marked.IsZero() {
@@ -105,11 +112,13 @@ func (d *Demand) necDesign(m Motor, e tables.Edition) error {
 func (m Motor) necByNameplate() (why string, rule *tables.Rule) {
 	n := m.Nameplate
 	switch {
+	case m.Use == ValveActuator:
+		return "a valve actuator motor assembly", &necValve
 	case n.FanMotor:
 		return "a shaded-pole or permanent-split-capacitor fan motor", &necFan
 	case n.Appliance:
 		return "a listed motor-operated appliance", &necAppliance
-	case n.Multispeed:
+	case n.Multispeed || len(n.Windings) > 0:
 		return "a multispeed motor", &necNameplate
 	case n.HighTorque:
 		return "a high-torque motor", &necNameplate
@@ -228,62 +237,6 @@ func (d *Demand) necHorsepower(m Motor, e tables.Edition) {
 		return
 	}
 	d.Horsepower = p
-}
-
-func (d *Demand) necAmpacities(m Motor, e tables.Edition) error {
-	base := &necSingle
-	if m.Kind == Hermetic {
-		base = &necCompressorC
-	}
-	if m.Duty.Kind == Continuous {
-		d.Branch = percentOf(branchName, e, base, d.Design, 125, 0)
-	} else {
-		nameplate := m.Nameplate.Amperes.Figure("nameplate full-load current")
-		if nameplate.IsZero() {
-			nameplate = d.Overload // which stands in for it, with a caution
-		}
-		var err error
-		if d.Branch, err = m.dutyAmpacity(branchName, e, &necDuty, nameplate); err != nil {
-			return err
-		}
-	}
-	switch m.Starting {
-	case WyeDelta:
-		rule := &necWyeDelta
-		if m.Kind == Hermetic {
-			rule = &necCompressorC
-		}
-		d.Supply = d.share(m, e, rule, 720, 58)
-	case PartWinding:
-		d.Supply = d.share(m, e, &necPartWinding, 625, 50)
-	case Drive:
-		d.Supply = d.Branch.Renamed(supplyName)
-		if m.Duty.Kind == Continuous {
-			d.Supply = percentOf(supplyName, e, &necDriveOutput, d.Design, 125, 0)
-		}
-		d.Branch = percentOf(branchName, e, &necDriveInput, d.Input, 125, 0)
-	}
-	if secondary := m.Nameplate.Secondary.Figure("secondary full-load current"); !secondary.IsZero() {
-		if m.Duty.Kind == Continuous {
-			d.Secondary = percentOf(secondaryName, e, &necSecondary, secondary, 125, 0)
-			return nil
-		}
-		var err error
-		d.Secondary, err = m.dutyAmpacity(secondaryName, e, &necSecondaryE, secondary)
-		return err
-	}
-	return nil
-}
-
-// share returns the ampacity of the conductors between controller and motor
-// that carry a share of the motor's current: the rule's tenths of a percent of
-// full-load current for continuous duty, else that share of the ampacity for
-// the duty.
-func (d *Demand) share(m Motor, e tables.Edition, rule *tables.Rule, tenths, sharePercent int) tables.Figure {
-	if m.Duty.Kind != Continuous {
-		return percentOf(supplyName, e, rule, d.Branch, sharePercent, 0)
-	}
-	return percentOf(supplyName, e, rule, d.Design, tenths, 1)
 }
 
 func needAmperes(what string, rule *tables.Rule, e tables.Edition) error {

@@ -22,6 +22,7 @@ func (m Motor) Validate() error {
 	m.Nameplate.validate(f, m)
 	m.validateDuty(f)
 	m.validateStarting(f)
+	m.validateSpecial(f)
 	return f.err()
 }
 
@@ -61,7 +62,7 @@ func (m Motor) validatePhases(f *faults) {
 }
 
 func (m Motor) validatePower(f *faults) {
-	if m.Power.IsZero() && m.Nameplate.Amperes.IsZero() {
+	if m.Power.IsZero() && m.Nameplate.amperes().IsZero() {
 		switch m.Kind {
 		case Torque:
 			f.add("motor.nameplate.amperes", "", "the locked-rotor current marked on a torque motor")
@@ -101,6 +102,9 @@ func (n Nameplate) validate(f *faults, m Motor) {
 		{"secondary_amperes", n.Secondary, m.Kind == WoundRotor, "only on a wound-rotor motor"},
 		{"locked_rotor_amperes", n.LockedRotor, true, ""},
 		{"branch_selection_amperes", n.BranchSelection, m.Kind == Hermetic, "only on a hermetic motor-compressor"},
+		{"rectifier_input_amperes", n.RectifierInput, m.Rectifier != NoRectifier, "only with a rectifier"},
+		{"minimum_circuit_ampacity", n.MinimumAmpacity, m.Kind == Hermetic, "only on a hermetic motor-compressor's equipment"},
+		{"maximum_device_rating", n.MaximumDevice, true, ""},
 		{"drive_input_amperes", n.DriveInput, m.Starting == Drive, `only with starting "drive"`},
 	} {
 		switch {

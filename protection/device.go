@@ -21,11 +21,13 @@ const (
 // settings and there is no rating.
 type ShortCircuit struct {
 	Device        tables.Device    `json:"kind"`
-	Limit         tables.Figure    `json:"limit"`                  // calculated ceiling: percent times current
-	Rating        tables.Figure    `json:"rating,omitzero"`        // standard rating that the code lets stand
-	StartLimit    tables.Figure    `json:"start_limit,omitzero"`   // ceiling if the motor will not start
-	StartRating   tables.Figure    `json:"start_rating,omitzero"`  // standard rating under that ceiling
-	Instantaneous tables.Figure    `json:"instantaneous,omitzero"` // greatest instantaneous-trip setting, where the code limits it
+	Limit         tables.Figure    `json:"limit"`                           // calculated ceiling: percent times current
+	Rating        tables.Figure    `json:"rating,omitzero"`                 // standard rating that the code lets stand
+	Half          tables.Figure    `json:"half_limit,omitzero"`             // ceiling of each of two devices, one for each half of a part winding
+	Smallest      tables.Figure    `json:"smallest_winding_limit,omitzero"` // ceiling by the smallest winding of a multispeed motor
+	StartLimit    tables.Figure    `json:"start_limit,omitzero"`            // ceiling if the motor will not start
+	StartRating   tables.Figure    `json:"start_rating,omitzero"`           // standard rating under that ceiling
+	Instantaneous tables.Figure    `json:"instantaneous,omitzero"`          // greatest instantaneous-trip setting, where the code limits it
 	Cautions      []tables.Caution `json:"-"`
 }
 
@@ -43,10 +45,43 @@ func SizeShortCircuit(e tables.Edition, device tables.Device, m motor.Motor, d m
 	} else {
 		err = s.nec(e, m, d)
 	}
+	if err == nil {
+		err = s.heldToMarking(e, m)
+	}
 	if err != nil {
 		return ShortCircuit{}, err
 	}
 	return s, nil
+}
+
+// heldToMarking holds limits and ratings to the maximum device rating marked on
+// the equipment or its controller, which wins over every other.
+func (s *ShortCircuit) heldToMarking(e tables.Edition, m motor.Motor) error {
+	marked := m.Nameplate.MaximumDevice.Figure("marked maximum device rating")
+	if marked.IsZero() {
+		return nil
+	}
+	rule := &necMarkedMax
+	switch {
+	case e.Code() == tables.CEC:
+		rule = &cecMarkedMax
+	case m.Kind == motor.Hermetic:
+		rule = &necCompressorMax
+	}
+	for _, limit := range []*tables.Figure{&s.Limit, &s.StartLimit, &s.Instantaneous} {
+		if !limit.IsZero() && limit.Cmp(marked) > 0 {
+			*limit = tables.SmallestOf(limit.Name(), e, rule, limit.Renamed("by rule"), marked)
+		}
+	}
+	for _, rating := range []*tables.Figure{&s.Rating, &s.StartRating} {
+		if rating.IsZero() || rating.Cmp(marked) <= 0 {
+			continue
+		}
+		if *rating = e.RatingAtOrBelow(s.Device, marked, rating.Name(), rule); rating.IsZero() {
+			return noRating(e, s.Device, marked.As("marked maximum device rating", e, rule))
+		}
+	}
+	return nil
 }
 
 // ValidateDevice returns an [*tables.InputError] for an unknown kind of device,

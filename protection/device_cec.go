@@ -46,6 +46,13 @@ func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 			return err
 		}
 	}
+	if m.Starting == motor.PartWinding {
+		s.Half = percentOf("greatest device for each half of the winding", e, &cecPartWinding, s.Limit, 50, "two devices")
+	}
+	if i := smallest(d.Windings); i >= 0 {
+		s.Smallest = tables.ProductOf(limitName+" by the smallest winding", e, &cecPartWinding, d.Windings[i].Current, percent)
+		s.caution(e, &cecPartWinding, "a run to a winding of less current that the device does not protect has a device of its own")
+	}
 	if s.Device == InverseTimeBreaker {
 		s.cecInstantaneous(e, m, d)
 		s.caution(e, &cecMagnetic, "the instantaneous limit binds a breaker whose instantaneous trip is adjusted apart")

@@ -15,6 +15,9 @@ var (
 	necStart         = tables.Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(1)(b)"}}}
 	necInstant       = tables.Rule{Ref: "430.52(C)(3)"}
 	necInstantStart  = tables.Rule{Ref: "430.52(C)(3) Exception No. 1", Moved: []tables.Move{{From: tables.NEC2023, Ref: "430.52(C)(3)(b)(2)"}}}
+	necCompressorMax = tables.Rule{Ref: "440.22(C)"}
+	necWindings      = tables.Rule{Ref: "430.52(C)(4)"}
+	necFirePump      = tables.Rule{Ref: "695.4(B)(2)(a)", Mark: tables.MarkB}
 	necPartWinding   = tables.Rule{Ref: "430.4"}
 	necDriveInstant  = tables.Rule{Ref: "430.130(A)(4)"}
 	necMarkedMax     = tables.Rule{Ref: "430.52(C)(2)"}
@@ -46,6 +49,8 @@ func (s *ShortCircuit) nec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 		return s.nextUp(e, &necTorqueDevice)
 	case m.Kind == motor.Hermetic:
 		return s.necCompressor(e, d)
+	case m.Use == motor.FirePump:
+		return s.firePump(e, d)
 	case s.Device == InstantaneousBreaker:
 		return s.necInstantaneous(e, m, d)
 	}
@@ -54,7 +59,12 @@ func (s *ShortCircuit) nec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 		return err
 	}
 	s.Limit = tables.ProductOf(limitName, e, &necLimit, d.Design, percent)
+	if i := smallest(d.Windings); i >= 0 {
+		s.Smallest = tables.ProductOf(limitName+" by the smallest winding", e, &necWindings, d.Windings[i].Current, percent)
+		s.caution(e, &necWindings, "one device sized by the largest winding asks that each winding has overload protection of its own, conductors that suit the largest and controllers rated for it; otherwise the limit by the smallest winding holds")
+	}
 	if m.Starting == motor.PartWinding {
+		s.Half = percentOf("greatest device for each half of the winding", e, &necPartWinding, s.Limit, 50, "two devices")
 		s.caution(e, &necPartWinding, "two devices, one for each half of the winding, are each sized at one-half of these figures; one device for both must let the motor start")
 		if s.Device == TimeDelayFuse {
 			return s.oneFuse(e, &necPartWinding, d, tables.Figure{})
@@ -80,6 +90,28 @@ func (s *ShortCircuit) startRating(e tables.Edition, rule *tables.Rule) {
 		s.StartRating = s.Rating.As(startRatingName, e, rule).WithNote("which stands above this ceiling already")
 		s.caution(e, rule, "the ordinary rating, rounded up, already stands at or above what the higher ceiling allows")
 	}
+}
+
+// firePump takes the standard rating that carries the locked-rotor current of
+// the pump motor for as long as it lasts.
+func (s *ShortCircuit) firePump(e tables.Edition, d motor.Demand) error {
+	s.Limit = d.LockedRotor.High.As("least short-circuit device", e, &necFirePump)
+	if s.Limit.IsZero() {
+		return &tables.InputError{Field: "motor.nameplate.locked_rotor_amperes", Want: "the locked-rotor current that the device of a fire pump must carry", Cite: necFirePump.In(e)}
+	}
+	s.caution(e, &necFirePump, "FIRE PUMP: the device must carry locked-rotor current for as long as it lasts, in an assembly listed for fire pump service; add the full-load currents of the other pump motors and accessories on the circuit; Article 695 and the authority having jurisdiction decide every part of this circuit")
+	return s.nextUp(e, &necFirePump)
+}
+
+// smallest returns the index of the winding of least current, -1 for none.
+func smallest(windings []motor.WindingDemand) int {
+	best := -1
+	for i, w := range windings {
+		if best < 0 || w.Current.Cmp(windings[best].Current) < 0 {
+			best = i
+		}
+	}
+	return best
 }
 
 // nextUp takes the standard rating at or above the limit.

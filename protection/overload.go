@@ -8,11 +8,19 @@ import (
 // An Overload is the running overload protection of a motor. Both limits are
 // ceilings: nothing is rounded up beyond them.
 type Overload struct {
-	Limit      tables.Figure    `json:"limit"`                      // greatest trip setting
+	Limit      tables.Figure    `json:"limit,omitzero"`             // greatest trip setting; absent where no overload protection is wanted
 	StartLimit tables.Figure    `json:"start_limit,omitzero"`       // greatest setting if the motor will not start or carry its load; absent where the code has no second step
+	Share      tables.Figure    `json:"share_limit,omitzero"`       // greatest setting of a device inside the delta or in half of the winding
 	Protector  tables.Figure    `json:"thermal_protector,omitzero"` // greatest ultimate trip current of an integral thermal protector, where the motor has one (NEC)
-	Units      tables.Figure    `json:"units"`                      // number of overload units; its note says in which conductors
+	Windings   []WindingLimit   `json:"windings,omitempty"`         // of a multispeed motor, in the order given
+	Units      tables.Figure    `json:"units,omitzero"`             // number of overload units; its note says in which conductors
 	Cautions   []tables.Caution `json:"-"`
+}
+
+// A WindingLimit is the overload protection of one winding of a multispeed motor.
+type WindingLimit struct {
+	Limit      tables.Figure `json:"limit"`
+	StartLimit tables.Figure `json:"start_limit,omitzero"`
 }
 
 // SizeOverload works out the overload protection of a motor.
@@ -22,12 +30,28 @@ func SizeOverload(e tables.Edition, m motor.Motor, d motor.Demand) (Overload, er
 		return Overload{}, err
 	}
 	o := Overload{Units: units}
+	if m.Use == motor.FirePump && e.Code() == tables.NEC {
+		o.Units = tables.Figure{}
+		o.caution(e, &necFirePumpOverload, "a fire pump motor has no overload protection: it runs to destruction rather than stop")
+		return o, nil
+	}
 	if e.Code() == tables.CEC {
 		o.cec(e, m, d)
 	} else {
 		o.nec(e, m, d)
 	}
 	return o, nil
+}
+
+// share holds a device inside the delta of a wye-delta start to 58 percent of the
+// limit, and one in half of a part winding to 50 percent.
+func (o *Overload) share(e tables.Edition, rule *tables.Rule, s motor.Starting) {
+	switch s {
+	case motor.WyeDelta:
+		o.Share = percentOf("greatest setting of a device inside the delta", e, rule, o.Limit, 58, "share of the current that it carries")
+	case motor.PartWinding:
+		o.Share = percentOf("greatest setting of a device in half of the winding", e, rule, o.Limit, 50, "share of the current that it carries")
+	}
 }
 
 func (o *Overload) caution(e tables.Edition, rule *tables.Rule, text string) {

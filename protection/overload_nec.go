@@ -7,15 +7,16 @@ import (
 
 // Rules of NFPA 70, Articles 430 Part III and 440 Part VI, for overload.
 var (
-	necOverload      = tables.Rule{Ref: "430.32(A)(1)"}
-	necOverloadStart = tables.Rule{Ref: "430.32(C)"}
-	necProtector     = tables.Rule{Ref: "430.32(A)(2)"}
-	necOverloadBig   = tables.Rule{Ref: "430.32(A)(4)"}
-	necOverloadSmall = tables.Rule{Ref: "430.32(B), (D)"}
-	necOverloadDuty  = tables.Rule{Ref: "430.33"}
-	necOverloadShare = tables.Rule{Ref: "430.32(A)(1)", Note: "device that does not carry the whole motor current"}
-	necCompressorOL  = tables.Rule{Ref: "440.52(A)"}
-	necEachWinding   = tables.Rule{Ref: "430.32(A)", Note: "each winding connection on its own"}
+	necOverload         = tables.Rule{Ref: "430.32(A)(1)"}
+	necOverloadStart    = tables.Rule{Ref: "430.32(C)"}
+	necProtector        = tables.Rule{Ref: "430.32(A)(2)"}
+	necFirePumpOverload = tables.Rule{Ref: "695.6(C)", Mark: tables.MarkB}
+	necOverloadBig      = tables.Rule{Ref: "430.32(A)(4)"}
+	necOverloadSmall    = tables.Rule{Ref: "430.32(B), (D)"}
+	necOverloadDuty     = tables.Rule{Ref: "430.33"}
+	necOverloadShare    = tables.Rule{Ref: "430.32(A)(1)", Note: "device that does not carry the whole motor current"}
+	necCompressorOL     = tables.Rule{Ref: "440.52(A)"}
+	necEachWinding      = tables.Rule{Ref: "430.32(A)", Note: "each winding connection on its own"}
 )
 
 func (o *Overload) nec(e tables.Edition, m motor.Motor, d motor.Demand) {
@@ -35,6 +36,13 @@ func (o *Overload) nec(e tables.Edition, m motor.Motor, d motor.Demand) {
 	}
 	o.Limit = percentOf(overloadName, e, &necOverload, d.Overload, base, note)
 	o.StartLimit = percentOf(overloadStartName, e, &necOverloadStart, d.Overload, start, note)
+	o.share(e, &necOverloadShare, m.Starting)
+	for _, w := range d.Windings {
+		o.Windings = append(o.Windings, WindingLimit{
+			Limit:      percentOf(overloadName+" of the winding", e, &necEachWinding, w.Current, base, note),
+			StartLimit: percentOf(overloadStartName, e, &necOverloadStart, w.Current, start, note),
+		})
+	}
 	if n.ThermalProtect {
 		o.Protector = protector(e, d.Design)
 	}
@@ -72,7 +80,7 @@ func (o *Overload) necCautions(e tables.Edition, m motor.Motor) {
 	if m.Starting == motor.WyeDelta || m.Starting == motor.PartWinding {
 		o.caution(e, &necOverloadShare, "the limits are for a device that carries the whole motor current: one inside the delta or in half of the winding is set by the share that it carries")
 	}
-	if m.Nameplate.Multispeed {
+	if m.Nameplate.Multispeed || len(m.Nameplate.Windings) > 0 {
 		o.caution(e, &necEachWinding, "each winding connection has overload protection of its own, set by its own current")
 	}
 }

@@ -16,6 +16,8 @@ var (
 	cecTable29      = Rule{Ref: "Table 29"}
 	cecTable25      = Rule{Ref: "Table 25", Mark: MarkB}
 	cecTable25Other = Rule{Ref: "Table 25", Mark: MarkC} // other than three-phase
+	cecTable16      = Rule{Ref: "Table 16", Mark: MarkB}
+	cecTable28      = Rule{Ref: "Table 28", Mark: MarkC}
 	cecTable37      = Rule{Ref: "Table 37", Mark: MarkC}
 	cecTable13      = Rule{Ref: "Table 13", Mark: MarkB}
 
@@ -58,12 +60,16 @@ var cecBook = book{
 		Copper:   loadAmpacity("cec/conductor_ampacity_copper_free_air.csv", Copper, always(&cecTable1)),
 		Aluminum: loadAmpacity("cec/conductor_ampacity_aluminum_free_air.csv", Aluminum, always(&cecTable3)),
 	},
-	ambient:         loadAmbient("cec/conductor_ambient.csv", "ambient_c", true, &cecTable5A),
-	count:           loadCounts("cec/conductor_count_5c.csv", &cecTable5C, Plain),
-	spacing:         loadCounts("cec/conductor_spacing_5b.csv", &cecTable5B, Plain),
-	insulations:     loadInsulationsCEC("cec/conductor_insulations.csv", &cecTable19),
-	smallConductors: loadSmallConductors("cec/conductor_small_14_104.csv", func([]string) *Rule { return &cecSmall }),
+	ambient:           loadAmbient("cec/conductor_ambient.csv", "ambient_c", true, &cecTable5A),
+	count:             loadCounts("cec/conductor_count_5c.csv", &cecTable5C, Plain),
+	spacing:           loadCounts("cec/conductor_spacing_5b.csv", &cecTable5B, Plain),
+	insulations:       loadInsulationsCEC("cec/conductor_insulations.csv", &cecTable19),
+	bonding:           func(Edition) *bondingTable { return cecBonding() },
+	secondaryResistor: loadResistors("cec/motor_controller_secondary.csv", &cecTable28),
+	smallConductors:   loadSmallConductors("cec/conductor_small_14_104.csv", func([]string) *Rule { return &cecSmall }),
 }
+
+var cecBonding = loadBonding("cec/conductor_bonding.csv", func(Material, int64) *Rule { return &cecTable16 })
 
 // table25Rule marks the row for three phases, which Rule 28-304(2) confirms, as
 // surer than the others.

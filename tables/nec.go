@@ -5,17 +5,21 @@ package tables
 var necVolts = []voltRange{{115, 110, 120}, {230, 220, 240}, {460, 440, 480}, {575, 550, 600}}
 
 var (
-	necDC       = Rule{Ref: "Table 430.247"}
-	nec1Ph      = Rule{Ref: "Table 430.248"}
-	nec2Ph      = Rule{Ref: "Table 430.249"}
-	nec3Ph      = Rule{Ref: "Table 430.250"}
-	necRotor1   = Rule{Ref: "Table 430.251(A)"}
-	necRotor3   = Rule{Ref: "Table 430.251(B)"}
-	necDuty     = Rule{Ref: "Table 430.22(E)"}
-	necDevice   = Rule{Ref: "Table 430.52", Moved: []Move{{NEC2023, "Table 430.52(C)(1)"}}}
-	necCeiling  = Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []Move{{NEC2023, "430.52(C)(1)(b)"}}}
-	necStandard = Rule{Ref: "240.6(A)"}
-	necUnits    = Rule{Ref: "Table 430.37", Mark: MarkB}
+	necDC         = Rule{Ref: "Table 430.247"}
+	nec1Ph        = Rule{Ref: "Table 430.248"}
+	nec2Ph        = Rule{Ref: "Table 430.249"}
+	nec3Ph        = Rule{Ref: "Table 430.250"}
+	necRotor1     = Rule{Ref: "Table 430.251(A)"}
+	necRotor3     = Rule{Ref: "Table 430.251(B)"}
+	necDuty       = Rule{Ref: "Table 430.22(E)"}
+	necDevice     = Rule{Ref: "Table 430.52", Moved: []Move{{NEC2023, "Table 430.52(C)(1)"}}}
+	necCeiling    = Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []Move{{NEC2023, "430.52(C)(1)(b)"}}}
+	necStandard   = Rule{Ref: "240.6(A)"}
+	necResistor   = Rule{Ref: "Table 430.23(C)"}
+	necDCResistor = Rule{Ref: "Table 430.29"}
+	necBonding    = Rule{Ref: "Table 250.122"}
+	necBondingBig = Rule{Ref: "Table 250.122", Mark: MarkB}
+	necUnits      = Rule{Ref: "Table 430.37", Mark: MarkB}
 
 	necRaceway     = Rule{Ref: "Table 310.15(B)(16)", Moved: []Move{{NEC2020, "Table 310.16"}}}
 	necFreeAir     = Rule{Ref: "Table 310.15(B)(17)", Moved: []Move{{NEC2020, "Table 310.17"}}, Mark: MarkB}
@@ -57,6 +61,14 @@ var necBook = book{
 	ambient:     loadAmbient("nec/conductor_ambient_30c.csv", "ambient_max_c", false, &necAmbient),
 	count:       loadCounts("nec/conductor_adjustment.csv", &necCount, Percent),
 	insulations: loadInsulationsNEC("nec/conductor_insulations.csv", &necInsulations, "FEP", "MI", "SA", "SIS", "TBS", "Z", "ZW", "ZW-2"),
+	bonding: func(e Edition) *bondingTable {
+		if e >= NEC2020 {
+			return necBonding2020()
+		}
+		return necBonding2017()
+	},
+	secondaryResistor: loadResistors("nec/motor_secondary_resistor_percent.csv", &necResistor),
+	dcResistor:        loadResistors("nec/motor_dc_resistor_percent.csv", &necDCResistor),
 	smallConductors: loadSmallConductors("nec/motor_small_conductors.csv", func(row []string) *Rule {
 		return &Rule{Ref: row[4], Moved: []Move{{NEC2023, row[5]}}, Mark: MarkB}
 	}),
@@ -68,6 +80,20 @@ var (
 	necRotor1To2020 = loadMotorTable("nec/motor_locked_rotor_1ph.csv", &necRotor1, necVolts, nil, map[string]string{"v115_as_printed_2023": ""})
 	necRotor1As2023 = loadMotorTable("nec/motor_locked_rotor_1ph.csv", &necRotor1, necVolts, nil, map[string]string{"v115": "", "v115_as_printed_2023": "v115"})
 )
+
+// The largest aluminum sizes of Table 250.122 changed in 2020.
+var (
+	necBonding2017 = loadBonding("nec/conductor_grounding_2017.csv", necBondingRule)
+	necBonding2020 = loadBonding("nec/conductor_grounding.csv", necBondingRule)
+)
+
+// necBondingRule marks aluminum above 3000 A as read in one copy.
+func necBondingRule(m Material, rating int64) *Rule {
+	if m == Aluminum && rating > 3000_00 {
+		return &necBondingBig
+	}
+	return &necBonding
+}
 
 // necRacewayRule marks the cells above 600 kcmil, some of which 2011 changed, as
 // read in one copy.

@@ -1,0 +1,122 @@
+package motorcircuit
+
+import (
+	"fmt"
+	"iter"
+	"slices"
+	"strings"
+
+	"example.org/motorcircuit/tables"
+)
+
+// Figures yields every figure of the feeder that is present, in the order of the
+// derivation; those of its circuits are in [FeederResult.Circuits].
+func (r FeederResult) Figures() iter.Seq[tables.Figure] {
+	return func(yield func(tables.Figure) bool) {
+		for _, f := range slices.Concat(selectionFigures(&r.Conductors), r.deviceFigures(), r.disconnectFigures(), []tables.Figure{r.Bonding.Row}) {
+			if !f.IsZero() && !yield(f) {
+				return
+			}
+		}
+	}
+}
+
+func (r *FeederResult) deviceFigures() []tables.Figure {
+	return []tables.Figure{r.Limit, r.Rating, r.StartLimit, r.StartRating}
+}
+
+func (r *FeederResult) disconnectFigures() []tables.Figure {
+	return []tables.Figure{r.Disconnect.Amperes, r.Disconnect.LockedRotor}
+}
+
+// String returns the derivation as text: the motors with their part in the sum,
+// then each figure with how it came about and the rule behind it.
+func (r FeederResult) String() string {
+	var b strings.Builder
+	fmt.Fprintf(&b, "%s: feeder of %d motors, under %s\n\nLoads of the greatest sum\n", oneLine(r.Feeder.Tag), len(r.Circuits), r.Feeder.Edition.Standard())
+	for _, t := range r.Terms {
+		writeFigure(&b, t.Figure)
+	}
+	if r.Governs != "" {
+		fmt.Fprintf(&b, "%12s  %s governs the conductors\n", "", oneLine(r.Governs))
+	}
+	write := func(heading, chosen string, figures []tables.Figure) {
+		fmt.Fprintf(&b, "\n%s: %s\n", heading, chosen)
+		for _, f := range figures {
+			if !f.IsZero() {
+				writeFigure(&b, f)
+			}
+		}
+	}
+	write("Feeder conductors", wires(&r.Conductors), selectionFigures(&r.Conductors))
+	b.WriteString(whySmallerFails(&r.Conductors))
+	write("Feeder short-circuit and ground-fault device", r.Rating.String()+" "+r.Device.Name(), r.deviceFigures())
+	fmt.Fprintf(&b, "%12s  the device of %s governs\n", "", oneLine(r.Largest))
+	write("Disconnecting means of the group", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite), r.disconnectFigures())
+	write("Bonding conductor", fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why), []tables.Figure{r.Bonding.Row})
+	writeCautions(&b, r.Cautions)
+	return b.String()
+}
+
+// The cautions that a feeder as such gives rise to.
+var (
+	interlocked = tables.Caution{Text: "motors are counted as interlocked: they must not be able to run together, and the set of the greatest sum is taken"}
+	hardStarts  = tables.Caution{Text: "the device of a motor that will not start is counted at its higher ceiling"}
+	unequalLine = tables.Caution{Text: "single-phase motors are counted on the lines that they name, and the line of most load sizes every conductor"}
+	driveBefore = tables.Rule{Ref: "430.24", Note: "drives in a group"}
+)
+
+// cautions gathers what a designer should know of the feeder; each once, the
+// standing caution last.
+func (r *FeederResult) cautions(g *group) []tables.Caution {
+	e := r.Feeder.Edition
+	var list cautionList
+	if r.Feeder.Device == 0 {
+		list.add(noDevice)
+	}
+	if r.Feeder.Wiring.Ambient.IsZero() {
+		list.add(noAmbient)
+	}
+	if r.Feeder.Wiring.Termination == 0 {
+		list.add(noTermination)
+	}
+	cite := func(nec, cec *tables.Rule) tables.Citation {
+		if e.Code() == tables.CEC {
+			return cec.In(e)
+		}
+		return nec.In(e)
+	}
+	kinds := map[tables.Device]bool{r.Device: true}
+	for i := range g.members {
+		m := &g.members[i]
+		kinds[m.result.ShortCircuit.Device] = true
+		if m.fc.Interlock != "" {
+			list.add(interlocked)
+		}
+		if m.fc.HardStart {
+			list.add(hardStarts)
+		}
+		if m.fc.Lines != "" {
+			list.add(unequalLine)
+		}
+		if !m.result.Demand.Input.IsZero() && e == tables.NEC2017 {
+			list.add(tables.Caution{Text: "this edition does not say how a drive counts in a group: its rated input current is taken, as later editions say", Cite: driveBefore.In(e)})
+		}
+	}
+	if len(kinds) > 1 {
+		list.add(tables.Caution{Text: "the branch devices are not all of the feeder device's kind: each counts as the kind that it is, instantaneous-trip breakers as the feeder's", Cite: cite(&necFeederDevice, &cecFeederDevice)})
+	}
+	if !r.Feeder.Demand.IsZero() {
+		list.add(tables.Caution{Text: "a demand factor is applied: the authority having jurisdiction must allow it, and the conductors must still carry the greatest demand", Cite: cite(&necDemand, &cecDemand)})
+	}
+	list.add(r.Conductors.Cautions...)
+	list.add(r.Disconnect.Cautions...)
+	list.add(r.Bonding.Cautions...)
+	for f := range r.Figures() {
+		for _, c := range f.FromMemory() {
+			list.add(tables.FromMemory(c))
+		}
+	}
+	list.finish(e)
+	return list
+}
