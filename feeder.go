@@ -135,7 +135,11 @@ func (f Feeder) validate() error {
 		add("circuits", "", "at least one motor circuit")
 	}
 	if f.Device != 0 && (!f.Device.IsValid() || f.Device == protection.InstantaneousBreaker) {
-		add("device", strconv.Itoa(int(f.Device)), "a fuse or an inverse-time breaker for a feeder")
+		value := f.Device.String()
+		if value == "" {
+			value = strconv.Itoa(int(f.Device))
+		}
+		add("device", value, "a fuse or an inverse-time breaker for a feeder")
 	}
 	if d := f.Demand; !d.IsZero() && (d.Decimal().Sign() <= 0 || d.Cmp(wholeDemand) > 0) {
 		add("demand_factor", d.String(), "above 0, at most 1")

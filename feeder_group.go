@@ -28,10 +28,7 @@ func (m *member) continuous() bool { return m.result.Circuit.Motor.Duty.Kind == 
 // member works out what a sized circuit counts for.
 func (r *FeederResult) member(i int, fc FeederCircuit, one Result) (member, error) {
 	e, d := r.Feeder.Edition, &one.Demand
-	m := member{index: i, tag: fc.Circuit.Tag, result: one, fc: fc, current: d.Design, rotor: one.Disconnect.LockedRotor}
-	if m.tag == "" {
-		m.tag = "circuit " + itoa(i+1)
-	}
+	m := member{index: i, tag: memberTag(i, fc.Circuit.Tag), result: one, fc: fc, current: d.Design, rotor: one.Disconnect.LockedRotor}
 	onDrive := fc.Circuit.Motor.Starting == motor.Drive
 	if onDrive { // 430.122(D): the drive's input stands for the motor
 		m.current = d.Input
@@ -47,6 +44,14 @@ func (r *FeederResult) member(i int, fc FeederCircuit, one Result) (member, erro
 		m.rotor = m.current
 	}
 	return m, m.branchDevice(r, e)
+}
+
+// memberTag names a motor that has no tag by its place.
+func memberTag(i int, tag string) string {
+	if tag == "" {
+		return "circuit " + itoa(i+1)
+	}
+	return tag
 }
 
 // branchDevice finds what the motor's branch device counts for: under the NEC
@@ -207,7 +212,7 @@ func checkVoltages(members []member) (faults []error) {
 	most := members[0]
 	for _, m := range members[1:] { // three phases name the system, else the highest voltage
 		a, b := m.result.Circuit.Motor, most.result.Circuit.Motor
-		if cmp.Or(cmp.Compare(a.PhaseCount(), b.PhaseCount()), cmp.Compare(systemVolts(a.Voltage), systemVolts(b.Voltage))) > 0 {
+		if cmp.Or(cmp.Compare(a.PhaseCount(), b.PhaseCount()), cmp.Compare(systemVolts(a.Voltage), systemVolts(b.Voltage)), cmp.Compare(a.Voltage, b.Voltage), strings.Compare(most.tag, m.tag)) > 0 {
 			most = m
 		}
 	}

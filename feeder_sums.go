@@ -36,6 +36,9 @@ func (r *FeederResult) ampacity(g *group) {
 		for _, t := range terms {
 			figures = append(figures, t.Figure)
 		}
+		if len(figures) == 0 && len(g.loadTerms()) == 0 {
+			continue // a line that carries nothing
+		}
 		total := r.total(g, figures)
 		if r.Ampacity.IsZero() || total.Cmp(r.Ampacity) > 0 {
 			r.Ampacity, r.Terms, r.Governs = total, terms, governs
@@ -71,9 +74,9 @@ func (g *group) loadTerms() []tables.Figure {
 	if !g.continuous.IsZero() && g.continuous.Value().Sign() > 0 {
 		if g.edition.Code() == tables.CEC {
 			most := tables.StatedFigure("of the rating", g.edition, &cecContinuous, tables.Percent, 80, 0)
-			terms = append(terms, tables.QuotientOf("continuous other load", g.edition, &cecContinuous, g.continuous, most))
+			terms = append(terms, tables.QuotientOf("other load that is continuous", g.edition, &cecContinuous, g.continuous, most))
 		} else {
-			terms = append(terms, percent("continuous other load", g.edition, &necLoads, g.continuous, 125))
+			terms = append(terms, percent("other load that is continuous", g.edition, &necLoads, g.continuous, 125))
 		}
 	}
 	if !g.other.IsZero() && g.other.Value().Sign() > 0 {
@@ -87,12 +90,15 @@ func (g *group) loadTerms() []tables.Figure {
 func (g *group) terms(running []*member) (terms []Term, governs string) {
 	at := g.governing(running)
 	for i, m := range running {
-		t := Term{Tag: m.tag, Figure: m.base.Renamed(m.tag)}
+		rule := &necSeveral
+		switch {
+		case g.edition.Code() == tables.CEC:
+			rule = &cecSeveral
+		case !m.continuous():
+			rule = &necSeveralDuty
+		}
+		t := Term{Tag: m.tag, Figure: m.base.As(m.tag, g.edition, rule)}
 		if i == at {
-			rule := &necSeveral
-			if g.edition.Code() == tables.CEC {
-				rule = &cecSeveral
-			}
 			t.Figure, governs = percent(m.tag, g.edition, rule, m.current, 125), m.tag
 		}
 		terms = append(terms, t)
@@ -130,11 +136,12 @@ func (r *FeederResult) device(g *group) error {
 	if e.Code() == tables.CEC {
 		rule, loads = &cecFeederDevice, &cecFeederLoads
 	}
+	extra := g.loadTerms()
+	if len(extra) > 0 {
+		rule = loads
+	}
 	for _, running := range g.running {
-		limit, largest := g.deviceLimit(running, rule)
-		if extra := g.loadTerms(); len(extra) > 0 {
-			limit = tables.SumOf(feederLimitName, e, loads, append([]tables.Figure{limit.Renamed("motors")}, extra...)...)
-		}
+		limit, largest := g.deviceLimit(running, rule, extra...)
 		if r.Limit.IsZero() || limit.Cmp(r.Limit) > 0 {
 			r.Limit, r.Largest = limit, largest
 		}
@@ -169,17 +176,20 @@ func smallestRating(e tables.Edition, d tables.Device, limit tables.Figure) tabl
 
 // deviceLimit returns the device of the motor that is allowed the largest, plus
 // the currents of the others. Of several that are allowed the same, the one of
-// most current counts as the largest.
-func (g *group) deviceLimit(running []*member, rule *tables.Rule) (tables.Figure, string) {
+// most current counts as the largest. Other loads are added.
+func (g *group) deviceLimit(running []*member, rule *tables.Rule, loads ...tables.Figure) (tables.Figure, string) {
 	largest := 0
 	for i, m := range running {
 		if m.device.Cmp(running[largest].device) > 0 {
 			largest = i
 		}
 	}
-	terms := make([]tables.Figure, 0, len(running))
-	if len(running) == 0 {
+	terms := make([]tables.Figure, 0, len(running)+len(loads))
+	switch {
+	case len(running) == 0 && len(loads) == 0:
 		return tables.Whole(feederLimitName, tables.Ampere, 0).As(feederLimitName, g.edition, rule), ""
+	case len(running) == 0:
+		return tables.SumOf(feederLimitName, g.edition, rule, loads...), ""
 	}
 	terms = append(terms, running[largest].device.Renamed("device of "+running[largest].tag))
 	for i, m := range running {
@@ -187,7 +197,7 @@ func (g *group) deviceLimit(running []*member, rule *tables.Rule) (tables.Figure
 			terms = append(terms, m.current.Renamed(m.tag))
 		}
 	}
-	return tables.SumOf(feederLimitName, g.edition, rule, terms...), running[largest].tag
+	return tables.SumOf(feederLimitName, g.edition, rule, append(terms, loads...)...), running[largest].tag
 }
 
 // startTogether raises the limit for motors that must start together: the

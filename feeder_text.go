@@ -21,24 +21,55 @@ func (r FeederResult) Figures() iter.Seq[tables.Figure] {
 	}
 }
 
+// motors counts motors in words.
+func motors(n int) string {
+	if n == 1 {
+		return "1 motor"
+	}
+	return fmt.Sprintf("%d motors", n)
+}
+
+// notCounted names the motors that have no part in the sum: those of an
+// interlock, a line or a drive that another stands for.
+func (r *FeederResult) notCounted() string {
+	var left []string
+	for i, c := range r.Feeder.Circuits {
+		tag := memberTag(i, c.Circuit.Tag)
+		if !slices.ContainsFunc(r.Terms, func(t Term) bool { return t.Tag == tag }) {
+			left = append(left, oneLine(tag))
+		}
+	}
+	slices.Sort(left)
+	return strings.Join(left, ", ")
+}
+
 func (r *FeederResult) deviceFigures() []tables.Figure {
 	return []tables.Figure{r.Limit, r.Rating, r.StartLimit, r.StartRating}
 }
 
 func (r *FeederResult) disconnectFigures() []tables.Figure {
-	return []tables.Figure{r.Disconnect.Amperes, r.Disconnect.LockedRotor}
+	var sum tables.Figure
+	if of := r.Disconnect.Amperes.Operands(); len(of) > 0 && of[0].Op() == tables.Sum {
+		sum = of[0]
+	}
+	return []tables.Figure{sum, r.Disconnect.Amperes, r.Disconnect.LockedRotor}
 }
 
 // String returns the derivation as text: the motors with their part in the sum,
 // then each figure with how it came about and the rule behind it.
 func (r FeederResult) String() string {
 	var b strings.Builder
-	fmt.Fprintf(&b, "%s: feeder of %d motors, under %s\n\nLoads of the greatest sum\n", oneLine(r.Feeder.Tag), len(r.Circuits), r.Feeder.Edition.Standard())
+	fmt.Fprintf(&b, "%s: feeder of %s, under %s\n\nLoads that size the conductors\n", oneLine(r.Feeder.Tag), motors(len(r.Circuits)), r.Feeder.Edition.Standard())
 	for _, t := range r.Terms {
 		writeFigure(&b, t.Figure)
 	}
 	if r.Governs != "" {
 		fmt.Fprintf(&b, "%12s  %s governs the conductors\n", "", oneLine(r.Governs))
+	} else {
+		fmt.Fprintf(&b, "%12s  no motor counts 125 percent: the part of one that is not of continuous duty is as great\n", "")
+	}
+	if left := r.notCounted(); left != "" {
+		fmt.Fprintf(&b, "%12s  not counted: %s\n", "", left)
 	}
 	write := func(heading, chosen string, figures []tables.Figure) {
 		fmt.Fprintf(&b, "\n%s: %s\n", heading, chosen)
@@ -60,10 +91,11 @@ func (r FeederResult) String() string {
 
 // The cautions that a feeder as such gives rise to.
 var (
-	interlocked = tables.Caution{Text: "motors are counted as interlocked: they must not be able to run together, and the set of the greatest sum is taken"}
-	hardStarts  = tables.Caution{Text: "the device of a motor that will not start is counted at its higher ceiling"}
-	unequalLine = tables.Caution{Text: "single-phase motors are counted on the lines that they name, and the line of most load sizes every conductor"}
-	driveBefore = tables.Rule{Ref: "430.24", Note: "drives in a group"}
+	interlocked  = tables.Caution{Text: "motors are counted as interlocked: they must not be able to run together, and the set of the greatest sum is taken"}
+	branchDevice = tables.Caution{Text: "no kind of device is given for a branch circuit: a time-delay fuse is taken, which counts in the feeder's device"}
+	hardStarts   = tables.Caution{Text: "the device of a motor that will not start is counted at its higher ceiling"}
+	unequalLine  = tables.Caution{Text: "single-phase motors are counted on the lines that they name, and the line of most load sizes every conductor"}
+	driveBefore  = tables.Rule{Ref: "430.24", Note: "drives in a group"}
 )
 
 // cautions gathers what a designer should know of the feeder; each once, the
@@ -90,6 +122,9 @@ func (r *FeederResult) cautions(g *group) []tables.Caution {
 	for i := range g.members {
 		m := &g.members[i]
 		kinds[m.result.ShortCircuit.Device] = true
+		if m.fc.Circuit.Device == 0 {
+			list.add(branchDevice)
+		}
 		if m.fc.Interlock != "" {
 			list.add(interlocked)
 		}
@@ -104,7 +139,7 @@ func (r *FeederResult) cautions(g *group) []tables.Caution {
 		}
 	}
 	if len(kinds) > 1 {
-		list.add(tables.Caution{Text: "the branch devices are not all of the feeder device's kind: each counts as the kind that it is, instantaneous-trip breakers as the feeder's", Cite: cite(&necFeederDevice, &cecFeederDevice)})
+		list.add(tables.Caution{Text: "the branch devices are not all of the feeder device's kind: each counts as the kind that it is, or as the feeder's if it is an instantaneous-trip breaker", Cite: cite(&necFeederDevice, &cecFeederDevice)})
 	}
 	if !r.Feeder.Demand.IsZero() {
 		list.add(tables.Caution{Text: "a demand factor is applied: the authority having jurisdiction must allow it, and the conductors must still carry the greatest demand", Cite: cite(&necDemand, &cecDemand)})

@@ -46,6 +46,9 @@ func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection) (B
 	if err != nil {
 		return Bonding{}, err
 	}
+	if circuit.Sets > 1 {
+		why += ", one for each set"
+	}
 	b.Size, b.Row, b.Why = size, row, why
 	if circuit.Size.Cmp(size) < 0 {
 		b.Size, b.Why = circuit.Size, "as large as the circuit conductors, which it need not exceed ("+rule.In(e).String()+")"

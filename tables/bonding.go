@@ -21,7 +21,7 @@ func (e Edition) BondingSize(m Material, rating Figure) (Size, Figure, error) {
 	for _, r := range t.rows {
 		if exact.New(r.rating, 2).Cmp(rating.value) >= 0 {
 			f := newFigure("device rating of the table row", Tabulated, e, t.rule(m, r.rating), exact.New(r.rating, 2), Ampere)
-			return r.sizes[m], f.WithNote(r.sizes[m].String() + " " + m.String()), nil
+			return r.sizes[m], f.WithNote(r.notes[m]), nil
 		}
 	}
 	return 0, Figure{}, &NotTabulatedError{Field: "device", Table: t.rule(m, 0).In(e), Row: "row for " + rating.String(), Covers: "ratings to " + exact.New(t.rows[len(t.rows)-1].rating, 2).String() + " A"}
@@ -35,6 +35,7 @@ type bondingTable struct {
 type bondingRow struct {
 	rating int64 // hundredths of an ampere
 	sizes  [materialCount]Size
+	notes  [materialCount]string
 }
 
 func loadBonding(path string, rule func(Material, int64) *Rule) func() *bondingTable {
@@ -52,9 +53,14 @@ func loadBonding(path string, rule func(Material, int64) *Rule) func() *bondingT
 			}
 			r := bondingRow{rating: h}
 			for m := range materialCount {
-				if r.sizes[m], err = ParseSize(cells[1+int(m)]); err != nil {
+				cell, outside := cells[1+int(m)], ""
+				if cell == "1200" { // printed to 2017, but not a size of the ampacity tables
+					cell, outside = "1250", ", the table's 1200 kcmil not being one of the series"
+				}
+				if r.sizes[m], err = ParseSize(cell); err != nil {
 					return nil, fmt.Errorf("%s: %w", path, err)
 				}
+				r.notes[m] = r.sizes[m].String() + " " + m.String() + outside
 				if row > 0 && r.sizes[m] < t.rows[row-1].sizes[m] {
 					return nil, fmt.Errorf("%s: size falls at %s A", path, cells[0])
 				}

@@ -5,26 +5,26 @@ import (
 	"slices"
 	"strings"
 
-	mc "example.org/motorcircuit"
 	"example.org/motorcircuit/tables"
 )
 
 // faults are the faults of one row, by column.
-type faults struct {
+type faults[T any] struct {
+	of   *layout[T]
 	list []fault
 }
 
 type fault struct {
-	column int // in columns; -1 for the row as a whole
+	column int // in the layout; -1 for the row as a whole
 	text   string
 }
 
 // add adds an error of the library in the words of its column; an error that is
 // of no column is told of the row.
-func (f *faults) add(err error, column int) {
+func (f *faults[T]) add(err error, column int) {
 	name := "row"
 	if column >= 0 {
-		name = columns[column].name
+		name = f.of.columns[column].name
 	}
 	text := err.Error()
 	var input *tables.InputError
@@ -33,7 +33,7 @@ func (f *faults) add(err error, column int) {
 	switch {
 	case errors.As(err, &input):
 		e := *input
-		e.Field, e.Want = name, inColumns.Replace(e.Want)
+		e.Field, e.Want = name, f.of.words.Replace(e.Want)
 		text = e.Error()
 	case errors.As(err, &missing):
 		e := *missing
@@ -49,35 +49,35 @@ func (f *faults) add(err error, column int) {
 	f.list = append(f.list, fault{column, text})
 }
 
+// say adds a fault of the row as a whole, in words of its own.
+func (f *faults[T]) say(text string) { f.list = append(f.list, fault{-1, text}) }
+
 // texts returns the faults in the order of columns, each on one line.
-func (f *faults) texts() []string {
+func (f *faults[T]) texts() []string {
 	slices.SortStableFunc(f.list, func(a, b fault) int { return a.column - b.column })
 	texts := make([]string, len(f.list))
 	for i, x := range f.list {
-		texts[i] = strings.Join(strings.Fields(x.text), " ")
+		texts[i] = oneLine(x.text)
 	}
 	return texts
 }
 
-// size sizes a circuit and adds what the library has to say of it. A verdict on
-// a cell that could not be read, or that rests on one, is left out: it is told
-// already.
-func size(c mc.Circuit, f *faults) mc.Result {
-	r, err := mc.Size(c)
+// judge adds what the library has to say of a row. A verdict on a cell that
+// could not be read, or that rests on one, is left out: it is told already.
+func (f *faults[T]) judge(err error) {
 	unread := slices.Clone(f.list)
 	for _, e := range leaves(err) {
-		column := columnOf(fieldOf(e))
-		told := func(x fault) bool { return x.column == column || column >= 0 && rests(column, x.column) }
+		column := f.of.of(fieldOf(e))
+		told := func(x fault) bool { return x.column == column || column >= 0 && f.rests(column, x.column) }
 		if !slices.ContainsFunc(unread, told) {
 			f.add(e, column)
 		}
 	}
-	return r
 }
 
 // rests reports whether the verdict on a column rests on another.
-func rests(column, on int) bool {
-	return on >= 0 && slices.Contains(strings.Fields(columns[column].needs), columns[on].name)
+func (f *faults[T]) rests(column, on int) bool {
+	return on >= 0 && slices.Contains(strings.Fields(f.of.columns[column].needs), f.of.columns[on].name)
 }
 
 // leaves takes joined errors apart.

@@ -4,6 +4,8 @@ import (
 	"encoding/csv"
 	"encoding/json"
 	"io"
+	"os"
+	"path/filepath"
 	"regexp"
 	"strings"
 	"testing"
@@ -16,7 +18,7 @@ import (
 // row of the input has a row of the output, and an error names its column.
 func FuzzRow(f *testing.F) {
 	var names []string
-	for _, c := range columns {
+	for _, c := range motors.columns {
 		if c.set != nil {
 			names = append(names, c.name)
 		}
@@ -83,5 +85,74 @@ func FuzzRow(f *testing.F) {
 		var elements []any
 		require.NoError(t, json.Unmarshal([]byte(b.String()), &elements))
 		require.Len(t, elements, rows)
+	})
+}
+
+// FuzzFeederRow reads whatever stands below a header of a feeders file: each row
+// has a row of the output, and an error names its column or its motors.
+func FuzzFeederRow(f *testing.F) {
+	schedule := filepath.Join(f.TempDir(), "schedule.csv")
+	require.NoError(f, os.WriteFile(schedule, []byte(pumpHeader+pump1+pump2+pump3), 0o644))
+	var names []string
+	for _, c := range feederColumns.columns {
+		if c.set != nil {
+			names = append(names, c.name)
+		}
+	}
+	header := strings.Join(names, ",") + ",note\n"
+	blank := strings.Repeat(",", len(names)-3)
+	begin := regexp.MustCompile(`^(row: |no motor |no feeder |motor P-[0-9]: |(` + strings.Join(names, "|") + `)( is not given)?( "|:))`)
+	_, body, _ := strings.Cut(sampleFeeders, "\n")
+	for line := range strings.Lines(strings.ReplaceAll(body, "F-2 drying hall", "F-1")) {
+		f.Add(line)
+	}
+	for _, line := range []string{
+		"", "\n", ",", blank, "F-1,NEC-2023,time_delay_fuse" + blank, "F-1,NEC-2023," + blank + "\nF-1,NEC-2023," + blank, "F-1,CEC-2024,wire" + blank,
+		"F-2,NEC-2023,inverse_time_breaker,aluminum,XHHW-2,75,40,6,1e9,٥,", "\"F\n1\",NEC-2023,,,,65.,-1,,NaN,+Inf,", "F-1,\"NEC", "a\"b", "\x00,\xff",
+	} {
+		f.Add(line)
+	}
+	f.Fuzz(func(t *testing.T, line string) {
+		r := csv.NewReader(strings.NewReader(header + line))
+		r.FieldsPerRecord = -1
+		file, readError := r.ReadAll()
+		var b, complaint strings.Builder
+		status := run([]string{"-format", "csv", "-feeders", "-", schedule}, strings.NewReader(header+line), &b, &complaint)
+		if readError != nil {
+			require.Equal(t, cannotRun, status)
+			require.Empty(t, b.String())
+			require.NotEmpty(t, complaint.String())
+			return
+		}
+		tags := map[string]bool{}
+		for _, record := range file[1:] {
+			tags[strings.TrimSpace(record[0])] = true
+		}
+		rows := len(file) - 1
+		for _, tag := range []string{"F-1", "F-2"} { // those that the motors name
+			if !tags[tag] {
+				rows++
+			}
+		}
+		_, block, _ := strings.Cut(b.String(), "\n\n")
+		answers, err := csv.NewReader(strings.NewReader(block)).ReadAll()
+		require.NoError(t, err)
+		require.Len(t, answers, rows+1)
+		want := allSized
+		for _, answer := range answers[1:] {
+			told := answer[2]
+			require.Equal(t, told == "", strings.Join(answer[3:len(answer)-1], "") != "", "either an error or an answer")
+			if told != "" {
+				want = someBad
+				require.Regexp(t, begin, told)
+				require.NotContains(t, told, "\n")
+			}
+		}
+		require.Equal(t, want, status)
+		b.Reset()
+		assert.Equal(t, status, run([]string{"-format", "json", "-feeders", "-", schedule}, strings.NewReader(header+line), &b, &complaint))
+		var document struct{ Circuits, Feeders []any }
+		require.NoError(t, json.Unmarshal([]byte(b.String()), &document))
+		require.Len(t, document.Feeders, rows)
 	})
 }

@@ -10,42 +10,55 @@ import (
 	"slices"
 	"strings"
 
-	mc "example.org/motorcircuit"
 	"example.org/motorcircuit/tables"
 )
 
-// A schedule is a motor schedule that is being read.
-type schedule struct {
+// A sheet is a CSV input that is being read.
+type sheet[T any] struct {
+	of     *layout[T]
 	csv    *csv.Reader
 	header []string // names as the file writes them
-	known  []int    // for each cell the place in columns, -1 if passed through
-	at     []int    // for each of columns its cell, -1 if the file has none
+	known  []int    // for each cell the place in the layout, -1 if passed through
+	at     []int    // for each column of the layout its cell, -1 if the file has none
+}
+
+// An entry is what a row and the answer to it share.
+type entry struct {
+	line   int      // of the file, from 1; 0 for an answer to no row
+	tag    string   // as the row has it
+	code   string   // as the row has it
+	passed []string // the passed-through cells
+}
+
+// A row is one row as it was read.
+type row[T any] struct {
+	entry
+	value  T
+	faults faults[T] // of its cells
+	broken bool      // not shaped as the header, so that no cell can be trusted
 }
 
 // An answer is what becomes of one row.
-type answer struct {
-	line   int      // of the file, from 1
-	tag    string   // as the row has it
-	code   string   // as the row has it
+type answer[R any] struct {
+	entry
 	faults []string // in the words of the columns, each on one line; none for a good row
-	passed []string // the passed-through cells
-	result mc.Result
+	result R
 }
 
-// newSchedule reads the header.
-func newSchedule(r io.Reader) (*schedule, error) {
+// openSheet reads the header.
+func openSheet[T any](of *layout[T], r io.Reader) (*sheet[T], error) {
 	buffered := bufio.NewReaderSize(r, 64<<10)
 	if mark, _ := buffered.Peek(3); bytes.Equal(mark, []byte("\uFEFF")) {
 		buffered.Discard(3)
 	}
-	s := &schedule{csv: csv.NewReader(buffered), at: make([]int, len(columns))}
+	s := &sheet[T]{of: of, csv: csv.NewReader(buffered), at: make([]int, len(of.columns))}
 	s.csv.FieldsPerRecord = -1 // counted row by row
 	s.csv.ReuseRecord = true
 	record, err := s.csv.Read()
 	if err == io.EOF {
-		return nil, errors.New("the schedule is empty: the first line must name the columns")
+		return nil, fmt.Errorf("the %s is empty: the first line must name the columns", of.file)
 	} else if err != nil {
-		return nil, wordRead(err)
+		return nil, s.wordRead(err)
 	}
 	s.header = slices.Clone(record)
 	for i := range s.at {
@@ -53,18 +66,18 @@ func newSchedule(r io.Reader) (*schedule, error) {
 	}
 	var faults []error
 	for cell, name := range s.header {
-		i := columnNamed(strings.ToLower(strings.TrimSpace(name)))
+		i := of.named(strings.ToLower(strings.TrimSpace(name)))
 		s.known = append(s.known, i)
 		if i < 0 {
 			continue
 		}
 		if s.at[i] >= 0 {
-			faults = append(faults, fmt.Errorf("the header names column %s twice", columns[i].name))
+			faults = append(faults, fmt.Errorf("the header names column %s twice", of.columns[i].name))
 		}
 		s.at[i] = cell
 	}
 	var missing []string
-	for i, c := range columns {
+	for i, c := range of.columns {
 		if c.must && s.at[i] < 0 {
 			missing = append(missing, c.name)
 		}
@@ -79,11 +92,11 @@ func newSchedule(r io.Reader) (*schedule, error) {
 }
 
 // passedNames returns the names of the passed-through columns.
-func (s *schedule) passedNames() []string { return s.passed(s.header) }
+func (s *sheet[T]) passedNames() []string { return s.passed(s.header) }
 
 // passed returns the cells of a record that are passed through; a cell that a
 // short record lacks is empty.
-func (s *schedule) passed(record []string) []string {
+func (s *sheet[T]) passed(record []string) []string {
 	var cells []string
 	for cell, i := range s.known {
 		if i < 0 {
@@ -94,9 +107,9 @@ func (s *schedule) passed(record []string) []string {
 }
 
 // unused returns the columns of the file that are known but not used yet.
-func (s *schedule) unused() []string {
+func (s *sheet[T]) unused() []string {
 	var names []string
-	for i, c := range columns {
+	for i, c := range s.of.columns {
 		if c.set == nil && s.at[i] >= 0 {
 			names = append(names, c.name)
 		}
@@ -104,58 +117,53 @@ func (s *schedule) unused() []string {
 	return names
 }
 
-// next answers the next row. At the end it returns no answer and [io.EOF]. A
-// row that breaks the reading comes with its own answer and the error.
-func (s *schedule) next() (*answer, error) {
+// next reads the next row. At the end it returns no row and [io.EOF]. A row that
+// breaks the reading comes with the error.
+func (s *sheet[T]) next() (*row[T], error) {
 	record, err := s.csv.Read()
 	if err == io.EOF {
 		return nil, err
 	}
+	r := &row[T]{faults: faults[T]{of: s.of}}
 	if err != nil {
-		a := &answer{passed: s.passed(nil)}
 		var broken *csv.ParseError
 		if errors.As(err, &broken) {
-			a.line = broken.StartLine
+			r.line = broken.StartLine
 		}
-		err = wordRead(err)
-		a.faults = []string{err.Error()}
-		return a, err
+		err = s.wordRead(err)
+		r.passed, r.broken = s.passed(nil), true
+		r.faults.say(err.Error())
+		return r, err
 	}
 	line, _ := s.csv.FieldPos(0)
-	return s.answer(line, record), nil
+	r.entry = entry{line, s.cell(record, "tag"), s.cell(record, "code"), s.passed(record)}
+	s.fill(r, record)
+	return r, nil
 }
 
-// answer sizes the motor of a record.
-func (s *schedule) answer(line int, record []string) *answer {
-	a := &answer{line: line, tag: s.cell(record, "tag"), code: s.cell(record, "code"), passed: s.passed(record)}
-	if len(record) != len(s.header) {
-		a.faults = []string{fmt.Sprintf("row: %d cells where the header names %d columns", len(record), len(s.header))}
-		return a
-	}
-	var c mc.Circuit
-	var f faults
+// fill reads the cells of a record. In a record that is not shaped as the header
+// they are read as far as they go, and their faults are not told.
+func (s *sheet[T]) fill(r *row[T], record []string) {
 	for cell, i := range s.known {
-		if i < 0 || columns[i].set == nil {
+		if i < 0 || s.of.columns[i].set == nil {
 			continue
 		}
-		text := strings.TrimSpace(record[cell])
-		if err := columns[i].set(&c, text); err != nil {
-			f.add(err, i)
+		if err := s.of.columns[i].set(&r.value, strings.TrimSpace(at(record, cell))); err != nil {
+			r.faults.add(err, i)
 		}
 	}
-	if c.Tag == "" {
-		f.add(&tables.InputError{Want: "a name for the motor"}, columnNamed("tag"))
+	if r.tag == "" {
+		r.faults.add(&tables.InputError{Want: "a name for the " + s.of.row}, s.of.named("tag"))
 	}
-	if r := size(c, &f); len(f.list) == 0 {
-		a.result, a.code = r, c.Edition.String()
+	if len(record) != len(s.header) {
+		r.broken, r.faults.list = true, nil
+		r.faults.say(fmt.Sprintf("row: %d cells where the header names %d columns", len(record), len(s.header)))
 	}
-	a.faults = f.texts()
-	return a
 }
 
 // cell returns the trimmed cell of a known column, "" if the record has none.
-func (s *schedule) cell(record []string, name string) string {
-	return strings.TrimSpace(at(record, s.at[columnNamed(name)]))
+func (s *sheet[T]) cell(record []string, name string) string {
+	return strings.TrimSpace(at(record, s.at[s.of.named(name)]))
 }
 
 func at(record []string, cell int) string {
@@ -166,10 +174,10 @@ func at(record []string, cell int) string {
 }
 
 // wordRead words an error of reading.
-func wordRead(err error) error {
+func (s *sheet[T]) wordRead(err error) error {
 	var broken *csv.ParseError
 	if !errors.As(err, &broken) {
-		return fmt.Errorf("reading the schedule: %w", err)
+		return fmt.Errorf("reading the %s: %w", s.of.file, err)
 	}
 	from := ""
 	if broken.StartLine != broken.Line {

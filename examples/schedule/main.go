@@ -1,16 +1,29 @@
-// Schedule sizes the branch circuits of a motor schedule: one CSV row in, one
-// answer out. Run it on its own sample, or on a file ("-" is standard input):
+// Schedule sizes the branch circuits of a motor schedule, and the feeders that
+// its motors name: one CSV row in, one answer out. Run it on its own sample, or
+// on files ("-" is standard input):
 //
 //	go run ./examples/schedule
 //	go run ./examples/schedule -format csv schedule.csv > sized.csv
+//	go run ./examples/schedule -feeders feeders.csv schedule.csv
 //
-// The header names the columns, in any order; see columns.go for those it knows.
-// Only tag, code, kind, power and volts must be there. Columns it does not know
-// are passed through. A row that cannot be sized tells all its faults in the
-// words of the columns, and the other rows go on.
+// The header names the columns, in any order; the columns_*.go files list those
+// it knows. Of a schedule only tag, code, kind, power and volts must be there, of
+// a feeders file only tag and code. Columns it does not know are passed through.
+// A row that cannot be sized tells all its faults in the words of the columns,
+// and the other rows go on.
 //
-// The exit status is 0 if every row was sized, 1 if any was not, and 2 if the
-// command line or the header cannot stand, or reading or writing broke off.
+// Feeders are answered with -feeders: each motor names the tag of its feeder in
+// the column feeder, and the feeder carries all motors that name it. A feeder is
+// not sized unless all its motors are, and a tag that the feeders file lacks is
+// answered as a feeder that failed. The feeders come after the motors: as text
+// under a heading, as CSV after a blank line with a header of their own, as JSON
+// in an object {"circuits":[...],"feeders":[...]}. Without -feeders the column
+// feeder is not used, CSV is one block and JSON one array; only the sample as
+// text shows the sample's feeders unasked.
+//
+// The exit status is 0 if every row was sized, 1 if any motor or feeder was not,
+// and 2 if the command line or a header cannot stand, or reading or writing broke
+// off.
 //
 // Cautions: every answer carries its own. The figures are for design by or under
 // a licensed person: the printed code in force, local amendments, equipment
@@ -26,10 +39,17 @@ import (
 	"io"
 	"os"
 	"strings"
+
+	mc "example.org/motorcircuit"
 )
 
-//go:embed sample.csv
-var sample string
+// The sample: an invented yard that dries seaweed.
+var (
+	//go:embed sample.csv
+	sample string
+	//go:embed sample_feeders.csv
+	sampleFeeders string
+)
 
 // The exit statuses.
 const (
@@ -38,21 +58,26 @@ const (
 	cannotRun = 2
 )
 
-// An output writes answers in one format, a row at a time.
+// An output writes answers in one format, a row at a time: the motors, then the
+// feeders if there are any to answer.
 type output interface {
 	begin(passed []string) error // names of the passed-through columns
-	row(a *answer) error         // the answer to one row
+	row(a *answer[mc.Result]) error
 	end(sized, failed int) error // after the last row
+
+	beginFeeders(passed []string) error
+	feeder(a *answer[mc.FeederResult]) error
+	endFeeders(sized, failed int) error
 }
 
 // formats are the formats of -format.
 var formats = []struct {
 	name string
-	make func(io.Writer) output
+	make func(w io.Writer, feeders bool) output
 }{
-	{"text", func(w io.Writer) output { return &textOutput{w: w} }},
-	{"csv", func(w io.Writer) output { return newCSVOutput(w) }},
-	{"json", func(w io.Writer) output { return &jsonOutput{w: w} }},
+	{"text", func(w io.Writer, _ bool) output { return &textOutput{w: w} }},
+	{"csv", func(w io.Writer, _ bool) output { return newCSVOutput(w) }},
+	{"json", func(w io.Writer, feeders bool) output { return &jsonOutput{w: w, feeders: feeders} }},
 }
 
 func main() { os.Exit(run(os.Args[1:], os.Stdin, os.Stdout, os.Stderr)) }
@@ -66,10 +91,17 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 	flags := flag.NewFlagSet("schedule", flag.ContinueOnError)
 	flags.SetOutput(stderr)
 	flags.Usage = func() {
-		fmt.Fprintf(stderr, "usage: schedule [-format %s] [schedule.csv]\n", strings.Join(formatNames(), "|"))
+		fmt.Fprintf(stderr, "usage: schedule [-format %s] [-feeders feeders.csv] [schedule.csv]\n", strings.Join(formatNames(), "|"))
 		flags.PrintDefaults()
 	}
 	format := flags.String("format", "text", "`format` of the answers: "+strings.Join(formatNames(), ", "))
+	feedersName := ""
+	flags.Func("feeders", "`file` of the feeders that the motors name", func(name string) error {
+		if feedersName = name; name == "" {
+			return errors.New("want a file name")
+		}
+		return nil
+	})
 	if err := flags.Parse(args); errors.Is(err, flag.ErrHelp) {
 		return allSized
 	} else if err != nil {
@@ -84,15 +116,32 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 		return complain(err)
 	}
 	defer closeInput()
-	s, err := newSchedule(in)
+	if feedersName == "-" && flags.Arg(0) == "-" {
+		return complain(errors.New("standard input cannot be both the schedule and the feeders file"))
+	}
+	var feeders *feederList
+	if feedersName != "" {
+		feeders, err = openFeeders(feedersName, stdin)
+	} else if flags.NArg() == 0 && *format == "text" {
+		feeders, err = readFeeders(strings.NewReader(sampleFeeders))
+	}
+	if err != nil {
+		return complain(err)
+	}
+	s, err := openSheet(motors, in)
 	if err != nil {
 		return complain(err)
 	}
 	if unused := s.unused(); len(unused) > 0 {
 		fmt.Fprintf(stderr, "schedule: columns that this release does not use: %s\n", strings.Join(unused, ", "))
 	}
+	if feeders != nil {
+		if unused := feeders.sheet.unused(); len(unused) > 0 {
+			fmt.Fprintf(stderr, "schedule: columns of the feeders file that this release does not use: %s\n", strings.Join(unused, ", "))
+		}
+	}
 	buffered := bufio.NewWriterSize(stdout, 64<<10)
-	failed, err := answerAll(s, newOutput(buffered), newProgress(stderr))
+	failed, err := answerAll(s, feeders, newOutput(buffered, feeders != nil), newProgress(stderr))
 	if err := errors.Join(err, buffered.Flush()); err != nil {
 		return complain(err)
 	}
@@ -100,34 +149,6 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 		return someBad
 	}
 	return allSized
-}
-
-// answerAll answers row by row and keeps none. It returns how many failed.
-func answerAll(s *schedule, out output, p progress) (failed int, err error) {
-	if err := out.begin(s.passedNames()); err != nil {
-		return 0, err
-	}
-	sized := 0
-	var broken error
-	for broken == nil {
-		var a *answer
-		if a, broken = s.next(); a == nil {
-			break
-		}
-		if len(a.faults) > 0 {
-			failed++
-		} else {
-			sized++
-		}
-		if err := out.row(a); err != nil {
-			return failed, err
-		}
-		p.report(sized + failed)
-	}
-	if broken == io.EOF {
-		broken = nil
-	}
-	return failed, errors.Join(broken, out.end(sized, failed))
 }
 
 func formatNames() []string {
@@ -138,7 +159,7 @@ func formatNames() []string {
 	return names
 }
 
-func pick(name string) (func(io.Writer) output, error) {
+func pick(name string) (func(io.Writer, bool) output, error) {
 	for _, f := range formats {
 		if f.name == name {
 			return f.make, nil
@@ -147,20 +168,38 @@ func pick(name string) (func(io.Writer) output, error) {
 	return nil, fmt.Errorf("unknown -format %q: want one of %s", clip(name), strings.Join(formatNames(), ", "))
 }
 
-// open opens the file that the arguments name, or the sample.
+// open opens the schedule that the arguments name, or the sample.
 func open(args []string, stdin io.Reader) (r io.Reader, closeInput func(), err error) {
-	none := func() {}
-	switch {
-	case len(args) == 0:
-		return strings.NewReader(sample), none, nil
-	case len(args) > 1:
-		return nil, none, fmt.Errorf("want one file name, after the flags; got %d arguments", len(args))
-	case args[0] == "-":
-		return stdin, none, nil
+	switch len(args) {
+	case 0:
+		return strings.NewReader(sample), func() {}, nil
+	case 1:
+		return openFile(args[0], stdin)
 	}
-	f, err := os.Open(args[0])
+	return nil, nil, fmt.Errorf("want one file name, after the flags; got %d arguments", len(args))
+}
+
+// openFeeders reads the feeders file of a name.
+func openFeeders(name string, stdin io.Reader) (*feederList, error) {
+	r, closeInput, err := openFile(name, stdin)
 	if err != nil {
-		return nil, none, err
+		return nil, err
+	}
+	defer closeInput()
+	feeders, err := readFeeders(r)
+	if err != nil {
+		return nil, fmt.Errorf("feeders file %s: %w", name, err)
+	}
+	return feeders, nil
+}
+
+func openFile(name string, stdin io.Reader) (r io.Reader, closeInput func(), err error) {
+	if name == "-" {
+		return stdin, func() {}, nil
+	}
+	f, err := os.Open(name)
+	if err != nil {
+		return nil, nil, err
 	}
 	return f, func() { f.Close() }, nil
 }

@@ -66,19 +66,25 @@ func byName(t *testing.T, text string) []map[string]string {
 }
 
 func TestSample(t *testing.T) {
-	for _, format := range formatNames() {
-		t.Run(format, func(t *testing.T) {
+	for _, tt := range []struct {
+		golden string
+		args   []string
+	}{
+		{"sample.text", nil},
+		{"sample.text", []string{"-format", "text"}},
+		{"sample.text", []string{"-feeders", "sample_feeders.csv"}},
+		{"sample.csv", []string{"-format", "csv"}},
+		{"sample.json", []string{"-format", "json"}},
+		{"feeders.csv", []string{"-format", "csv", "-feeders", "sample_feeders.csv"}},
+		{"feeders.json", []string{"-format", "json", "-feeders", "sample_feeders.csv"}},
+	} {
+		t.Run(strings.Join(tt.args, " "), func(t *testing.T) {
 			var stdout, stderr bytes.Buffer
-			assert.Equal(t, 1, run([]string{"-format", format}, strings.NewReader(""), &stdout, &stderr), "the sample has one bad row")
+			assert.Equal(t, 1, run(tt.args, strings.NewReader(""), &stdout, &stderr), "the sample has one bad motor and one bad feeder")
 			assert.Empty(t, stderr.String())
-			checkGolden(t, "sample."+format, stdout.String())
+			checkGolden(t, tt.golden, stdout.String())
 		})
 	}
-	var stdout, stderr bytes.Buffer
-	run(nil, strings.NewReader(""), &stdout, &stderr)
-	want, err := os.ReadFile(filepath.Join("testdata", "golden", "sample.text"))
-	require.NoError(t, err)
-	assert.Equal(t, string(want), stdout.String(), "text is the format by default")
 }
 
 // The sample shows every word that a schedule may use.
@@ -141,10 +147,10 @@ func TestColumns(t *testing.T) {
 	status, out, complaint := ran(t, "zone,"+known+",Note\n", "-format", "csv")
 	assert.Equal(t, 0, status)
 	assert.Equal(t, promised+",zone,Note\n", out)
-	assert.Equal(t, "schedule: columns that this release does not use: raceway, length_m, length_ft, max_drop_percent, fault_ka, feeder\n", complaint)
-	for _, c := range columns {
+	assert.Equal(t, "schedule: columns that this release does not use: raceway, length_m, length_ft, max_drop_percent, fault_ka\n", complaint)
+	for _, c := range motors.columns {
 		for _, need := range strings.Fields(c.needs) {
-			assert.GreaterOrEqual(t, columnNamed(need), 0, c.name)
+			assert.GreaterOrEqual(t, motors.named(need), 0, c.name)
 		}
 	}
 }
@@ -228,14 +234,18 @@ func TestExitStatus(t *testing.T) {
 		{"a good file", []string{"-format", "csv", good}, 0, ""},
 		{"flag with =", []string{"-format=json", good}, 0, ""},
 		{"the sample", nil, 1, ""},
-		{"help", []string{"-h"}, 0, "usage: schedule [-format text|csv|json] [schedule.csv]"},
+		{"help", []string{"-h"}, 0, "usage: schedule [-format text|csv|json] [-feeders feeders.csv] [schedule.csv]"},
 		{"a format of later", []string{"-format", "html", good}, 2, `unknown -format "html": want one of text, csv, json`},
 		{"no format", []string{"-format", "", good}, 2, "want one of text, csv, json"},
-		{"a flag of later", []string{"-feeders", "f.csv", good}, 2, "flag provided but not defined: -feeders"},
+		{"a flag of later", []string{"-check", good}, 2, "flag provided but not defined: -check"},
 		{"two files", []string{good, good}, 2, "want one file name, after the flags; got 2 arguments"},
 		{"flag after the file", []string{good, "-format", "csv"}, 2, "after the flags"},
 		{"no such file", []string{filepath.Join(t.TempDir(), "none.csv")}, 2, "none.csv"},
 		{"a folder", []string{t.TempDir()}, 2, "reading the schedule"},
+		{"no feeders file", []string{"-feeders", filepath.Join(t.TempDir(), "none.csv"), good}, 2, "none.csv"},
+		{"a folder of feeders", []string{"-feeders", t.TempDir(), good}, 2, "reading the feeders file"},
+		{"no name of a feeders file", []string{"-feeders", "", good}, 2, "want a file name"},
+		{"standard input twice", []string{"-feeders", "-", "-"}, 2, "standard input cannot be both"},
 	} {
 		t.Run(tt.name, func(t *testing.T) {
 			var stdout, stderr bytes.Buffer
@@ -257,7 +267,7 @@ func (brokenWriter) Write([]byte) (int, error) { return 0, errors.New("disk full
 func TestBrokenOutput(t *testing.T) {
 	for _, format := range formatNames() {
 		var stderr bytes.Buffer
-		assert.Equal(t, 2, run([]string{"-format", format}, strings.NewReader(""), brokenWriter{}, &stderr))
+		assert.Equal(t, 2, run([]string{"-format", format, "-feeders", "sample_feeders.csv"}, strings.NewReader(""), brokenWriter{}, &stderr))
 		assert.Contains(t, stderr.String(), "disk full")
 	}
 }

@@ -8,16 +8,17 @@ import (
 
 	mc "example.org/motorcircuit"
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/tables"
 )
 
 // A cell is a computed column of the CSV output.
-type cell struct {
+type cell[R any] struct {
 	name string
-	text func(r *mc.Result) string // nil for a column that is not worked out yet
+	text func(r *R) string // nil for a column that is not worked out yet
 }
 
-// computed are the columns after tag, code and error, in order.
-var computed = []cell{
+// motorCells are the columns of a motor after tag, code and error, in order.
+var motorCells = []cell[mc.Result]{
 	{"table_current_a", func(r *mc.Result) string { return r.Demand.Table.Text() }},
 	{"design_current_a", func(r *mc.Result) string { return r.Demand.Design.Text() }},
 	{"overload_current_a", func(r *mc.Result) string { return r.Demand.Overload.Text() }},
@@ -46,7 +47,21 @@ var computed = []cell{
 	{"drop_running_percent", nil},
 	{"drop_starting_percent", nil},
 	{"fault_at_motor_ka", nil},
-	{"cautions", cautions},
+	{"cautions", func(r *mc.Result) string { return cautions(r.Cautions) }},
+}
+
+// feederCells are those of a feeder.
+var feederCells = []cell[mc.FeederResult]{
+	{"feeder_min_ampacity_a", func(r *mc.FeederResult) string { return r.Ampacity.Text() }},
+	{"feeder_conductor", func(r *mc.FeederResult) string { return r.Conductors.Size.Name() }},
+	{"feeder_sets", func(r *mc.FeederResult) string { return sets(&r.Conductors) }},
+	{"feeder_ampacity_a", func(r *mc.FeederResult) string { return r.Conductors.Ampacity.Text() }},
+	{"feeder_device_limit_a", func(r *mc.FeederResult) string { return r.Limit.Text() }},
+	{"feeder_device_rating_a", func(r *mc.FeederResult) string { return r.Rating.Text() }},
+	{"bonding_conductor", func(r *mc.FeederResult) string { return r.Bonding.Size.Name() }},
+	{"raceway", nil},
+	{"drop_running_percent", nil},
+	{"cautions", func(r *mc.FeederResult) string { return cautions(r.Cautions) }},
 }
 
 func sets(s *conductor.Selection) string {
@@ -56,47 +71,60 @@ func sets(s *conductor.Selection) string {
 	return strconv.Itoa(s.Sets)
 }
 
-func cautions(r *mc.Result) string {
-	texts := make([]string, len(r.Cautions))
-	for i, c := range r.Cautions {
+func cautions(list []tables.Caution) string {
+	texts := make([]string, len(list))
+	for i, c := range list {
 		texts[i] = c.String()
 	}
 	return strings.Join(texts, " | ")
 }
 
-// A csvOutput writes one line for each row.
+// A csvOutput writes one line for each motor and, after a blank line and a
+// header of their own, one for each feeder.
 type csvOutput struct {
+	to    io.Writer
 	w     *csv.Writer
 	cells []string
 }
 
-func newCSVOutput(w io.Writer) output { return &csvOutput{w: csv.NewWriter(w)} }
+func newCSVOutput(w io.Writer) output { return &csvOutput{to: w, w: csv.NewWriter(w)} }
 
-func (o *csvOutput) begin(passed []string) error {
-	o.cells = append(o.cells[:0], "tag", "code", "error")
-	for _, c := range computed {
-		o.cells = append(o.cells, c.name)
-	}
-	return o.write(passed)
-}
+func (o *csvOutput) begin(passed []string) error { return writeHeader(o, motorCells, passed) }
 
-func (o *csvOutput) row(a *answer) error {
-	o.cells = append(o.cells[:0], a.tag, a.code, strings.Join(a.faults, "; "))
-	for _, c := range computed {
-		text := ""
-		if c.text != nil && len(a.faults) == 0 {
-			text = c.text(&a.result)
-		}
-		o.cells = append(o.cells, text)
-	}
-	return o.write(a.passed)
-}
+func (o *csvOutput) row(a *answer[mc.Result]) error { return writeCells(o, motorCells, a) }
 
 func (o *csvOutput) end(_, _ int) error {
 	o.w.Flush()
 	return o.w.Error()
 }
 
-func (o *csvOutput) write(passed []string) error {
+func (o *csvOutput) beginFeeders(passed []string) error {
+	if _, err := io.WriteString(o.to, "\n"); err != nil {
+		return err
+	}
+	return writeHeader(o, feederCells, passed)
+}
+
+func (o *csvOutput) feeder(a *answer[mc.FeederResult]) error { return writeCells(o, feederCells, a) }
+
+func (o *csvOutput) endFeeders(sized, failed int) error { return o.end(sized, failed) }
+
+func writeHeader[R any](o *csvOutput, cells []cell[R], passed []string) error {
+	o.cells = append(o.cells[:0], "tag", "code", "error")
+	for _, c := range cells {
+		o.cells = append(o.cells, c.name)
+	}
 	return o.w.Write(append(o.cells, passed...))
+}
+
+func writeCells[R any](o *csvOutput, cells []cell[R], a *answer[R]) error {
+	o.cells = append(o.cells[:0], a.tag, a.code, strings.Join(a.faults, "; "))
+	for _, c := range cells {
+		text := ""
+		if c.text != nil && len(a.faults) == 0 {
+			text = c.text(&a.result)
+		}
+		o.cells = append(o.cells, text)
+	}
+	return o.w.Write(append(o.cells, a.passed...))
 }
