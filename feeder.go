@@ -64,17 +64,18 @@ func (e *CircuitError) Unwrap() error { return e.Err }
 
 // A FeederResult is a feeder sized by [SizeFeeder].
 type FeederResult struct {
-	Feeder      Feeder                `json:"feeder"`               // the input
-	Circuits    []Result              `json:"circuits"`             // the branch circuits, in the order given
-	Terms       []Term                `json:"terms"`                // the parts of the least ampacity, largest first
-	Governs     string                `json:"governs"`              // tag of the motor that the 125 percent goes to; "" if it goes to none
-	Ampacity    tables.Figure         `json:"ampacity"`             // least ampacity of the feeder
-	Conductors  conductor.Selection   `json:"conductors"`           // feeder conductors
-	Largest     string                `json:"largest_device"`       // tag of the motor whose device governs the feeder's
-	Device      tables.Device         `json:"device"`               // kind of the feeder's device
-	Limit       tables.Figure         `json:"limit"`                // greatest feeder device
-	Rating      tables.Figure         `json:"rating"`               // standard rating at or below the limit
-	StartLimit  tables.Figure         `json:"start_limit,omitzero"` // the same, for motors that must start together (CEC)
+	Feeder      Feeder                `json:"feeder"`                // the input
+	Circuits    []Result              `json:"circuits"`              // the branch circuits, in the order given
+	Terms       []Term                `json:"terms"`                 // the parts of the least ampacity, in order of current
+	Governs     string                `json:"governs"`               // tag of the motor that the 125 percent goes to; "" if it goes to none
+	NotCounted  []string              `json:"not_counted,omitempty"` // tags of the motors without a part in the sum: of an interlock, a line or a drive that others stand for
+	Ampacity    tables.Figure         `json:"ampacity"`              // least ampacity of the feeder
+	Conductors  conductor.Selection   `json:"conductors"`            // feeder conductors
+	Largest     string                `json:"largest_device"`        // tag of the motor whose device governs the feeder's
+	Device      tables.Device         `json:"device"`                // kind of the feeder's device
+	Limit       tables.Figure         `json:"limit"`                 // greatest feeder device
+	Rating      tables.Figure         `json:"rating"`                // standard rating at or below the limit
+	StartLimit  tables.Figure         `json:"start_limit,omitzero"`  // the same, for motors that must start together (CEC)
 	StartRating tables.Figure         `json:"start_rating,omitzero"`
 	Disconnect  protection.Disconnect `json:"disconnecting_means"` // one disconnecting means for the whole group
 	Bonding     conductor.Bonding     `json:"bonding"`             // bonding conductor of the feeder
@@ -169,6 +170,10 @@ func (r *FeederResult) sizeCircuits() ([]member, error) {
 		c := fc.Circuit
 		if c.Edition != r.Feeder.Edition {
 			fail(&tables.InputError{Field: "edition", Value: c.Edition.String(), Want: r.Feeder.Edition.String() + ", as the feeder"})
+			continue
+		}
+		if c.Motor.Use == motor.FirePump {
+			fail(&tables.InputError{Field: "motor.use", Value: c.Motor.Use.String(), Want: "ordinary or valve_actuator on a feeder or in a group: the supply of a fire pump follows rules of its own, size its circuit alone"})
 			continue
 		}
 		if err := checkLines(fc, c.Motor.PhaseCount()); err != nil {

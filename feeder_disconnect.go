@@ -9,6 +9,7 @@ import (
 var (
 	necGroupSwitch = tables.Rule{Ref: "430.110(C)(2)"}
 	necGroupHP     = tables.Rule{Ref: "430.110(C)(1)"}
+	cecGroupRotor  = tables.Rule{Ref: "Rule 28-714", Mark: tables.MarkB}
 	cecGroupSwitch = tables.Rule{Ref: "Rule 28-602(2)"}
 )
 
@@ -28,11 +29,20 @@ func (g *group) disconnect() protection.Disconnect {
 			x = g.disconnectCEC(running)
 		}
 		if best.Amperes.IsZero() || x.Amperes.Cmp(best.Amperes) > 0 {
-			if best.Horsepower.Cmp(x.Horsepower) > 0 {
-				x.Horsepower = best.Horsepower
-			}
-			best = x
+			best.Amperes, best.Cite = x.Amperes, x.Cite
 		}
+		if x.LockedRotor.Cmp(best.LockedRotor) > 0 {
+			best.LockedRotor = x.LockedRotor
+		}
+		if x.Horsepower.Cmp(best.Horsepower) > 0 {
+			best.Horsepower = x.Horsepower
+		}
+		if len(x.Cautions) > 0 {
+			best.Cautions = x.Cautions
+		}
+	}
+	if len(best.Cautions) > 0 { // one set is beyond the tables, so no horsepower is enough for all
+		best.Horsepower, best.Cite = tables.Power{}, tables.Citation{}
 	}
 	return best
 }
@@ -55,7 +65,7 @@ func (g *group) disconnectNEC(running []*member) protection.Disconnect {
 		LockedRotor: tables.SumOf("equivalent locked-rotor current", e, &necGroupHP, rotor...),
 		Cite:        necGroupHP.In(e),
 	}
-	system := running[0].result.Circuit.Motor
+	system := systemOf(g.members).result.Circuit.Motor
 	table := tables.InductionTable
 	switch system.PhaseCount() {
 	case 0:
@@ -74,7 +84,6 @@ func (g *group) disconnectNEC(running []*member) protection.Disconnect {
 	}
 	if err != nil {
 		x.Cautions = append(x.Cautions, tables.Caution{Text: "the group draws more than any horsepower of the tables: choose the disconnecting means by its ampere and locked-rotor ratings", Cite: necGroupHP.In(e)})
-		x.Cite = tables.Citation{}
 		return x
 	}
 	x.Horsepower = p
@@ -99,5 +108,27 @@ func (g *group) disconnectCEC(running []*member) protection.Disconnect {
 		}
 	}
 	x.Amperes = tables.SumOf("least ampere rating of the disconnecting means", e, &cecGroupSwitch, terms...)
+	x.LockedRotor = g.compressorRotor(running)
 	return x
+}
+
+// compressorRotor is the largest locked-rotor current of the compressors in a
+// set, plus the currents of the rest (CEC Rule 28-714); absent without one.
+func (g *group) compressorRotor(running []*member) tables.Figure {
+	largest := -1
+	for i, m := range running {
+		if m.result.Circuit.Motor.Kind == motor.Hermetic && (largest < 0 || m.rotor.Cmp(running[largest].rotor) > 0) {
+			largest = i
+		}
+	}
+	if largest < 0 {
+		return tables.Figure{}
+	}
+	terms := []tables.Figure{running[largest].rotor.Renamed("locked rotor of " + running[largest].tag)}
+	for i, m := range running {
+		if i != largest {
+			terms = append(terms, m.current.Renamed(m.tag))
+		}
+	}
+	return tables.SumOf("locked-rotor current for the switch", g.edition, &cecGroupRotor, terms...)
 }

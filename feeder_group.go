@@ -23,7 +23,13 @@ type member struct {
 	rotor   tables.Figure // locked-rotor current, for the disconnecting means
 }
 
-func (m *member) continuous() bool { return m.result.Circuit.Motor.Duty.Kind == motor.Continuous }
+// continuous reports a motor that may count 125 percent: of continuous duty, or
+// behind a drive, which runs on whatever the motor does. Equipment marked with
+// its own ampacity has the 125 percent in that.
+func (m *member) continuous() bool {
+	x := &m.result.Circuit.Motor
+	return (x.Duty.Kind == motor.Continuous || x.Starting == motor.Drive) && x.Nameplate.MinimumAmpacity.IsZero()
+}
 
 // member works out what a sized circuit counts for.
 func (r *FeederResult) member(i int, fc FeederCircuit, one Result) (member, error) {
@@ -36,8 +42,11 @@ func (r *FeederResult) member(i int, fc FeederCircuit, one Result) (member, erro
 			m.current = tables.LargestOf("current", e, &feederDrive, d.Input, d.Design)
 		}
 	}
+	if input := fc.Circuit.Motor.Nameplate.RectifierInput; !input.IsZero() { // 430.22(A): the line feeds the rectifier
+		m.current = input.Figure("rated input current of the rectifier")
+	}
 	m.base = m.current
-	if !m.continuous() && !onDrive {
+	if !m.continuous() {
 		m.base = d.Branch
 	}
 	if m.rotor.IsZero() {
@@ -64,6 +73,8 @@ func (m *member) branchDevice(r *FeederResult, e tables.Edition) error {
 		if x, err = protection.SizeShortCircuit(e, r.Device, m.result.Circuit.Motor, m.result.Demand); err != nil {
 			return err
 		}
+		m.device = x.Limit // the table's percent, not rounded up: 430.62(A) Exception No. 1
+		return nil
 	}
 	switch nec := e.Code() == tables.NEC; {
 	case nec && m.fc.HardStart && !x.StartRating.IsZero():
@@ -124,6 +135,7 @@ func (g *group) plan() error {
 	}
 	for _, all := range combinations {
 		slices.SortFunc(all, func(a, b *member) int { return cmp.Compare(a.rank, b.rank) })
+		all = onceADrive(all)
 		for _, line := range g.lineNames() {
 			g.running = append(g.running, onLine(all, line))
 		}
@@ -131,8 +143,24 @@ func (g *group) plan() error {
 	return nil
 }
 
+// onceADrive counts a drive that feeds several of the motors once.
+func onceADrive(all []*member) []*member {
+	seen := map[string]bool{}
+	var kept []*member
+	for _, m := range all {
+		if name := m.fc.DriveGroup; name != "" {
+			if seen[name] {
+				continue
+			}
+			seen[name] = true
+		}
+		kept = append(kept, m)
+	}
+	return kept
+}
+
 // interlocks parts the members that always may run from those of interlocks, and
-// counts a drive that feeds several motors once.
+// checks that the motors of one drive name one input current.
 func (g *group) interlocks() (free []*member, locked []interlock, err error) {
 	drives := map[string]*member{}
 	for i := range g.members {
@@ -144,10 +172,9 @@ func (g *group) interlocks() (free []*member, locked []interlock, err error) {
 				return nil, nil, &CircuitError{m.index, m.fc.Circuit.Tag, &tables.InputError{Field: "drive_group", Value: name, Want: `only for a motor of starting "drive"`}}
 			case counted && first.current.Cmp(m.current) != 0:
 				return nil, nil, &CircuitError{m.index, m.fc.Circuit.Tag, &tables.InputError{Field: "motor.nameplate.drive_input_amperes", Value: m.current.String(), Want: first.current.String() + ", as for the other motors of drive " + name}}
-			case counted:
-				continue
+			case !counted:
+				drives[name] = m
 			}
-			drives[name] = m
 		}
 		if m.fc.Interlock == "" {
 			free = append(free, m)
@@ -209,16 +236,13 @@ func checkVoltages(members []member) (faults []error) {
 	if len(members) == 0 {
 		return nil
 	}
-	most := members[0]
-	for _, m := range members[1:] { // three phases name the system, else the highest voltage
-		a, b := m.result.Circuit.Motor, most.result.Circuit.Motor
-		if cmp.Or(cmp.Compare(a.PhaseCount(), b.PhaseCount()), cmp.Compare(systemVolts(a.Voltage), systemVolts(b.Voltage)), cmp.Compare(a.Voltage, b.Voltage), strings.Compare(most.tag, m.tag)) > 0 {
-			most = m
-		}
-	}
+	most := systemOf(members)
 	system := most.result.Circuit.Motor
 	for _, m := range members {
 		x := m.result.Circuit.Motor
+		if x.Rectifier != motor.NoRectifier {
+			continue // fed with alternating current of a voltage that is not given
+		}
 		same := systemVolts(x.Voltage) == systemVolts(system.Voltage) && (x.PhaseCount() == 0) == (system.PhaseCount() == 0) && (x.PhaseCount() == 2) == (system.PhaseCount() == 2)
 		if same || x.PhaseCount() == 1 && systemVolts(x.Voltage) == 120 && (systemVolts(system.Voltage) == 208 || systemVolts(system.Voltage) == 240) && system.PhaseCount() != 0 {
 			continue
@@ -227,6 +251,19 @@ func checkVoltages(members []member) (faults []error) {
 			Want: "the system of the feeder, which " + most.tag + " has at " + itoa(system.Voltage) + " V"}})
 	}
 	return faults
+}
+
+// systemOf returns the member whose motor names the feeder's system: of most
+// phases, then of most volts, and by tag where they are alike.
+func systemOf(members []member) member {
+	most := members[0]
+	for _, m := range members[1:] {
+		a, b := m.result.Circuit.Motor, most.result.Circuit.Motor
+		if cmp.Or(cmp.Compare(a.PhaseCount(), b.PhaseCount()), cmp.Compare(systemVolts(a.Voltage), systemVolts(b.Voltage)), cmp.Compare(a.Voltage, b.Voltage), strings.Compare(most.tag, m.tag)) > 0 {
+			most = m
+		}
+	}
+	return most
 }
 
 // systemVolts returns the nominal system that a motor voltage belongs to.

@@ -1,6 +1,7 @@
 package motorcircuit
 
 import (
+	"slices"
 	"strconv"
 
 	"example.org/motorcircuit/motor"
@@ -41,12 +42,23 @@ func (r *FeederResult) ampacity(g *group) {
 		}
 		total := r.total(g, figures)
 		if r.Ampacity.IsZero() || total.Cmp(r.Ampacity) > 0 {
-			r.Ampacity, r.Terms, r.Governs = total, terms, governs
+			r.Ampacity, r.Terms, r.Governs, r.NotCounted = total, terms, governs, g.without(running)
 		}
 	}
 	for _, t := range g.loadTerms() {
 		r.Terms = append(r.Terms, Term{Figure: t})
 	}
+}
+
+// without returns the tags of the members that are not in a set, in order.
+func (g *group) without(running []*member) (tags []string) {
+	for i := range g.members {
+		if !slices.Contains(running, &g.members[i]) {
+			tags = append(tags, g.members[i].tag)
+		}
+	}
+	slices.Sort(tags)
+	return tags
 }
 
 // total adds the motors, reduced by a demand factor, and the other loads.
@@ -148,10 +160,11 @@ func (r *FeederResult) device(g *group) error {
 	}
 	if e.Code() == tables.CEC && !r.Feeder.Demand.IsZero() && r.Limit.Cmp(r.Conductors.Ampacity) > 0 {
 		// With a demand factor the conductors' own protection holds, with the step up of Table 13.
-		r.Limit = e.RatingAtOrAbove(r.Device, r.Conductors.Ampacity, feederLimitName, &cecFeederDemand)
-		if r.Limit.IsZero() || r.Limit.Cmp(eightHundredAmps) > 0 {
-			r.Limit = r.Conductors.Ampacity.As(feederLimitName, e, &cecFeederDemand)
+		up := e.RatingAtOrAbove(r.Device, r.Conductors.Ampacity, "by the conductors' own protection", &cecFeederDemand)
+		if up.IsZero() || up.Cmp(eightHundredAmps) > 0 {
+			up = r.Conductors.Ampacity.As("by the conductors' own protection", e, &cecFeederDemand)
 		}
+		r.Limit = tables.SmallestOf(feederLimitName, e, &cecFeederDemand, r.Limit.Renamed("by the motors"), up)
 	}
 	if r.Rating = e.RatingAtOrBelow(r.Device, r.Limit, "standard rating of the feeder device", rule); r.Rating.IsZero() {
 		if r.Rating = smallestRating(e, r.Device, r.Limit); r.Rating.IsZero() {
@@ -204,16 +217,16 @@ func (g *group) deviceLimit(running []*member, rule *tables.Rule, loads ...table
 // rating for one motor of their summed current, plus the rest, and not above
 // three times the ampacity of the feeder (CEC Rule 28-204(2)).
 func (r *FeederResult) startTogether(g *group) {
-	if g.edition.Code() != tables.CEC {
+	if g.edition.Code() != tables.CEC || !r.Feeder.Demand.IsZero() {
 		return
 	}
 	for _, running := range g.running {
 		for _, name := range startSets(running) {
 			var together, rest []tables.Figure
-			var reduced *member
+			var set []*member
 			for _, m := range running {
 				if m.fc.StartsWith == name {
-					together, reduced = append(together, m.current.Renamed(m.tag)), m
+					together, set = append(together, m.current.Renamed(m.tag)), append(set, m)
 				} else {
 					rest = append(rest, m.current.Renamed(m.tag))
 				}
@@ -222,11 +235,11 @@ func (r *FeederResult) startTogether(g *group) {
 				continue
 			}
 			sum := tables.SumOf("current of the motors that start together", g.edition, &cecFeederStart, together...)
-			x, err := protection.SizeShortCircuit(g.edition, r.Device, motor.Motor{Kind: motor.SquirrelCage, Starting: reduced.result.Circuit.Motor.Starting}, motor.Demand{Design: sum})
-			if err != nil {
+			one := r.oneMotor(set, sum)
+			if one.IsZero() {
 				continue
 			}
-			terms := append([]tables.Figure{x.Limit.Renamed("one motor of " + sum.String())}, rest...)
+			terms := append([]tables.Figure{one.Renamed("one motor of " + sum.String())}, rest...)
 			limit := tables.SumOf(feederLimitName+" for motors that start together", g.edition, &cecFeederStart, append(terms, g.loadTerms()...)...)
 			cap := tables.ProductOf("300 percent of the feeder ampacity", g.edition, &cecFeederStart, r.Conductors.Ampacity, tables.StatedFigure("of the ampacity", g.edition, &cecFeederStart, tables.Percent, 300, 0))
 			if limit.Cmp(cap) > 0 {
@@ -238,6 +251,22 @@ func (r *FeederResult) startTogether(g *group) {
 			}
 		}
 	}
+}
+
+// oneMotor is the device of one motor of the summed current: of the kind and way
+// of starting in the set that allows the least.
+func (r *FeederResult) oneMotor(set []*member, sum tables.Figure) (least tables.Figure) {
+	for _, m := range set {
+		x := m.result.Circuit.Motor
+		if x.Kind == motor.Hermetic {
+			x.Kind = motor.SquirrelCage
+		}
+		device, err := protection.SizeShortCircuit(r.Feeder.Edition, r.Device, motor.Motor{Kind: x.Kind, Phases: x.Phases, Starting: x.Starting}, motor.Demand{Design: sum})
+		if err == nil && (least.IsZero() || device.Limit.Cmp(least) < 0) {
+			least = device.Limit
+		}
+	}
+	return least
 }
 
 // startSets returns the names of the sets that start together, in order.

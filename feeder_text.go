@@ -29,20 +29,6 @@ func motors(n int) string {
 	return fmt.Sprintf("%d motors", n)
 }
 
-// notCounted names the motors that have no part in the sum: those of an
-// interlock, a line or a drive that another stands for.
-func (r *FeederResult) notCounted() string {
-	var left []string
-	for i, c := range r.Feeder.Circuits {
-		tag := memberTag(i, c.Circuit.Tag)
-		if !slices.ContainsFunc(r.Terms, func(t Term) bool { return t.Tag == tag }) {
-			left = append(left, oneLine(tag))
-		}
-	}
-	slices.Sort(left)
-	return strings.Join(left, ", ")
-}
-
 func (r *FeederResult) deviceFigures() []tables.Figure {
 	return []tables.Figure{r.Limit, r.Rating, r.StartLimit, r.StartRating}
 }
@@ -66,10 +52,10 @@ func (r FeederResult) String() string {
 	if r.Governs != "" {
 		fmt.Fprintf(&b, "%12s  %s governs the conductors\n", "", oneLine(r.Governs))
 	} else {
-		fmt.Fprintf(&b, "%12s  no motor counts 125 percent: the part of one that is not of continuous duty is as great\n", "")
+		fmt.Fprintf(&b, "%12s  no motor counts 125 percent: none is of continuous duty, or one that is not counts as much by its duty\n", "")
 	}
-	if left := r.notCounted(); left != "" {
-		fmt.Fprintf(&b, "%12s  not counted: %s\n", "", left)
+	if len(r.NotCounted) > 0 {
+		fmt.Fprintf(&b, "%12s  not counted: %s\n", "", oneLine(strings.Join(r.NotCounted, ", ")))
 	}
 	write := func(heading, chosen string, figures []tables.Figure) {
 		fmt.Fprintf(&b, "\n%s: %s\n", heading, chosen)

@@ -16,12 +16,12 @@ import (
 // FuzzSize sizes arbitrary circuits: never a panic; an error comes with the zero
 // result and names a field; a result is whole, prints and encodes.
 func FuzzSize(f *testing.F) {
-	f.Add(uint8(3), uint8(1), 3, "7-1/2 hp", 460, "10.4", "1.15", "40", "H", "B", uint8(0), 0, uint8(0), uint8(3), "THWN-2", "40", 6, 75, uint8(0), 0)
-	f.Add(uint8(5), uint8(4), 0, "30 hp", 600, "", "", "", "", "", uint8(2), 15, uint8(1), uint8(2), "RW90", "-5", 0, 0, uint8(2), 3)
-	f.Add(uint8(1), uint8(7), 1, "", 230, "38", "3", "41", "", "A", uint8(4), 7, uint8(6), uint8(4), "", "200", 1000, 90, uint8(1), 12)
-	f.Add(uint8(9), uint8(0), -1, "1e9999 hp", -5, "٥", "65.", "-1", "I", "Ω", uint8(9), -9, uint8(9), uint8(9), "\x00", "1e9", -3, 61, uint8(9), 99)
+	f.Add(uint8(3), uint8(1), 3, "7-1/2 hp", 460, "10.4", "1.15", "40", "H", "B", uint8(0), 0, uint8(0), uint8(3), "THWN-2", "40", 6, 75, uint8(0), 0, uint8(0))
+	f.Add(uint8(5), uint8(4), 0, "30 hp", 600, "", "", "", "", "", uint8(2), 15, uint8(1), uint8(2), "RW90", "-5", 0, 0, uint8(2), 3, uint8(1))
+	f.Add(uint8(1), uint8(7), 1, "", 230, "38", "3", "41", "", "A", uint8(4), 7, uint8(6), uint8(4), "", "200", 1000, 90, uint8(1), 12, uint8(44))
+	f.Add(uint8(9), uint8(0), -1, "1e9999 hp", -5, "٥", "65.", "-1", "I", "Ω", uint8(9), -9, uint8(9), uint8(9), "\x00", "1e9", -3, 61, uint8(9), 99, uint8(255))
 	f.Fuzz(func(t *testing.T, edition, kind uint8, phases int, power string, volts int, amps, service, rise, letter, design string,
-		duty uint8, minutes int, starting, device uint8, insulation, ambient string, conductors, termination int, run uint8, sets int) {
+		duty uint8, minutes int, starting, device uint8, insulation, ambient string, conductors, termination int, run uint8, sets int, special uint8) {
 		p, _ := tables.ParsePower(power)
 		a, _ := tables.ParseCurrent(amps)
 		sf, _ := tables.ParseRatio(service)
@@ -44,6 +44,18 @@ func FuzzSize(f *testing.F) {
 		}
 		if c.Motor.Starting != motor.Drive {
 			c.Motor.Nameplate.DriveInput = tables.Current{}
+		}
+		m := &c.Motor
+		m.Bypass, m.Use, m.Rectifier, m.Resistor = special&1 != 0, motor.Use(special>>1&3), motor.Rectifier(special>>3&3), tables.ResistorDuty(special>>5)
+		if special&8 != 0 {
+			m.Nameplate.RectifierInput = a
+		}
+		if special&64 != 0 {
+			m.Nameplate.MaximumDevice, m.Nameplate.MinimumAmpacity = a, a
+		}
+		if special&6 == 4 {
+			m.Nameplate.Windings = []motor.Winding{{Amperes: a}, {Amperes: a}}
+			m.Nameplate.Amperes = tables.Current{}
 		}
 		r, err := motorcircuit.Size(c)
 		if err != nil {

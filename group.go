@@ -110,6 +110,16 @@ func (g *group) smallMotors() bool {
 	return true
 }
 
+// allAt120 reports a group whose motors are all on a circuit of 120 V.
+func (g *group) allAt120() bool {
+	for i := range g.members {
+		if systemVolts(g.members[i].result.Circuit.Motor.Voltage) != 120 {
+			return false
+		}
+	}
+	return true
+}
+
 // smallestMotor is the member of least current; members stand largest first.
 func (g *group) smallestMotor() *member { return &g.members[len(g.members)-1] }
 
@@ -123,7 +133,7 @@ func (r *GroupResult) waysNEC(g *group, d tables.Device) []GroupWay {
 		return w
 	}
 	small := int64(15)
-	if systemVolts(g.members[0].result.Circuit.Motor.Voltage) == 120 {
+	if g.allAt120() {
 		small = 20
 	}
 	listed, _ := g.deviceLimit(g.running[0], &necGroupListed)
@@ -151,6 +161,9 @@ func (r *GroupResult) waysCEC(g *group, d tables.Device) []GroupWay {
 		if allowed {
 			w.Limit = tables.SmallestOf("greatest device of the group", e, rule, sum.Renamed("by Rule 28-204(1)"), limit)
 			w.Rating = e.RatingAtOrBelow(d, w.Limit, "standard rating of the group's device", rule)
+			if w.Rating.IsZero() { // no standard rating is as low
+				w.Allowed, w.Limit = false, tables.Figure{}
+			}
 		}
 		return w
 	}
@@ -179,6 +192,9 @@ func (g *group) fifteenDoes() bool {
 	var currents []tables.Figure
 	for i := range g.members {
 		currents = append(currents, g.members[i].current)
+	}
+	if !g.other.IsZero() {
+		currents = append(currents, g.other)
 	}
 	total := tables.SumOf("currents", g.edition, &cecGroup15, currents...)
 	return total.Cmp(tables.Whole("device", tables.Ampere, 15)) <= 0

@@ -50,7 +50,9 @@ func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection) (B
 		why += ", one for each set"
 	}
 	b.Size, b.Row, b.Why = size, row, why
-	if circuit.Size.Cmp(size) < 0 {
+	// The NEC asks for full size with every set, and of no more than the circuit
+	// conductors where there is one set.
+	if capped := circuit.Sets <= 1 || e.Code() == tables.CEC; capped && circuit.Size.Cmp(size) < 0 {
 		b.Size, b.Why = circuit.Size, "as large as the circuit conductors, which it need not exceed ("+rule.In(e).String()+")"
 	}
 	return b, nil

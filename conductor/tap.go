@@ -1,6 +1,10 @@
 package conductor
 
-import "example.org/motorcircuit/tables"
+import (
+	"github.com/shopspring/decimal"
+
+	"example.org/motorcircuit/tables"
+)
 
 // A Tap is a run of conductors that leaves others without a device of its own
 // ampacity where it leaves them.
@@ -65,11 +69,13 @@ func (t Tap) rule(e tables.Edition) (*tables.Rule, tables.Figure) {
 	of := func(rule *tables.Rule, name string, f tables.Figure, by int) (*tables.Rule, tables.Figure) {
 		return rule, tables.QuotientOf(name, e, rule, f, tables.StatedFigure("parts", e, rule, tables.Plain, int64(by), 0))
 	}
-	within10 := t.Protected && t.Length.Within(10, 30)
-	within25 := t.Protected && t.Length.Within(25, 75)
+	within10 := t.Protected && t.within(e, 10, 30)
+	within25 := t.Protected && t.within(e, 25, 75)
+	_, oneTenth := of(&necTap10, "one-tenth of the device rating", t.Device, tenth)
+	_, oneThird := of(&necTap25, "one-third of the feeder", t.Source, third)
 	full := t.Source.Renamed("ampacity of the conductors tapped")
 	switch cec := e.Code() == tables.CEC; {
-	case cec && t.Group && t.Length.Within(25, 75):
+	case cec && t.Group && t.within(e, 25, 75):
 		return of(&cecGroup75, "one-third of the branch circuit", t.Source, third)
 	case cec && t.Group:
 		return &cecGroup75, full
@@ -85,12 +91,22 @@ func (t Tap) rule(e tables.Edition) (*tables.Rule, tables.Figure) {
 		return of(&necGroup25, "one-third of the branch circuit", t.Source, third)
 	case t.Group:
 		return &necGroupFull, full
-	case within10:
-		return of(&necTap10, "one-tenth of the device rating", t.Device, tenth)
+	case within10 && oneTenth.Cmp(oneThird) <= 0:
+		return &necTap10, oneTenth
 	case within25:
-		return of(&necTap25, "one-third of the feeder", t.Source, third)
+		return &necTap25, oneThird
 	case t.HighBay && t.Protected && t.Length.Within(100, 300):
 		return of(&necTapHigh, "one-third of the feeder", t.Source, third)
 	}
 	return &necTapFull, full
+}
+
+// within reports a tap of at most so many feet or tenths of a metre: the NEC
+// prints both, the CEC metres alone.
+func (t Tap) within(e tables.Edition, feet, tenths int64) bool {
+	if e.Code() == tables.CEC {
+		limit := decimal.New(tenths, -1)
+		return !t.Length.IsZero() && t.Length.Metres().LessThanOrEqual(limit)
+	}
+	return t.Length.Within(feet, tenths)
 }

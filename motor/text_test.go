@@ -55,6 +55,11 @@ var enumerations = []enumeration{
 	{"Duty", "motor.duty.kind", map[uint8]string{
 		0: "continuous", 1: "short_time", 2: "intermittent", 3: "periodic", 4: "varying",
 	}, reader(tables.Varying)},
+	{"Use", "motor.use", map[uint8]string{0: "ordinary", 1: "fire_pump", 2: "valve_actuator"}, reader(motor.FirePump)},
+	{"Rectifier", "motor.rectifier", map[uint8]string{0: "none", 1: "half_wave", 2: "full_wave"}, reader(motor.FullWave)},
+	{"ResistorDuty", "motor.resistor", map[uint8]string{
+		1: "light_starting", 2: "heavy_starting", 3: "extra_heavy_starting", 4: "light_intermittent", 5: "medium_intermittent", 6: "heavy_intermittent", 7: "continuous",
+	}, reader(tables.HeavyIntermittent)},
 }
 
 func TestEnumerationTexts(t *testing.T) {
@@ -72,7 +77,7 @@ func TestEnumerationTexts(t *testing.T) {
 			got, _, err := x.read("")
 			require.NoError(t, err)
 			assert.Zero(t, got, "no text is the zero value")
-			for _, bad := range []string{"none", "_", "squirrel", "٥", "wye_delta_", strings.Repeat("x", 10000), "\xff"} {
+			for _, bad := range []string{"nothing", "_", "squirrel", "٥", "wye_delta_", strings.Repeat("x", 10000), "\xff"} {
 				got, _, err := x.read(bad)
 				var input *tables.InputError
 				require.ErrorAs(t, err, &input)

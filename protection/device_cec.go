@@ -41,13 +41,13 @@ func (s *ShortCircuit) cec(e tables.Edition, m motor.Motor, d motor.Demand) erro
 	s.Limit = tables.ProductOf(limitName, e, &cecLimit, d.Design, percent)
 	s.StartLimit = startLimit(e, &cecStart, s.Device, d.Design)
 	s.cecRatings(e, &cecLimit, &cecStart)
+	if m.Starting == motor.PartWinding {
+		s.Half = percentOf("greatest device for each half of the winding", e, &cecPartWinding, s.Limit, 50, "two devices")
+	}
 	if m.Starting == motor.PartWinding && s.Device == TimeDelayFuse {
 		if err := s.oneFuse(e, &cecPartWinding, d, cecFloorRating(e)); err != nil {
 			return err
 		}
-	}
-	if m.Starting == motor.PartWinding {
-		s.Half = percentOf("greatest device for each half of the winding", e, &cecPartWinding, s.Limit, 50, "two devices")
 	}
 	if i := smallest(d.Windings); i >= 0 {
 		s.Smallest = tables.ProductOf(limitName+" by the smallest winding", e, &cecPartWinding, d.Windings[i].Current, percent)

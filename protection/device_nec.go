@@ -95,6 +95,9 @@ func (s *ShortCircuit) startRating(e tables.Edition, rule *tables.Rule) {
 // firePump takes the standard rating that carries the locked-rotor current of
 // the pump motor for as long as it lasts.
 func (s *ShortCircuit) firePump(e tables.Edition, d motor.Demand) error {
+	if s.Device == InstantaneousBreaker {
+		return &tables.InputError{Field: "device", Value: s.Device.String(), Want: "a fuse or an inverse-time breaker for a fire pump", Cite: necFirePump.In(e)}
+	}
 	s.Limit = d.LockedRotor.High.As("least short-circuit device", e, &necFirePump)
 	if s.Limit.IsZero() {
 		return &tables.InputError{Field: "motor.nameplate.locked_rotor_amperes", Want: "the locked-rotor current that the device of a fire pump must carry", Cite: necFirePump.In(e)}

@@ -35,6 +35,8 @@ func disconnectNEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 	}
 	rule, base := &necDisconnect, d.Design
 	switch {
+	case m.Starting == motor.Drive && m.Bypass: // the line feeds drive or motor
+		base = tables.LargestOf("current at the disconnecting means", e, &necDisconnect, d.Input, d.Design)
 	case m.Starting == motor.Drive: // in the incoming line of the drive, rated by its input
 		rule, base = &necDisconnectDrive, d.Input
 		x.Horsepower = tables.Power{}
@@ -45,7 +47,7 @@ func disconnectNEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 		rule = &necDisconnectHerm
 	}
 	x.Amperes = percentOf(disconnectName, e, rule, base, 115, "")
-	if m.Starting != motor.Drive {
+	if m.Starting != motor.Drive || m.Bypass {
 		x.LockedRotor = rotorToBreak(e, m, d)
 	}
 	if !x.Horsepower.IsZero() {

@@ -16,6 +16,7 @@ var oddities = []string{
 	"", " ", "0", "-1", "+1", "1e9999", "٥", "65.", ".5", "65", "7.6 A", "7-1/2 hp", "7 1/2 HP", "1/3 hp", "0 hp", "7-3/2 hp", "30 kw",
 	"999999999.999999", "0.0000001", "4/0", "0000", "#14", "No. 12", "250 MCM", "250 AWG", "4 kcmil", "16 mm2", "17", "-5 °C", "-0",
 	"NEC-2023", "cec-2021", "NEC-2026", "\x00", "\xff hp", "250 \u212acmil",
+	"42.7 m", "140ft", "25 ft m", "0 m", "1e3 m", "9 М",
 }
 
 func fuzzParse[T interface {
@@ -50,6 +51,7 @@ func fuzzParse[T interface {
 func FuzzParsePower(f *testing.F)       { fuzzParse(f, tables.ParsePower) }
 func FuzzParseCurrent(f *testing.F)     { fuzzParse(f, tables.ParseCurrent) }
 func FuzzParseTemperature(f *testing.F) { fuzzParse(f, tables.ParseTemperature) }
+func FuzzParseLength(f *testing.F)      { fuzzParse(f, tables.ParseLength) }
 
 // A sized is a Size that tells whether it is given, as the others do.
 type sized struct{ tables.Size }
