@@ -94,7 +94,6 @@ type group struct {
 	edition           tables.Edition
 	members           []member
 	continuous, other tables.Figure
-	alternatives      []interlock
 	running           [][]*member // every set that can run together, on the line of most load
 }
 
