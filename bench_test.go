@@ -5,6 +5,7 @@ import (
 	"testing"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/conductor"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -102,6 +103,26 @@ func BenchmarkSize(b *testing.B) {
 			}
 		}
 	})
+}
+
+// BenchmarkSizeWhole has bonding, raceway, voltage drop that enlarges the
+// conductors, and fault duty in it.
+func BenchmarkSizeWhole(b *testing.B) {
+	b.ReportAllocs()
+	c := whole()
+	for b.Loop() {
+		if _, err := motorcircuit.Size(c); err != nil {
+			b.Fatal(err)
+		}
+	}
+}
+
+// whole is a circuit with all that a run brings.
+func whole() motorcircuit.Circuit {
+	c := conveyor()
+	c.Wiring.Length, c.Wiring.Raceway = conductor.Feet("300"), tables.EMT
+	c.MaxDrop, c.Fault, c.FaultXR = motor.Factor("2"), motor.Amps("10000"), motor.Factor("4")
+	return c
 }
 
 // mixed is a batch of motors of every kind under both codes.

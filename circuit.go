@@ -14,11 +14,14 @@ import (
 // and the motor's kind, power and voltage are required; every other field has a
 // default that its comment names and the result tells of.
 type Circuit struct {
-	Tag     string           `json:"tag,omitzero"`    // the caller's name for the circuit, carried through
-	Edition tables.Edition   `json:"edition"`         // the code in force
-	Motor   motor.Motor      `json:"motor"`           // the motor and its nameplate
-	Device  tables.Device    `json:"device,omitzero"` // short-circuit device; zero takes a time-delay fuse, which has the lowest ceilings
-	Wiring  conductor.Wiring `json:"wiring,omitzero"` // how the circuit is run
+	Tag     string           `json:"tag,omitzero"`              // the caller's name for the circuit, carried through
+	Edition tables.Edition   `json:"edition"`                   // the code in force
+	Motor   motor.Motor      `json:"motor"`                     // the motor and its nameplate
+	Device  tables.Device    `json:"device,omitzero"`           // short-circuit device; zero takes a time-delay fuse, which has the lowest ceilings
+	Wiring  conductor.Wiring `json:"wiring,omitzero"`           // how the circuit is run
+	MaxDrop tables.Ratio     `json:"max_drop_percent,omitzero"` // greatest voltage drop running, in percent: larger conductors are taken to keep it; zero asks for none
+	Fault   tables.Current   `json:"fault_amps,omitzero"`       // fault current available at the beginning of the run; zero leaves fault duty out
+	FaultXR tables.Ratio     `json:"fault_xr,omitzero"`         // its ratio of reactance to resistance; zero takes reactance alone, which gives the most
 }
 
 // MaxVolts is the highest motor voltage that [Size] takes, in volts: above it
@@ -45,6 +48,7 @@ func (c Circuit) validateRest() error {
 		_, err := c.Wiring.Together(c.Motor.LineConductors())
 		faults = append(faults, err)
 	}
+	faults = append(faults, checkPhysical(c.Wiring, c.MaxDrop, c.Fault, c.FaultXR))
 	faults = append(faults, protection.ValidateDevice(c.Edition, c.device(), c.Motor.Kind))
 	return errors.Join(faults...)
 }
@@ -89,6 +93,12 @@ func Size(c Circuit) (Result, error) {
 	if len(faults) > 0 {
 		return Result{}, errors.Join(faults...)
 	}
+	if err := r.upsize(c); err != nil {
+		return Result{}, err
+	}
+	if err := r.physical(c); err != nil {
+		return Result{}, err
+	}
 	r.Disconnect = protection.SizeDisconnect(e, m, d)
 	r.Controller = protection.SizeController(e, m, d)
 	r.Cautions = r.cautions()
@@ -97,7 +107,7 @@ func Size(c Circuit) (Result, error) {
 
 // conductors selects the branch-circuit, motor-supply and secondary conductors.
 func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
-	load := conductor.Load{Ampacity: d.Branch, Count: c.Motor.LineConductors(), Motor75: c.Motor.IsDesignBCD()}
+	load := c.branchLoad(d.Branch)
 	var faults [5]error
 	r.Branch, faults[0] = c.Wiring.Select(e, load)
 	if !d.Supply.IsZero() {

@@ -21,6 +21,9 @@ type Feeder struct {
 	Other      tables.Current   `json:"other_load_amps,omitzero"`      // other load that is not continuous
 	Demand     tables.Ratio     `json:"demand_factor,omitzero"`        // share of the motor load that the loading justifies, with the authority's leave; zero is 1
 	Device     tables.Device    `json:"device,omitzero"`               // short-circuit device of the feeder; zero takes a time-delay fuse
+	Fault      tables.Current   `json:"fault_amps,omitzero"`           // fault current available at the beginning of the feeder; zero leaves fault duty out
+	FaultXR    tables.Ratio     `json:"fault_xr,omitzero"`             // its ratio of reactance to resistance; zero takes reactance alone
+	MaxDrop    tables.Ratio     `json:"max_drop_percent,omitzero"`     // greatest voltage drop running, in percent: larger conductors are taken to keep it; zero asks for none
 	Wiring     conductor.Wiring `json:"wiring,omitzero"`               // how the feeder is run
 }
 
@@ -77,8 +80,12 @@ type FeederResult struct {
 	Rating      tables.Figure         `json:"rating"`                // standard rating at or below the limit
 	StartLimit  tables.Figure         `json:"start_limit,omitzero"`  // the same, for motors that must start together (CEC)
 	StartRating tables.Figure         `json:"start_rating,omitzero"`
-	Disconnect  protection.Disconnect `json:"disconnecting_means"` // one disconnecting means for the whole group
-	Bonding     conductor.Bonding     `json:"bonding"`             // bonding conductor of the feeder
+	Disconnect  protection.Disconnect `json:"disconnecting_means"`   // one disconnecting means for the whole group
+	Bonding     conductor.Bonding     `json:"bonding"`               // bonding conductor of the feeder
+	Raceway     conductor.Filled      `json:"raceway,omitzero"`      // raceway of each set of conductors
+	Drop        VoltageDrop           `json:"voltage_drop,omitzero"` // along the feeder
+	TotalDrop   []tables.Figure       `json:"total_drop,omitempty"`  // running, of feeder and branch circuit together, in the order given; absent without lengths
+	FaultDuty   FaultDuty             `json:"fault_duty,omitzero"`   // at the end of the feeder; its circuits, where they give no fault current, begin with that
 	Cautions    []tables.Caution      `json:"cautions"`
 }
 
@@ -116,7 +123,7 @@ func SizeFeeder(f Feeder) (FeederResult, error) {
 		return FeederResult{}, err
 	}
 	r.Disconnect = g.disconnect()
-	if r.Bonding, err = conductor.SelectBonding(f.Edition, r.Rating, r.Conductors); err != nil {
+	if err := r.physical(&g); err != nil {
 		return FeederResult{}, err
 	}
 	r.Cautions = r.cautions(&g)
@@ -128,7 +135,7 @@ func (f Feeder) validate() error {
 	if err := f.Edition.Check(); err != nil {
 		return err
 	}
-	faults := []error{f.Wiring.Validate(f.Edition)}
+	faults := []error{f.Wiring.Validate(f.Edition), checkPhysical(f.Wiring, f.MaxDrop, f.Fault, f.FaultXR)}
 	add := func(field, value, want string) {
 		faults = append(faults, &tables.InputError{Field: field, Value: value, Want: want})
 	}

@@ -13,7 +13,7 @@ import (
 // derivation; those of its circuits are in [FeederResult.Circuits].
 func (r FeederResult) Figures() iter.Seq[tables.Figure] {
 	return func(yield func(tables.Figure) bool) {
-		for _, f := range slices.Concat(selectionFigures(&r.Conductors), r.deviceFigures(), r.disconnectFigures(), []tables.Figure{r.Bonding.Row}) {
+		for _, f := range slices.Concat(selectionFigures(&r.Conductors), r.deviceFigures(), r.disconnectFigures(), []tables.Figure{r.Bonding.Row}, racewayFigures(&r.Raceway), dropFigures(&r.Drop)) {
 			if !f.IsZero() && !yield(f) {
 				return
 			}
@@ -71,6 +71,20 @@ func (r FeederResult) String() string {
 	fmt.Fprintf(&b, "%12s  the device of %s governs\n", "", oneLine(r.Largest))
 	write("Disconnecting means of the group", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite), r.disconnectFigures())
 	write("Bonding conductor", fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why), []tables.Figure{r.Bonding.Row})
+	if !r.Raceway.IsZero() {
+		write("Raceway", r.Raceway.Name(r.Feeder.Edition), racewayFigures(&r.Raceway))
+	}
+	if !r.Drop.Running.IsZero() {
+		write("Voltage drop", r.Drop.Running.String(), dropFigures(&r.Drop))
+		for i, total := range r.TotalDrop {
+			if !total.IsZero() {
+				writeFigure(&b, total.Renamed("feeder and branch circuit of "+oneLine(r.Circuits[i].Circuit.Tag)))
+			}
+		}
+	}
+	if d := &r.FaultDuty; !d.AtMotor.IsZero() {
+		write("Fault duty", d.AtMotor.String()+" at the end of the feeder", []tables.Figure{d.Source, d.AtMotor, d.Withstand})
+	}
 	writeCautions(&b, r.Cautions)
 	return b.String()
 }
@@ -133,6 +147,8 @@ func (r *FeederResult) cautions(g *group) []tables.Caution {
 	list.add(r.Conductors.Cautions...)
 	list.add(r.Disconnect.Cautions...)
 	list.add(r.Bonding.Cautions...)
+	list.add(r.Raceway.Cautions...)
+	list.add(r.dropCautions()...)
 	for f := range r.Figures() {
 		for _, c := range f.FromMemory() {
 			list.add(tables.FromMemory(c))

@@ -11,7 +11,6 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
-	"example.org/motorcircuit/conductor"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -191,11 +190,7 @@ func valueOf(r motorcircuit.Result, key string) string {
 	case "lrc_a":
 		return d.LockedRotor.High.Text()
 	case "egc_size":
-		bonding, err := conductor.SelectBonding(r.Circuit.Edition, r.ShortCircuit.Rating, r.Branch)
-		if err != nil {
-			return err.Error()
-		}
-		return bonding.Size.Name()
+		return r.Bonding.Size.Name()
 	case "lrc_kva_per_hp":
 		return d.LockedRotor.High.Operands()[0].Text()
 	case "lrc_kva": // the product of the two operands, kVA/hp and hp

@@ -15,18 +15,24 @@ import (
 // does not apply to the circuit. Read in order, the figures are a derivation
 // that can be redone on paper.
 type Result struct {
-	Circuit      Circuit                 `json:"circuit"`               // the input
-	Demand       motor.Demand            `json:"demand"`                // currents and least ampacities
-	Branch       conductor.Selection     `json:"branch"`                // branch-circuit conductors
-	MotorSupply  conductor.Selection     `json:"motor_supply,omitzero"` // run to the motor, where the code treats it apart
-	Secondary    conductor.Selection     `json:"secondary,omitzero"`    // wound-rotor secondary conductors
-	Resistor     conductor.Selection     `json:"resistor,omitzero"`     // conductors to resistors apart from the controller
-	Windings     []conductor.Selection   `json:"windings,omitempty"`    // runs to the windings of a multispeed motor, in the order given
-	Overload     protection.Overload     `json:"overload"`              // overload protection
-	ShortCircuit protection.ShortCircuit `json:"short_circuit_device"`  // short-circuit and ground-fault device
-	Disconnect   protection.Disconnect   `json:"disconnecting_means"`   // disconnecting means
-	Controller   protection.Controller   `json:"controller"`            // controller
-	Cautions     []tables.Caution        `json:"cautions"`              // assumptions, readings, limits; never empty
+	Circuit      Circuit                 `json:"circuit"`                   // the input
+	Demand       motor.Demand            `json:"demand"`                    // currents and least ampacities
+	Branch       conductor.Selection     `json:"branch"`                    // branch-circuit conductors
+	MotorSupply  conductor.Selection     `json:"motor_supply,omitzero"`     // run to the motor, where the code treats it apart
+	Secondary    conductor.Selection     `json:"secondary,omitzero"`        // wound-rotor secondary conductors
+	Resistor     conductor.Selection     `json:"resistor,omitzero"`         // conductors to resistors apart from the controller
+	Windings     []conductor.Selection   `json:"windings,omitempty"`        // runs to the windings of a multispeed motor, in the order given
+	BySize       tables.Size             `json:"size_by_ampacity,omitzero"` // of the branch circuit, before voltage drop
+	Overload     protection.Overload     `json:"overload"`                  // overload protection
+	ShortCircuit protection.ShortCircuit `json:"short_circuit_device"`      // short-circuit and ground-fault device
+	Disconnect   protection.Disconnect   `json:"disconnecting_means"`       // disconnecting means
+	Controller   protection.Controller   `json:"controller"`                // controller
+	Bonding      conductor.Bonding       `json:"bonding"`                   // bonding conductor
+	Raceway      conductor.Filled        `json:"raceway,omitzero"`          // raceway of each set of conductors
+	Flexible     conductor.Filled        `json:"flexible,omitzero"`         // flexible connection at the motor
+	Drop         VoltageDrop             `json:"voltage_drop,omitzero"`
+	FaultDuty    FaultDuty               `json:"fault_duty,omitzero"`
+	Cautions     []tables.Caution        `json:"cautions"` // assumptions, readings, limits; never empty
 }
 
 // A Section is a part of a derivation.
@@ -44,12 +50,16 @@ const (
 	ShortCircuitDevice
 	DisconnectingMeans
 	ControllerRating
+	BondingConductor
+	RacewayFill
+	DropSection
+	FaultSection
 	sectionCount
 )
 
 var sectionNames = [...]string{
 	"Design currents", "Branch-circuit conductors", "Motor supply conductors", "Secondary conductors", "Conductors to the resistors", "Conductors to each winding", "Overload protection",
-	"Short-circuit and ground-fault device", "Disconnecting means", "Controller",
+	"Short-circuit and ground-fault device", "Disconnecting means", "Controller", "Bonding conductor", "Raceway", "Voltage drop", "Fault duty",
 }
 
 // String returns the section's heading.
@@ -109,9 +119,26 @@ func (r *Result) section(s Section) []tables.Figure {
 	case DisconnectingMeans:
 		x := &r.Disconnect
 		return []tables.Figure{x.Amperes, x.LockedRotor, x.Sight}
+	case ControllerRating:
+		x := &r.Controller
+		return []tables.Figure{x.Amperes, x.LockedRotor, x.GeneralUse, x.SnapSwitch}
+	case BondingConductor:
+		return []tables.Figure{r.Bonding.Row}
+	case RacewayFill:
+		return append(racewayFigures(&r.Raceway), racewayFigures(&r.Flexible)...)
+	case DropSection:
+		return dropFigures(&r.Drop)
 	}
-	x := &r.Controller
-	return []tables.Figure{x.Amperes, x.LockedRotor, x.GeneralUse, x.SnapSwitch}
+	x := &r.FaultDuty
+	return []tables.Figure{x.Source, x.Contribution, x.AtMotor, x.LineToLine, x.Withstand}
+}
+
+func racewayFigures(x *conductor.Filled) []tables.Figure {
+	return []tables.Figure{x.Area, x.Limit, x.Percent}
+}
+
+func dropFigures(x *VoltageDrop) []tables.Figure {
+	return []tables.Figure{x.Limit, x.Running, x.Starting, x.LongestRun}
 }
 
 func selectionFigures(s *conductor.Selection) []tables.Figure {
@@ -171,6 +198,10 @@ func (r *Result) cautions() []tables.Caution {
 	add(r.ShortCircuit.Cautions...)
 	add(r.Disconnect.Cautions...)
 	add(r.Controller.Cautions...)
+	add(r.Bonding.Cautions...)
+	add(r.Raceway.Cautions...)
+	add(r.Flexible.Cautions...)
+	add(r.dropCautions()...)
 	for s := range sectionCount {
 		for _, f := range r.section(s) {
 			for _, cite := range f.FromMemory() {

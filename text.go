@@ -31,7 +31,7 @@ func (r *Result) write(b *strings.Builder) {
 	for s := range sectionCount {
 		lines := r.section(s)
 		chosen := r.chosen(s)
-		if len(lines) == 0 && chosen == "" {
+		if !slices.ContainsFunc(lines, func(f tables.Figure) bool { return !f.IsZero() }) && chosen == "" {
 			continue
 		}
 		fmt.Fprintf(b, "\n%s", s)
@@ -162,6 +162,14 @@ func (r *Result) chosen(s Section) string {
 		return rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite)
 	case ControllerRating:
 		return rating(r.Controller.Amperes, r.Controller.Horsepower, r.Controller.Cite)
+	case BondingConductor:
+		return fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why)
+	case RacewayFill:
+		name := r.Raceway.Name(r.Circuit.Edition)
+		if flexible := r.Flexible.Name(r.Circuit.Edition); flexible != "" {
+			name = strings.TrimPrefix(name+", at the motor "+flexible, ", ")
+		}
+		return name
 	}
 	return ""
 }

@@ -13,10 +13,12 @@ type Bonding struct {
 }
 
 var (
-	necBonding     = tables.Rule{Ref: "250.122(A)"}
-	necBondingSets = tables.Rule{Ref: "250.122(F)"}
-	cecBonding     = tables.Rule{Ref: "Rule 10-616", Mark: tables.MarkB}
-	cecBondingSets = tables.Rule{Ref: "Rule 10-616(4)", Mark: tables.MarkB}
+	necBonding       = tables.Rule{Ref: "250.122(A)"}
+	necBondingSets   = tables.Rule{Ref: "250.122(F)"}
+	necBondingLarger = tables.Rule{Ref: "250.122(B)"}
+	cecBondingLarger = tables.Rule{Ref: "Rule 10-616(3)(b)", Mark: tables.MarkB}
+	cecBonding       = tables.Rule{Ref: "Rule 10-616", Mark: tables.MarkB}
+	cecBondingSets   = tables.Rule{Ref: "Rule 10-616(4)", Mark: tables.MarkB}
 )
 
 // IsZero reports whether no bonding conductor was selected.
@@ -27,18 +29,27 @@ func (b Bonding) IsZero() bool { return b.Size == 0 }
 // never larger than the circuit conductors. With conductors in parallel each
 // set has one: of full size under the NEC, by its share of the device rating
 // under the CEC.
-func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection) (Bonding, error) {
+//
+// Base is the size that the circuit conductors would have by ampacity alone. If
+// they are larger, the bonding conductor grows in proportion to their area (NEC
+// 250.122(B)), or goes by their ampacity in place of the device (CEC Rule
+// 10-616(3)(b)); zero is no increase.
+func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection, base tables.Size) (Bonding, error) {
 	b := Bonding{Material: circuit.Material}
 	rating, rule, why := device, &necBonding, "by the rating of the device"
 	if e.Code() == tables.CEC {
 		rule = &cecBonding
 	}
+	larger := base != 0 && circuit.Size.Cmp(base) > 0
+	if larger && e.Code() == tables.CEC {
+		rating, why = tables.LargestOf("device rating or ampacity", e, &cecBondingLarger, device, circuit.Ampacity), "by the larger of the device rating and the ampacity of circuit conductors that are enlarged"
+	}
 	if circuit.Sets > 1 {
 		sets := &necBondingSets
 		if e.Code() == tables.CEC {
 			sets = &cecBondingSets
-			rating = tables.QuotientOf("device rating of each set", e, sets, device, setsFigure(circuit.Sets))
-			why = "by the share of the device rating of each set"
+			rating = tables.QuotientOf("share of each set", e, sets, rating, setsFigure(circuit.Sets))
+			why += ", shared among the sets"
 		}
 		b.Cautions = append(b.Cautions, tables.Caution{Text: "each set of conductors in parallel has a bonding conductor of its own", Cite: sets.In(e)})
 	}
@@ -50,10 +61,25 @@ func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection) (B
 		why += ", one for each set"
 	}
 	b.Size, b.Row, b.Why = size, row, why
+	if larger && e.Code() == tables.NEC {
+		b.Size, b.Why = inProportion(size, circuit.Size, base), "enlarged from "+size.String()+" in proportion to the circuit conductors ("+necBondingLarger.In(e).String()+")"
+	}
 	// The NEC asks for full size with every set, and of no more than the circuit
 	// conductors where there is one set.
-	if capped := circuit.Sets <= 1 || e.Code() == tables.CEC; capped && circuit.Size.Cmp(size) < 0 {
+	if capped := circuit.Sets <= 1 || e.Code() == tables.CEC; capped && circuit.Size.Cmp(b.Size) < 0 {
 		b.Size, b.Why = circuit.Size, "as large as the circuit conductors, which it need not exceed ("+rule.In(e).String()+")"
 	}
 	return b, nil
+}
+
+// inProportion returns the smallest size whose area is at least the table's,
+// times the ratio of the installed to the base conductors.
+func inProportion(size, installed, base tables.Size) tables.Size {
+	need := size.Area().Mul(installed.Area())
+	for _, s := range tables.Sizes() {
+		if s.Area().Mul(base.Area()).GreaterThanOrEqual(need) {
+			return s
+		}
+	}
+	return installed
 }

@@ -10,111 +10,127 @@ import (
 	"example.org/motorcircuit/tables"
 )
 
-// circuit is what a bonding conductor needs to know of its circuit.
-func circuit(m tables.Material, name string, sets int) conductor.Selection {
-	return conductor.Selection{Material: m, Size: size(name), Sets: sets}
+func bonded(t *testing.T, e tables.Edition, m tables.Material, device, awg, base string, sets int) conductor.Bonding {
+	t.Helper()
+	w := conductor.Wiring{Material: m, Termination: 75, Least: size(awg), Sets: sets}
+	s := chosen(t, w, e, load("1"))
+	require.Equal(t, size(awg), s.Size)
+	var from tables.Size
+	if base != "" {
+		from = size(base)
+	}
+	b, err := conductor.SelectBonding(e, amps(device), s, from)
+	require.NoError(t, err)
+	return b
 }
 
-// NEC 250.122(A) with Table 250.122, CEC Rule 10-616 with Table 16: by the rating
-// of the device, not larger than the circuit conductors. The codes differ to 30 A.
+// Table 250.122 and Table 16: by the device, never larger than the circuit
+// conductors.
 func TestBondingByDevice(t *testing.T) {
 	for _, tt := range []struct {
-		device   string
-		material tables.Material
-		circuit  string
-		nec, cec string
-		row      string // NEC
+		device, awg string
+		nec, cec    string
 	}{
-		{"15", tables.Copper, "4/0", "14", "14", "15 A"},
-		{"20", tables.Copper, "4/0", "12", "14", "20 A"},
-		{"25", tables.Copper, "4/0", "10", "12", "60 A"},
-		{"30", tables.Copper, "4/0", "10", "12", "60 A"},
-		{"35", tables.Copper, "4/0", "10", "10", "60 A"},
-		{"60", tables.Copper, "4/0", "10", "10", "60 A"},
-		{"70", tables.Copper, "4/0", "8", "8", "100 A"},
-		{"100", tables.Copper, "4/0", "8", "8", "100 A"},
-		{"110", tables.Copper, "4/0", "6", "6", "200 A"},
-		{"20", tables.Aluminum, "4/0", "10", "12", "20 A"},
-		{"60", tables.Aluminum, "4/0", "8", "8", "60 A"},
-		{"400", tables.Aluminum, "500", "1", "1", "400 A"},
-		// A 14 AWG branch behind 40 A needs no more than 14 AWG.
-		{"40", tables.Copper, "14", "14", "14", "60 A"},
-		{"40", tables.Copper, "10", "10", "10", "60 A"},
-		{"70", tables.Copper, "10", "10", "10", "100 A"},
+		{"15", "14", "14", "14"}, {"20", "12", "12", "14"}, {"30", "10", "10", "12"}, {"60", "6", "10", "10"},
+		{"100", "3", "8", "8"}, {"125", "1", "6", "6"}, {"200", "3/0", "6", "6"}, {"400", "500", "3", "3"},
+		{"40", "14", "14", "14"}, // a motor branch: as large as the circuit conductors
+		{"225", "4", "4", "4"},   // row of 300 A
+		{"1200", "500", "3/0", "3/0"},
 	} {
 		for _, e := range tables.Editions() {
-			b, err := conductor.SelectBonding(e, amps(tt.device), circuit(tt.material, tt.circuit, 1))
-			require.NoError(t, err)
 			want := tt.nec
 			if e.Code() == tables.CEC {
 				want = tt.cec
 			}
-			assert.Equal(t, want, b.Size.Name(), "%v %s A %v", e, tt.device, tt.material)
-			assert.Equal(t, tt.material, b.Material)
-			assert.Empty(t, b.Cautions)
-			assert.False(t, b.IsZero())
-			if e.Code() == tables.NEC {
-				assert.Equal(t, tt.row, b.Row.String(), "%s A", tt.device)
-				assert.Equal(t, "Table 250.122", b.Row.Citation().Ref)
-			} else {
-				assert.Equal(t, "Table 16", b.Row.Citation().Ref)
-			}
+			assert.Equal(t, want, bonded(t, e, conductor.Copper, tt.device, tt.awg, "", 1).Size.Name(), "%v, %s A, %s", e, tt.device, tt.awg)
+			assert.Equal(t, want, bonded(t, e, conductor.Copper, tt.device, tt.awg, tt.awg, 1).Size.Name(), "of the base size: no increase")
 		}
 	}
 }
 
-// What the size rests on is said.
-func TestBondingWhy(t *testing.T) {
-	for e, rule := range map[tables.Edition]string{tables.NEC2017: "NFPA 70-2017 250.122(A)", tables.NEC2023: "NFPA 70-2023 250.122(A)",
-		tables.CEC2021: "CSA C22.1:21 Rule 10-616", tables.CEC2024: "CSA C22.1:24 Rule 10-616"} {
-		b, err := conductor.SelectBonding(e, amps("40"), circuit(tables.Copper, "14", 1))
-		require.NoError(t, err)
-		assert.Contains(t, b.Why, rule)
-		b, err = conductor.SelectBonding(e, amps("40"), circuit(tables.Copper, "8", 1))
-		require.NoError(t, err)
-		assert.Equal(t, "by the rating of the device", b.Why)
-	}
-}
-
-// Conductors in parallel: NEC 250.122(F) a full-size one in each raceway; CEC Rule
-// 10-616(4) each by its share of the device rating.
-func TestBondingInParallel(t *testing.T) {
-	for _, tt := range []struct {
-		device, circuit string
-		sets            int
-		nec, cec        string
-	}{
-		{"500", "3/0", 2, "2", "4"},    // CEC 250 A: the row of 300
-		{"400", "3/0", 2, "3", "6"},    // CEC 200 A, exactly a row
-		{"1000", "350", 3, "2/0", "3"}, // CEC 333.3 A: the row of 400
-		{"1600", "600", 4, "4/0", "3"}, // CEC 400 A
-		{"2000", "500", 6, "250", "3"}, // CEC 333.3 A
-	} {
-		for _, e := range tables.Editions() {
-			b, err := conductor.SelectBonding(e, amps(tt.device), circuit(tables.Copper, tt.circuit, tt.sets))
-			require.NoError(t, err)
-			want, rule := tt.nec, "250.122(F)"
-			if e.Code() == tables.CEC {
-				want, rule = tt.cec, "Rule 10-616(4)"
-			}
-			assert.Equal(t, want, b.Size.Name(), "%v %s A", e, tt.device)
-			assert.True(t, cautioned(b.Cautions, rule, "of its own"))
+// NEC 250.122(B): in proportion to the circular mils, next standard size up.
+func TestBondingInProportion(t *testing.T) {
+	for _, e := range necEditions {
+		for _, tt := range []struct{ device, awg, base, want string }{
+			{"200", "350", "3/0", "2"},    // 26 240 × 350 000 / 167 800 = 54 732 cmil
+			{"60", "1", "4", "6"},         // 10 380 × 83 690 / 41 740 = 20 812
+			{"100", "1/0", "3", "4"},      // 16 510 × 105 600 / 52 620 = 33 133
+			{"20", "8", "12", "8"},        // 6530 × 16 510 / 6530 = 16 510, 8 AWG itself
+			{"400", "1000", "500", "1/0"}, // 52 620 × 2 = 105 240, just within 105 600
+			{"15", "4", "14", "4"},        // 14 AWG itself grows to the circuit conductors' size
+		} {
+			b := bonded(t, e, conductor.Copper, tt.device, tt.awg, tt.base, 1)
+			assert.Equal(t, tt.want, b.Size.Name(), "%s A, %s from %s", tt.device, tt.awg, tt.base)
+			assert.Contains(t, b.Why, "250.122(B)")
 		}
 	}
 }
 
-// Above the last row, 6000 A, there is no size.
-func TestBondingRefusals(t *testing.T) {
+// CEC Rule 10-616(3)(b): enlarged conductors are bonded by their ampacity: 3/0
+// AWG, 200 A at 75 °C, takes 6 AWG; 350 kcmil, 310 A, the row of 400 A, 3 AWG.
+func TestBondingByAmpacityCEC(t *testing.T) {
+	for _, e := range cecEditions {
+		for _, tt := range []struct{ device, awg, base, want string }{
+			{"100", "3/0", "3", "6"}, {"100", "350", "3", "3"}, {"100", "250", "3", "4"},
+		} {
+			b := bonded(t, e, conductor.Copper, tt.device, tt.awg, tt.base, 1)
+			assert.Equal(t, tt.want, b.Size.Name(), "%s from %s", tt.awg, tt.base)
+			assert.Contains(t, b.Why, "ampacity")
+			assert.Equal(t, "6", bonded(t, e, conductor.Copper, "125", "3/0", "", 1).Size.Name(), "not enlarged: by the device")
+		}
+	}
+}
+
+// One with each set: full size under the NEC (250.122(F)), by the set's share of
+// the device under the CEC (Rule 10-616(4)).
+func TestBondingOfSets(t *testing.T) {
 	for _, e := range tables.Editions() {
-		b, err := conductor.SelectBonding(e, amps("6000"), circuit(tables.Copper, "2000", 1))
-		require.NoError(t, err)
-		assert.Equal(t, "800", b.Size.Name())
-		b, err = conductor.SelectBonding(e, amps("6000.01"), circuit(tables.Copper, "2000", 1))
-		assert.Equal(t, "device", field(err))
-		assert.True(t, b.IsZero())
+		b := bonded(t, e, conductor.Copper, "800", "500", "", 2)
+		want, ref := "1/0", "250.122(F)"
+		if e.Code() == tables.CEC {
+			want, ref = "3", "Rule 10-616(4)" // 400 A each
+		}
+		assert.Equal(t, want, b.Size.Name())
+		assert.True(t, cautioned(b.Cautions, ref, "bonding conductor of its own"))
 	}
-	_, err := conductor.SelectBonding(0, amps("20"), circuit(tables.Copper, "14", 1))
-	assert.Equal(t, "edition", field(err))
-	_, err = conductor.SelectBonding(tables.NEC2023, amps("20"), circuit(9, "14", 1))
-	assert.Equal(t, "wiring.material", field(err))
+}
+
+// Never larger than the circuit conductors; under the NEC never smaller for an
+// increase; every step of the series over devices and materials.
+func TestBondingProperties(t *testing.T) {
+	held := 0
+	for _, e := range tables.Editions() {
+		for _, m := range []tables.Material{conductor.Copper, conductor.Aluminum} {
+			for _, device := range []string{"15", "35", "60", "100", "200", "400", "1000"} {
+				for _, base := range []string{"12", "6", "1/0", "250"} {
+					before := bonded(t, e, m, device, base, base, 1).Size
+					for _, awg := range []string{"10", "4", "2/0", "300", "600", "1000"} {
+						if size(awg).Cmp(size(base)) <= 0 {
+							continue
+						}
+						b := bonded(t, e, m, device, awg, base, 1)
+						assert.LessOrEqual(t, b.Size.Cmp(size(awg)), 0)
+						assert.Equal(t, m, b.Material)
+						if e.Code() == tables.NEC {
+							assert.GreaterOrEqual(t, b.Size.Cmp(before), 0, "%v %v, %s A, %s from %s", e, m, device, awg, base)
+							before = b.Size
+						}
+						held++
+					}
+				}
+			}
+		}
+	}
+	assert.Greater(t, held, 800)
+}
+
+func TestBondingRefused(t *testing.T) {
+	for _, e := range tables.Editions() {
+		s := chosen(t, conductor.Wiring{Termination: 75, Least: size("1/0")}, e, load("1"))
+		b, err := conductor.SelectBonding(e, amps("6001"), s, 0)
+		var missing *tables.NotTabulatedError
+		require.ErrorAs(t, err, &missing)
+		assert.True(t, b.IsZero())
+		assert.Equal(t, "device", missing.Field)
+	}
 }

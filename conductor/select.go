@@ -110,7 +110,7 @@ func (r *rules) choose(e tables.Edition, w Wiring, l Load, ins insulation, s Sel
 	}
 	c := choice{e: e, w: w, r: r, s: &s, table: table, terminal: terminal,
 		cols: columns{table.Column(cols.corrected), terminal.Column(cols.terminal)}, most: ins.Most}
-	least := max(r.least[w.Material], ins.Least)
+	least := max(r.least[w.Material], ins.Least, w.Least)
 	first, last := 1, MaxSets
 	if w.Sets > 0 {
 		first, last = w.Sets, w.Sets

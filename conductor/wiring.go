@@ -25,6 +25,11 @@ type Wiring struct {
 	Rooftop     bool               `json:"rooftop,omitzero"`     // in direct sun, less than 23 mm (7/8 in) above a roof (NEC)
 	Conductors  int                `json:"conductors,omitzero"`  // current-carrying conductors in the raceway or cable, or bundled in free air; zero is the circuit's own, and in free air conductors kept apart
 	Termination int                `json:"termination,omitzero"` // marked temperature of the terminals: 60, 75 or 90 °C; zero is not marked
+	Length      tables.Length      `json:"length,omitzero"`      // one way; not given leaves voltage drop out
+	Raceway     tables.Raceway     `json:"raceway,omitzero"`     // type of raceway; not given leaves its size out, and impedance counts as in steel
+	Flexible    tables.Raceway     `json:"flexible,omitzero"`    // type of the flexible connection at the motor; not given is none
+	DropMethod  DropMethod         `json:"drop_method,omitzero"` // how voltage drop running is reckoned; zero is by impedance
+	Least       tables.Size        `json:"least_size,omitzero"`  // smallest size to use; zero is the code's
 	Sets        int                `json:"sets,omitzero"`        // conductors in parallel for each phase, each set in its own raceway; zero is as few as will do
 	Reading     Reading            `json:"reading,omitzero"`     // how the CEC's termination rule and its corrections combine
 }
@@ -53,11 +58,20 @@ func (r *Reading) UnmarshalText(text []byte) error {
 	return tables.ReadText(r, "wiring.reading", text, readingTexts[:])
 }
 
+// Feet returns a length in feet, such as Feet("140"). It panics on a typing slip;
+// to read input use [tables.ParseLength].
+func Feet(s string) tables.Length { return tables.Must(tables.ParseLength(s + " ft")) }
+
+// Metres returns a length in metres, such as Metres("42.7"). It panics on a
+// typing slip; to read input use [tables.ParseLength].
+func Metres(s string) tables.Length { return tables.Must(tables.ParseLength(s + " m")) }
+
 // MaxSets is the most conductors in parallel that [Wiring.Select] tries.
 const MaxSets = 12
 
 var (
 	coldest = tables.Must(tables.ParseTemperature("-60"))
+	longest = tables.Must(tables.ParseLength("10000 m"))
 	hottest = tables.Must(tables.ParseTemperature("150"))
 )
 
@@ -95,6 +109,33 @@ func (w Wiring) Validate(e tables.Edition) error {
 	case 0, 60, 75, 90:
 	default:
 		add("termination", strconv.Itoa(w.Termination), "60, 75 or 90 °C, or 0 for terminals that are not marked")
+	}
+	if w.Raceway != 0 {
+		if _, err := e.RacewaySizes(w.Raceway); err != nil {
+			faults = append(faults, err)
+		}
+		if w.Run != tables.InRaceway {
+			add("raceway", w.Raceway.String(), "none for a run that is not in raceway")
+		}
+	}
+	if w.Flexible != 0 {
+		if _, err := e.RacewaySizes(w.Flexible); err != nil {
+			faults = append(faults, err)
+		} else if !w.Flexible.IsFlexible() {
+			add("flexible", w.Flexible.String(), "a flexible raceway")
+		}
+	}
+	switch {
+	case w.DropMethod >= dropMethodCount:
+		add("drop_method", strconv.Itoa(int(w.DropMethod)), "impedance or table_d3")
+	case w.DropMethod == ByTableD3 && e != tables.CEC2024:
+		add("drop_method", w.DropMethod.String(), "impedance under "+e.Standard()+": Table D3 has this form from CSA C22.1:24 on")
+	}
+	if w.Length.Cmp(longest) > 0 {
+		add("length", w.Length.String(), "at most 10000 m")
+	}
+	if w.Least.IsMetric() {
+		add("least_size", w.Least.String(), "an AWG or kcmil size")
 	}
 	if w.Sets < 0 || w.Sets > MaxSets {
 		add("sets", strconv.Itoa(w.Sets), "1 to "+strconv.Itoa(MaxSets)+", or 0 for as few as will do")

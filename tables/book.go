@@ -1,5 +1,7 @@
 package tables
 
+import "example.org/motorcircuit/internal/exact"
+
 // A book is the tables of one code. What an edition prints otherwise is chosen
 // by the edition where the book takes one. A nil entry is a table that the code
 // does not have.
@@ -24,6 +26,9 @@ type book struct {
 	bonding           func(Edition) *bondingTable
 	secondaryResistor func() *resistorTable
 	dcResistor        func() *resistorTable
+	raceways          func() *racewayTable
+	dimensions        func() *dimensionTable
+	bareAreas         func() map[Size]exact.Num
 	smallConductors   func() []smallConductor
 }
 

@@ -125,6 +125,12 @@ func QuotientOf(name string, e Edition, rule *Rule, dividend Figure, divisors ..
 	return newFigure(name, QuotientUp, e, rule, dividend.value.DivUp(under, 2), dividend.unit, of...).WithNote("rounded up to 0.01")
 }
 
+// PercentOf returns part ÷ whole in percent, rounded up to a hundredth.
+func PercentOf(name string, e Edition, rule *Rule, part, whole Figure) Figure {
+	f := newFigure(name, QuotientUp, e, rule, part.value.Mul(exact.Int(100)).DivUp(whole.value, 2), Percent, part, whole)
+	return f.WithNote("in percent, rounded up to 0.01")
+}
+
 // Whole returns a whole number as a figure: a count that the caller chose or
 // that follows from the circuit.
 func Whole(name string, unit Unit, n int) Figure {

@@ -18,6 +18,8 @@ var (
 	cecTable25Other = Rule{Ref: "Table 25", Mark: MarkC} // other than three-phase
 	cecTable16      = Rule{Ref: "Table 16", Mark: MarkB}
 	cecTable28      = Rule{Ref: "Table 28", Mark: MarkC}
+	cecTable9       = Rule{Ref: "Tables 9A to 9H", Mark: MarkB}
+	cecTable6       = Rule{Ref: "Tables 6A to 6K", Mark: MarkB}
 	cecTable37      = Rule{Ref: "Table 37", Mark: MarkC}
 	cecTable13      = Rule{Ref: "Table 13", Mark: MarkB}
 
@@ -66,7 +68,27 @@ var cecBook = book{
 	insulations:       loadInsulationsCEC("cec/conductor_insulations.csv", &cecTable19),
 	bonding:           func(Edition) *bondingTable { return cecBonding() },
 	secondaryResistor: loadResistors("cec/motor_controller_secondary.csv", &cecTable28),
-	smallConductors:   loadSmallConductors("cec/conductor_small_14_104.csv", func([]string) *Rule { return &cecSmall }),
+	raceways: loadRaceways("cec/raceway_dimensions.csv", racewayShape{
+		trade: "trade_size_in", metric: "metric_designator", diameter: "internal_diameter_mm", area: "area_100pct_mm2",
+		limits: [4]string{"area_53pct_mm2", "area_31pct_mm2", "area_40pct_mm2", ""}, unit: SquareMillimetre, length: Millimetre,
+		kind: func(name string) (Raceway, bool) { r, ok := racewayCEC[name]; return r, ok },
+		rule: func(Raceway) *Rule { return &cecTable9 },
+	}),
+	dimensions: loadDimensions("cec/conductor_dimensions.csv", &cecTable6, "size", "diameter_mm", "area_mm2", Millimetre, SquareMillimetre,
+		"R90, RW75 and RW90 (unjacketed, 600 V), TW, TW75, TWN75 and T90 Nylon", func(row []string) []string {
+			if row[1] != "stranded" {
+				return nil
+			}
+			return cecDimensionTypes[row[0]]
+		}),
+	smallConductors: loadSmallConductors("cec/conductor_small_14_104.csv", func([]string) *Rule { return &cecSmall }),
+}
+
+// cecDimensionTypes are the types that a group of rows of Tables 6 is for.
+var cecDimensionTypes = map[string][]string{
+	"R90XLPE_RW75XLPE_RW90XLPE_UNJACKETED_600V": {"R90", "RW75", "RW90"},
+	"TWN75_T90_NYLON": {"TWN75", "T90_NYLON"},
+	"TW_TW75":         {"TW", "TW75"},
 }
 
 var cecBonding = loadBonding("cec/conductor_bonding.csv", func(Material, int64) *Rule { return &cecTable16 })

@@ -47,6 +47,8 @@ type Rule struct {
 	Moved []Move // later numbers, oldest edition first
 	Mark  Mark
 	Note  string
+
+	Outside bool // not of the edition itself: physics, or a table of another code
 }
 
 // A Move is the number that a rule has from an edition on.
@@ -61,6 +63,9 @@ func (r *Rule) In(e Edition) Citation {
 		return Citation{}
 	}
 	c := Citation{Edition: e, Ref: r.Ref, Note: r.Note}
+	if r.Outside {
+		c.Edition = 0
+	}
 	for _, m := range r.Moved {
 		if e >= m.From {
 			c.Ref = m.Ref

@@ -38,6 +38,7 @@ type Insulation struct {
 	Celsius   [3]int // rated temperature by Location, 0 where it may not be used
 	Least     Size   // smallest size it is made in
 	Most      Size   // largest size it is made in
+	Thermoset bool   // thermoset, which stands more heat in a fault
 	NoRaceway bool   // may not be pulled into a raceway
 	Mark      Mark   // how sure the type's row is
 	Note      string // conditions of use, often ""
@@ -110,7 +111,7 @@ func loadInsulationsNEC(path string, rule *Rule, fromMemory ...string) func() *i
 		}
 		t := &insulationTable{rule: rule, byName: make(map[string]int)}
 		for row, cells := range g.Rows {
-			ins := Insulation{Type: cells[0], Note: condition(cells[7])}
+			ins := Insulation{Type: cells[0], Thermoset: strings.HasPrefix(cells[1], "thermoset"), Note: condition(cells[7])}
 			for i := range locationCount {
 				if ins.Celsius[i], err = g.Int(row, 2+int(i), 0); err != nil {
 					return nil, err
@@ -162,7 +163,7 @@ func loadInsulationsCEC(path string, rule *Rule) func() *insulationTable {
 			if err != nil {
 				return nil, err
 			}
-			ins := Insulation{Type: cells[0], Mark: rule.Mark, Least: 1, Most: Size(len(awgNames)), NoRaceway: cells[raceway] == "no"}
+			ins := Insulation{Type: cells[0], Thermoset: strings.HasPrefix(cells[1], "thermoset"), Mark: rule.Mark, Least: 1, Most: Size(len(awgNames)), NoRaceway: cells[raceway] == "no"}
 			for i := range locationCount {
 				switch use := cells[3+int(i)]; use {
 				case "no":

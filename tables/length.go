@@ -45,6 +45,15 @@ func (l Length) metres() exact.Num {
 	return l.n
 }
 
+// Figure returns l in metres as a figure of the given name, as the caller's
+// input; absent if l is not given.
+func (l Length) Figure(name string) Figure {
+	if !l.given {
+		return Figure{}
+	}
+	return Figure{value: l.metres(), unit: Metre, name: name, op: Given}
+}
+
 // Cmp compares two lengths: -1, 0 or 1.
 func (l Length) Cmp(m Length) int { return l.metres().Cmp(m.metres()) }
 

@@ -5,21 +5,24 @@ package tables
 var necVolts = []voltRange{{115, 110, 120}, {230, 220, 240}, {460, 440, 480}, {575, 550, 600}}
 
 var (
-	necDC         = Rule{Ref: "Table 430.247"}
-	nec1Ph        = Rule{Ref: "Table 430.248"}
-	nec2Ph        = Rule{Ref: "Table 430.249"}
-	nec3Ph        = Rule{Ref: "Table 430.250"}
-	necRotor1     = Rule{Ref: "Table 430.251(A)"}
-	necRotor3     = Rule{Ref: "Table 430.251(B)"}
-	necDuty       = Rule{Ref: "Table 430.22(E)"}
-	necDevice     = Rule{Ref: "Table 430.52", Moved: []Move{{NEC2023, "Table 430.52(C)(1)"}}}
-	necCeiling    = Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []Move{{NEC2023, "430.52(C)(1)(b)"}}}
-	necStandard   = Rule{Ref: "240.6(A)"}
-	necResistor   = Rule{Ref: "Table 430.23(C)"}
-	necDCResistor = Rule{Ref: "Table 430.29"}
-	necBonding    = Rule{Ref: "Table 250.122"}
-	necBondingBig = Rule{Ref: "Table 250.122", Mark: MarkB}
-	necUnits      = Rule{Ref: "Table 430.37", Mark: MarkB}
+	necDC           = Rule{Ref: "Table 430.247"}
+	nec1Ph          = Rule{Ref: "Table 430.248"}
+	nec2Ph          = Rule{Ref: "Table 430.249"}
+	nec3Ph          = Rule{Ref: "Table 430.250"}
+	necRotor1       = Rule{Ref: "Table 430.251(A)"}
+	necRotor3       = Rule{Ref: "Table 430.251(B)"}
+	necDuty         = Rule{Ref: "Table 430.22(E)"}
+	necDevice       = Rule{Ref: "Table 430.52", Moved: []Move{{NEC2023, "Table 430.52(C)(1)"}}}
+	necCeiling      = Rule{Ref: "430.52(C)(1) Exception No. 2", Moved: []Move{{NEC2023, "430.52(C)(1)(b)"}}}
+	necStandard     = Rule{Ref: "240.6(A)"}
+	necResistor     = Rule{Ref: "Table 430.23(C)"}
+	necDCResistor   = Rule{Ref: "Table 430.29"}
+	necBonding      = Rule{Ref: "Table 250.122"}
+	necBondingBig   = Rule{Ref: "Table 250.122", Mark: MarkB}
+	necTable4       = Rule{Ref: "Chapter 9 Table 4", Mark: MarkB}
+	necTable4Memory = Rule{Ref: "Chapter 9 Table 4", Mark: MarkC}
+	necTable5       = Rule{Ref: "Chapter 9 Table 5", Mark: MarkB}
+	necUnits        = Rule{Ref: "Table 430.37", Mark: MarkB}
 
 	necRaceway     = Rule{Ref: "Table 310.15(B)(16)", Moved: []Move{{NEC2020, "Table 310.16"}}}
 	necFreeAir     = Rule{Ref: "Table 310.15(B)(17)", Moved: []Move{{NEC2020, "Table 310.17"}}, Mark: MarkB}
@@ -69,6 +72,15 @@ var necBook = book{
 	},
 	secondaryResistor: loadResistors("nec/motor_secondary_resistor_percent.csv", &necResistor),
 	dcResistor:        loadResistors("nec/motor_dc_resistor_percent.csv", &necDCResistor),
+	raceways:          loadRaceways("nec/raceway_dimensions.csv", necRaceways),
+	dimensions: loadDimensions("nec/conductor_dimensions.csv", &necTable5, "size_awg_kcmil", "diameter_in", "area_in2", Inch, SquareInch,
+		"TW, THW, THHW, THHN, THWN, XHH, XHHW, RHH, RHW and their -2 types", func(row []string) []string {
+			if row[1] == "no" { // with the outer covering, the larger
+				return nil
+			}
+			return row[:1]
+		}),
+	bareAreas: loadBareAreas("nec/conductor_properties.csv"),
 	smallConductors: loadSmallConductors("nec/motor_small_conductors.csv", func(row []string) *Rule {
 		return &Rule{Ref: row[4], Moved: []Move{{NEC2023, row[5]}}, Mark: MarkB}
 	}),
@@ -80,6 +92,23 @@ var (
 	necRotor1To2020 = loadMotorTable("nec/motor_locked_rotor_1ph.csv", &necRotor1, necVolts, nil, map[string]string{"v115_as_printed_2023": ""})
 	necRotor1As2023 = loadMotorTable("nec/motor_locked_rotor_1ph.csv", &necRotor1, necVolts, nil, map[string]string{"v115": "", "v115_as_printed_2023": "v115"})
 )
+
+var necRaceways = racewayShape{
+	trade: "trade_size", metric: "metric_designator", diameter: "internal_diameter_in", area: "area_100_in2",
+	limits: [4]string{"area_1wire_53_in2", "area_2wires_31_in2", "area_over2_40_in2", "area_60_in2"}, unit: SquareInch, length: Inch,
+	kind: func(name string) (Raceway, bool) {
+		var r Raceway
+		err := r.UnmarshalText([]byte(name))
+		return r, err == nil
+	},
+	rule: func(r Raceway) *Rule {
+		switch r { // from memory, two spot values confirmed
+		case LFMC, RMC, PVC40, PVC80, PVCA, PVCEB:
+			return &necTable4Memory
+		}
+		return &necTable4
+	},
+}
 
 // The largest aluminum sizes of Table 250.122 changed in 2020.
 var (

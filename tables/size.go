@@ -119,6 +119,14 @@ func (s Size) Smaller() Size {
 	return s - 1
 }
 
+// Larger returns the next larger size of the series of s, 0 if s is the largest.
+func (s Size) Larger() Size {
+	if next := s + 1; s.IsValid() && next.IsValid() && next.IsMetric() == s.IsMetric() {
+		return next
+	}
+	return 0
+}
+
 // Area returns the cross-section in mm²: for AWG and kcmil sizes that of NFPA
 // 70, Chapter 9 Table 8; 0 for the zero Size.
 func (s Size) Area() decimal.Decimal {
@@ -130,6 +138,10 @@ func (s Size) Area() decimal.Decimal {
 	}
 	return decimal.Decimal{}
 }
+
+// CircularMils returns the cross-section of an AWG or kcmil size in circular
+// mils, NFPA 70 Chapter 9 Table 8; 0 for other sizes.
+func (s Size) CircularMils() decimal.Decimal { return sizeMils()[s] }
 
 // Cmp compares sizes by cross-section: -1, 0 or 1. The zero Size is smallest.
 func (s Size) Cmp(t Size) int {
@@ -153,24 +165,29 @@ func (s *Size) UnmarshalText(text []byte) error {
 	return err
 }
 
-var sizeAreas = loaded(func() (map[Size]decimal.Decimal, error) {
+var (
+	sizeAreas = loaded(func() (map[Size]decimal.Decimal, error) { return sizeColumn("area_mm2") })
+	sizeMils  = loaded(func() (map[Size]decimal.Decimal, error) { return sizeColumn("area_cmil") })
+)
+
+func sizeColumn(name string) (map[Size]decimal.Decimal, error) {
 	g, err := open("nec/conductor_standard_sizes.csv")
 	if err != nil {
 		return nil, err
 	}
-	col, err := g.Col("area_mm2")
+	col, err := g.Col(name)
 	if err != nil {
 		return nil, err
 	}
-	areas := make(map[Size]decimal.Decimal, len(g.Rows))
+	cells := make(map[Size]decimal.Decimal, len(g.Rows))
 	for _, row := range g.Rows {
 		size, err := ParseSize(row[0])
 		if err != nil {
 			return nil, err
 		}
-		if areas[size], err = decimal.NewFromString(row[col]); err != nil {
+		if cells[size], err = decimal.NewFromString(row[col]); err != nil {
 			return nil, err
 		}
 	}
-	return areas, nil
-})
+	return cells, nil
+}

@@ -14,9 +14,17 @@ const (
 	Celsius
 	KVAPerHorsepower
 	Metre
+	Inch
+	Millimetre
+	SquareInch
+	SquareMillimetre
+	OhmPerKft
+	OhmPerKm
+	Kiloampere
+	Second
 )
 
-var unitSymbols = [...]string{"", "A", "V", "%", "hp", "kW", "°C", "kVA/hp", "m"}
+var unitSymbols = [...]string{"", "A", "V", "%", "hp", "kW", "°C", "kVA/hp", "m", "in", "mm", "in²", "mm²", "Ω/kft", "Ω/km", "kA", "s"}
 
 // String returns the unit's symbol, "" for a plain number.
 func (u Unit) String() string {
