@@ -2,6 +2,7 @@ package main
 
 import (
 	"encoding"
+	"errors"
 	"slices"
 	"strconv"
 	"strings"
@@ -15,8 +16,7 @@ type column[T any] struct {
 	name string
 	must bool // the header must have it
 
-	// set puts the text of a cell into the value; no text is "not given". It is
-	// nil for a column that is known but not used yet.
+	// set puts the text of a cell into the value; no text is "not given".
 	set func(v *T, text string) error
 
 	field string // the library's name for it, in errors; "" if it has none
@@ -70,9 +70,59 @@ func runColumns[T any](device func(*T) *tables.Device, wiring func(*T) *conducto
 		{name: "termination_c", set: whole(func(v *T) *int { return &wiring(v).Termination }), field: "wiring.termination"},
 		{name: "ambient_c", set: read(func(v *T) textReader { return &wiring(v).Ambient }), field: "wiring.ambient", needs: "insulation"},
 		{name: "conductors_in_raceway", set: whole(func(v *T) *int { return &wiring(v).Conductors }), field: "wiring.conductors", needs: "phases"},
-		{name: "raceway"},
-		{name: "length_m"},
-		{name: "length_ft"},
+		{name: "raceway", set: raceway(wiring), field: "wiring.raceway"},
+		{name: "length_m", set: length(wiring, "m"), field: "wiring.length"},
+		{name: "length_ft", set: length(wiring, "ft"), field: "wiring.length"},
+	}
+}
+
+// raceway sets the type of raceway, or "cable" or "free_air" in its place.
+func raceway[T any](wiring func(*T) *conductor.Wiring) func(*T, string) error {
+	return func(v *T, text string) error {
+		w := wiring(v)
+		if err := w.Run.UnmarshalText([]byte(text)); err == nil {
+			return nil
+		}
+		err := w.Raceway.UnmarshalText([]byte(text))
+		var input *tables.InputError
+		if errors.As(err, &input) {
+			input.Want += ", cable, free_air"
+		}
+		return err
+	}
+}
+
+// length sets the length of the run, which stands in one column of two.
+func length[T any](wiring func(*T) *conductor.Wiring, unit string) func(*T, string) error {
+	return func(v *T, text string) error {
+		if text == "" {
+			return nil
+		}
+		l := &wiring(v).Length
+		if !l.IsZero() {
+			return &tables.InputError{Value: clip(text), Want: "length_m or length_ft, not both"}
+		}
+		p, err := tables.ParseLength(text + " " + unit)
+		if err != nil {
+			return &tables.InputError{Value: clip(text), Want: "a plain decimal such as 42.7"}
+		}
+		*l = p
+		return nil
+	}
+}
+
+// kiloamperes sets a current that the column gives in kiloamperes.
+func kiloamperes[T any](field func(*T) *tables.Current) func(*T, string) error {
+	return func(v *T, text string) error {
+		if text == "" {
+			return nil
+		}
+		ka, err := tables.ParseRatio(text)
+		if err != nil {
+			return err
+		}
+		*field(v), err = tables.ParseCurrent(ka.Decimal().Shift(3).String())
+		return err
 	}
 }
 

@@ -40,8 +40,8 @@ var motors = newLayout("schedule", "motor",
 	},
 	runColumns(func(c *motorRow) *tables.Device { return &c.Device }, func(c *motorRow) *conductor.Wiring { return &c.Wiring }),
 	[]column[motorRow]{
-		{name: "max_drop_percent"},
-		{name: "fault_ka"},
+		{name: "max_drop_percent", set: read(func(c *motorRow) textReader { return &c.MaxDrop }), field: "max_drop_percent", needs: "length_m length_ft"},
+		{name: "fault_ka", set: kiloamperes(func(c *motorRow) *tables.Current { return &c.Fault }), field: "fault_amps"},
 		{name: "feeder", set: word(func(c *motorRow) *string { return &c.feeder })},
 	},
 )

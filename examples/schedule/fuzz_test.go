@@ -19,9 +19,7 @@ import (
 func FuzzRow(f *testing.F) {
 	var names []string
 	for _, c := range motors.columns {
-		if c.set != nil {
-			names = append(names, c.name)
-		}
+		names = append(names, c.name)
 	}
 	header := strings.Join(names, ",") + ",note\n"
 	blank := strings.Repeat(",", len(names)-4)
@@ -95,9 +93,7 @@ func FuzzFeederRow(f *testing.F) {
 	require.NoError(f, os.WriteFile(schedule, []byte(pumpHeader+pump1+pump2+pump3), 0o644))
 	var names []string
 	for _, c := range feederColumns.columns {
-		if c.set != nil {
-			names = append(names, c.name)
-		}
+		names = append(names, c.name)
 	}
 	header := strings.Join(names, ",") + ",note\n"
 	blank := strings.Repeat(",", len(names)-3)

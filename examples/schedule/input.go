@@ -106,17 +106,6 @@ func (s *sheet[T]) passed(record []string) []string {
 	return cells
 }
 
-// unused returns the columns of the file that are known but not used yet.
-func (s *sheet[T]) unused() []string {
-	var names []string
-	for i, c := range s.of.columns {
-		if c.set == nil && s.at[i] >= 0 {
-			names = append(names, c.name)
-		}
-	}
-	return names
-}
-
 // next reads the next row. At the end it returns no row and [io.EOF]. A row that
 // breaks the reading comes with the error.
 func (s *sheet[T]) next() (*row[T], error) {
@@ -145,7 +134,7 @@ func (s *sheet[T]) next() (*row[T], error) {
 // they are read as far as they go, and their faults are not told.
 func (s *sheet[T]) fill(r *row[T], record []string) {
 	for cell, i := range s.known {
-		if i < 0 || s.of.columns[i].set == nil {
+		if i < 0 {
 			continue
 		}
 		if err := s.of.columns[i].set(&r.value, strings.TrimSpace(at(record, cell))); err != nil {

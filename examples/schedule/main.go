@@ -132,14 +132,6 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 	if err != nil {
 		return complain(err)
 	}
-	if unused := s.unused(); len(unused) > 0 {
-		fmt.Fprintf(stderr, "schedule: columns that this release does not use: %s\n", strings.Join(unused, ", "))
-	}
-	if feeders != nil {
-		if unused := feeders.sheet.unused(); len(unused) > 0 {
-			fmt.Fprintf(stderr, "schedule: columns of the feeders file that this release does not use: %s\n", strings.Join(unused, ", "))
-		}
-	}
 	buffered := bufio.NewWriterSize(stdout, 64<<10)
 	failed, err := answerAll(s, feeders, newOutput(buffered, feeders != nil), newProgress(stderr))
 	if err := errors.Join(err, buffered.Flush()); err != nil {

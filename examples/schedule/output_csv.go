@@ -14,7 +14,7 @@ import (
 // A cell is a computed column of the CSV output.
 type cell[R any] struct {
 	name string
-	text func(r *R) string // nil for a column that is not worked out yet
+	text func(r *R) string
 }
 
 // motorCells are the columns of a motor after tag, code and error, in order.
@@ -41,12 +41,12 @@ var motorCells = []cell[mc.Result]{
 	{"instantaneous_max_a", func(r *mc.Result) string { return r.ShortCircuit.Instantaneous.Text() }},
 	{"disconnect_min_a", func(r *mc.Result) string { return r.Disconnect.Amperes.Text() }},
 	{"disconnect_min_hp", func(r *mc.Result) string { return r.Disconnect.Horsepower.Text() }},
-	{"bonding_conductor", nil},
-	{"raceway", nil},
-	{"raceway_fill_percent", nil},
-	{"drop_running_percent", nil},
-	{"drop_starting_percent", nil},
-	{"fault_at_motor_ka", nil},
+	{"bonding_conductor", func(r *mc.Result) string { return r.Bonding.Size.Name() }},
+	{"raceway", func(r *mc.Result) string { return r.Raceway.Name(r.Circuit.Edition) }},
+	{"raceway_fill_percent", func(r *mc.Result) string { return r.Raceway.Percent.Text() }},
+	{"drop_running_percent", func(r *mc.Result) string { return r.Drop.Running.Text() }},
+	{"drop_starting_percent", func(r *mc.Result) string { return r.Drop.Starting.Text() }},
+	{"fault_at_motor_ka", func(r *mc.Result) string { return r.FaultDuty.AtMotor.Text() }},
 	{"cautions", func(r *mc.Result) string { return cautions(r.Cautions) }},
 }
 
@@ -59,8 +59,8 @@ var feederCells = []cell[mc.FeederResult]{
 	{"feeder_device_limit_a", func(r *mc.FeederResult) string { return r.Limit.Text() }},
 	{"feeder_device_rating_a", func(r *mc.FeederResult) string { return r.Rating.Text() }},
 	{"bonding_conductor", func(r *mc.FeederResult) string { return r.Bonding.Size.Name() }},
-	{"raceway", nil},
-	{"drop_running_percent", nil},
+	{"raceway", func(r *mc.FeederResult) string { return r.Raceway.Name(r.Feeder.Edition) }},
+	{"drop_running_percent", func(r *mc.FeederResult) string { return r.Drop.Running.Text() }},
 	{"cautions", func(r *mc.FeederResult) string { return cautions(r.Cautions) }},
 }
 
@@ -121,7 +121,7 @@ func writeCells[R any](o *csvOutput, cells []cell[R], a *answer[R]) error {
 	o.cells = append(o.cells[:0], a.tag, a.code, strings.Join(a.faults, "; "))
 	for _, c := range cells {
 		text := ""
-		if c.text != nil && len(a.faults) == 0 {
+		if len(a.faults) == 0 {
 			text = c.text(&a.result)
 		}
 		o.cells = append(o.cells, text)
