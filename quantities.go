@@ -43,11 +43,18 @@ func (r Result) Quantities() []Quantity {
 		add("device", x.Rating.String()+" "+x.Device.Name())
 	}
 	if o := &r.Overload; !o.Limit.IsZero() {
-		add("overload", "overload relay of "+o.Units.Text()+" units, set to "+o.Limit.String())
+		add("overload", "overload relay of "+unitsText(o.Units.Text()))
 	}
 	add("disconnect", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, tables.Citation{}))
 	add("controller", rating(r.Controller.Amperes, r.Controller.Horsepower, tables.Citation{}))
 	return list
+}
+
+func unitsText(n string) string {
+	if n == "1" {
+		return "1 unit"
+	}
+	return n + " units"
 }
 
 // Quantities lists what the feeder itself takes; its circuits have their own.

@@ -175,7 +175,7 @@ func (r *Result) chosen(s Section) string {
 }
 
 func rating(amps tables.Figure, p tables.Power, cite tables.Citation) string {
-	hp := p.String() + " " + ref(cite)
+	hp := strings.TrimSpace(p.String() + " " + ref(cite))
 	switch {
 	case amps.IsZero() && p.IsZero():
 		return ""

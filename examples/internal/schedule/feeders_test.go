@@ -1,4 +1,4 @@
-package main
+package schedule
 
 import (
 	"bytes"
@@ -88,7 +88,7 @@ func TestFeederPassedThrough(t *testing.T) {
 
 // Without -feeders nothing of a feeder is answered, whatever the motors name.
 func TestNoFeedersUnasked(t *testing.T) {
-	for _, format := range formatNames() {
+	for _, format := range formatNames(formats) {
 		status, plain, _ := ran(t, pumpHeader+strings.ReplaceAll(pump1, "F-1", ""), "-format", format)
 		assert.Equal(t, 0, status)
 		status, out, complaint := ran(t, pumpHeader+pump1, "-format", format)

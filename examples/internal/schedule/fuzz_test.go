@@ -1,4 +1,4 @@
-package main
+package schedule
 
 import (
 	"encoding/csv"
@@ -53,7 +53,7 @@ func FuzzRow(f *testing.F) {
 			}
 		}
 		var b, complaint strings.Builder
-		status := run([]string{"-format", "csv", "-"}, strings.NewReader(header+line), &b, &complaint)
+		status := Run([]string{"-format", "csv", "-"}, strings.NewReader(header+line), &b, &complaint)
 		answers, err := csv.NewReader(strings.NewReader(b.String())).ReadAll()
 		require.NoError(t, err)
 		require.Len(t, answers, rows+1)
@@ -79,7 +79,7 @@ func FuzzRow(f *testing.F) {
 			require.Equal(t, allSized, status)
 		}
 		b.Reset()
-		assert.Equal(t, status, run([]string{"-format", "json", "-"}, strings.NewReader(header+line), &b, &complaint))
+		assert.Equal(t, status, Run([]string{"-format", "json", "-"}, strings.NewReader(header+line), &b, &complaint))
 		var elements []any
 		require.NoError(t, json.Unmarshal([]byte(b.String()), &elements))
 		require.Len(t, elements, rows)
@@ -113,7 +113,7 @@ func FuzzFeederRow(f *testing.F) {
 		r.FieldsPerRecord = -1
 		file, readError := r.ReadAll()
 		var b, complaint strings.Builder
-		status := run([]string{"-format", "csv", "-feeders", "-", schedule}, strings.NewReader(header+line), &b, &complaint)
+		status := Run([]string{"-format", "csv", "-feeders", "-", schedule}, strings.NewReader(header+line), &b, &complaint)
 		if readError != nil {
 			require.Equal(t, cannotRun, status)
 			require.Empty(t, b.String())
@@ -146,7 +146,7 @@ func FuzzFeederRow(f *testing.F) {
 		}
 		require.Equal(t, want, status)
 		b.Reset()
-		assert.Equal(t, status, run([]string{"-format", "json", "-feeders", "-", schedule}, strings.NewReader(header+line), &b, &complaint))
+		assert.Equal(t, status, Run([]string{"-format", "json", "-feeders", "-", schedule}, strings.NewReader(header+line), &b, &complaint))
 		var document struct{ Circuits, Feeders []any }
 		require.NoError(t, json.Unmarshal([]byte(b.String()), &document))
 		require.Len(t, document.Feeders, rows)

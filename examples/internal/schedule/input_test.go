@@ -1,4 +1,4 @@
-package main
+package schedule
 
 import (
 	"errors"
@@ -26,7 +26,7 @@ func TestBadHeader(t *testing.T) {
 		{"a broken quote", "tag,\"code,kind\n", "line 1, column 16: extraneous or missing"},
 	} {
 		t.Run(tt.name, func(t *testing.T) {
-			for _, format := range formatNames() {
+			for _, format := range formatNames(formats) {
 				status, out, complaint := ran(t, tt.schedule, "-format", format)
 				assert.Equal(t, 2, status)
 				assert.Empty(t, out)
@@ -228,7 +228,7 @@ func TestBrokenQuote(t *testing.T) {
 		{"never closed", "\"P-2,NEC-2023,squirrel_cage,5 hp,460\nP-3,NEC-2023,squirrel_cage,5 hp,460\n", ", in the row from line 3: extraneous or missing"},
 	} {
 		t.Run(tt.name, func(t *testing.T) {
-			for _, format := range formatNames() {
+			for _, format := range formatNames(formats) {
 				status, out, complaint := ran(t, start+tt.rest, "-format", format)
 				assert.Equal(t, 2, status)
 				assert.Contains(t, complaint, tt.says)

@@ -1,4 +1,4 @@
-package main
+package schedule
 
 import (
 	"bytes"
@@ -46,7 +46,7 @@ func TestStreaming(t *testing.T) {
 	f := &farm{rows: rows}
 	var stderr bytes.Buffer
 	in := io.MultiReader(strings.NewReader("tag,code,kind,power,volts\n"), f)
-	require.Equal(t, 0, run([]string{"-format", "csv", "-"}, in, f, &stderr))
+	require.Equal(t, 0, Run([]string{"-format", "csv", "-"}, in, f, &stderr))
 	assert.Equal(t, rows+1, f.answers, "every row and the header")
 	assert.Less(t, f.lag, 4_000)
 	assert.Empty(t, stderr.String(), "no progress where standard error is no terminal")

@@ -1,4 +1,4 @@
-package main
+package schedule
 
 import (
 	"fmt"
@@ -20,7 +20,7 @@ func TestBadFeedersFile(t *testing.T) {
 		{"a broken quote below", feederHeader + feeder1 + "F\"2,NEC-2023,\n", "line 3, column 2: bare"},
 	} {
 		t.Run(tt.name, func(t *testing.T) {
-			for _, format := range formatNames() {
+			for _, format := range formatNames(formats) {
 				status, out, complaint := ranFeeders(t, pumpHeader+pump1, tt.feeders, "-format", format)
 				assert.Equal(t, 2, status)
 				assert.Empty(t, out)
@@ -150,7 +150,7 @@ func TestBadFeeders(t *testing.T) {
 
 // A schedule that breaks off leaves every feeder without an answer.
 func TestFeedersOfBrokenSchedule(t *testing.T) {
-	for _, format := range formatNames() {
+	for _, format := range formatNames(formats) {
 		status, out, complaint := ranFeeders(t, pumpHeader+pump1+"P\"2,NEC-2023\n"+pump3, feederHeader+feeder1, "-format", format)
 		assert.Equal(t, 2, status)
 		assert.Contains(t, complaint, "line 3, column 2: bare")
