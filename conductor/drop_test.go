@@ -12,7 +12,6 @@ import (
 	"example.org/motorcircuit/tables"
 )
 
-
 func plain(s string) tables.Figure { return tables.Must(tables.ParseRatio(s)).Figure("ratio") }
 
 // line is a running three-phase load at 480 V.
