@@ -3,7 +3,6 @@ package motorcircuit
 import (
 	"fmt"
 	"iter"
-	"slices"
 	"strings"
 
 	"example.org/motorcircuit/tables"
@@ -13,8 +12,10 @@ import (
 // derivation; those of its circuits are in [FeederResult.Circuits].
 func (r FeederResult) Figures() iter.Seq[tables.Figure] {
 	return func(yield func(tables.Figure) bool) {
-		for _, f := range slices.Concat(selectionFigures(&r.Conductors), r.deviceFigures(), r.disconnectFigures(), []tables.Figure{r.Bonding.Row}, racewayFigures(&r.Raceway), dropFigures(&r.Drop)) {
-			if !f.IsZero() && !yield(f) {
+		list := r.disconnectFigures(r.deviceFigures(selectionFigures(nil, &r.Conductors)))
+		list = dropFigures(racewayFigures(append(list, &r.Bonding.Row), &r.Raceway), &r.Drop)
+		for _, f := range append(list, &r.FaultDuty.Source, &r.FaultDuty.AtMotor, &r.FaultDuty.Withstand) {
+			if !f.IsZero() && !yield(*f) {
 				return
 			}
 		}
@@ -29,16 +30,15 @@ func motors(n int) string {
 	return fmt.Sprintf("%d motors", n)
 }
 
-func (r *FeederResult) deviceFigures() []tables.Figure {
-	return []tables.Figure{r.Limit, r.Rating, r.StartLimit, r.StartRating}
+func (r *FeederResult) deviceFigures(list []*tables.Figure) []*tables.Figure {
+	return append(list, &r.Limit, &r.Rating, &r.StartLimit, &r.StartRating)
 }
 
-func (r *FeederResult) disconnectFigures() []tables.Figure {
-	var sum tables.Figure
+func (r *FeederResult) disconnectFigures(list []*tables.Figure) []*tables.Figure {
 	if of := r.Disconnect.Amperes.Operands(); len(of) > 0 && of[0].Op() == tables.Sum {
-		sum = of[0]
+		list = append(list, &of[0])
 	}
-	return []tables.Figure{sum, r.Disconnect.Amperes, r.Disconnect.LockedRotor}
+	return append(list, &r.Disconnect.Amperes, &r.Disconnect.LockedRotor)
 }
 
 // String returns the derivation as text: the motors with their part in the sum,
@@ -57,25 +57,25 @@ func (r FeederResult) String() string {
 	if len(r.NotCounted) > 0 {
 		fmt.Fprintf(&b, "%12s  not counted: %s\n", "", oneLine(strings.Join(r.NotCounted, ", ")))
 	}
-	write := func(heading, chosen string, figures []tables.Figure) {
+	write := func(heading, chosen string, figures []*tables.Figure) {
 		fmt.Fprintf(&b, "\n%s: %s\n", heading, chosen)
 		for _, f := range figures {
 			if !f.IsZero() {
-				writeFigure(&b, f)
+				writeFigure(&b, *f)
 			}
 		}
 	}
-	write("Feeder conductors", wires(&r.Conductors), selectionFigures(&r.Conductors))
+	write("Feeder conductors", wires(&r.Conductors), selectionFigures(nil, &r.Conductors))
 	b.WriteString(whySmallerFails(&r.Conductors))
-	write("Feeder short-circuit and ground-fault device", r.Rating.String()+" "+r.Device.Name(), r.deviceFigures())
+	write("Feeder short-circuit and ground-fault device", r.Rating.String()+" "+r.Device.Name(), r.deviceFigures(nil))
 	fmt.Fprintf(&b, "%12s  the device of %s governs\n", "", oneLine(r.Largest))
-	write("Disconnecting means of the group", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite), r.disconnectFigures())
-	write("Bonding conductor", fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why), []tables.Figure{r.Bonding.Row})
+	write("Disconnecting means of the group", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite), r.disconnectFigures(nil))
+	write("Bonding conductor", fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why), []*tables.Figure{&r.Bonding.Row})
 	if !r.Raceway.IsZero() {
-		write("Raceway", r.Raceway.Name(r.Feeder.Edition), racewayFigures(&r.Raceway))
+		write("Raceway", r.Raceway.Name(r.Feeder.Edition), racewayFigures(nil, &r.Raceway))
 	}
 	if !r.Drop.Running.IsZero() {
-		write("Voltage drop", r.Drop.Running.String(), dropFigures(&r.Drop))
+		write("Voltage drop", r.Drop.Running.String(), dropFigures(nil, &r.Drop))
 		for i, total := range r.TotalDrop {
 			if !total.IsZero() {
 				writeFigure(&b, total.Renamed("feeder and branch circuit of "+oneLine(r.Circuits[i].Circuit.Tag)))
@@ -83,7 +83,7 @@ func (r FeederResult) String() string {
 		}
 	}
 	if d := &r.FaultDuty; !d.AtMotor.IsZero() {
-		write("Fault duty", d.AtMotor.String()+" at the end of the feeder", []tables.Figure{d.Source, d.AtMotor, d.Withstand})
+		write("Fault duty", d.AtMotor.String()+" at the end of the feeder", []*tables.Figure{&d.Source, &d.AtMotor, &d.Withstand})
 	}
 	writeCautions(&b, r.Cautions)
 	return b.String()

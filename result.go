@@ -1,7 +1,6 @@
 package motorcircuit
 
 import (
-	"iter"
 	"slices"
 
 	"example.org/motorcircuit/conductor"
@@ -33,123 +32,6 @@ type Result struct {
 	Drop         VoltageDrop             `json:"voltage_drop,omitzero"`
 	FaultDuty    FaultDuty               `json:"fault_duty,omitzero"`
 	Cautions     []tables.Caution        `json:"cautions"` // assumptions, readings, limits; never empty
-}
-
-// A Section is a part of a derivation.
-type Section uint8
-
-// The sections of a derivation, in order.
-const (
-	Currents Section = iota
-	BranchConductors
-	MotorSupplyConductors
-	SecondaryConductors
-	ResistorConductors
-	WindingConductors
-	OverloadProtection
-	ShortCircuitDevice
-	DisconnectingMeans
-	ControllerRating
-	BondingConductor
-	RacewayFill
-	DropSection
-	FaultSection
-	sectionCount
-)
-
-var sectionNames = [...]string{
-	"Design currents", "Branch-circuit conductors", "Motor supply conductors", "Secondary conductors", "Conductors to the resistors", "Conductors to each winding", "Overload protection",
-	"Short-circuit and ground-fault device", "Disconnecting means", "Controller", "Bonding conductor", "Raceway", "Voltage drop", "Fault duty",
-}
-
-// String returns the section's heading.
-func (s Section) String() string { return tables.TextOf(s, sectionNames[:]) }
-
-// Figures yields every figure of the result that is present, in the order of
-// the derivation, each with its section.
-func (r Result) Figures() iter.Seq2[Section, tables.Figure] {
-	return func(yield func(Section, tables.Figure) bool) {
-		for s := range sectionCount {
-			for _, f := range r.section(s) {
-				if !f.IsZero() && !yield(s, f) {
-					return
-				}
-			}
-		}
-	}
-}
-
-func (r *Result) section(s Section) []tables.Figure {
-	d := &r.Demand
-	switch s {
-	case Currents:
-		figures := []tables.Figure{d.Table, d.Design, d.Overload, d.Input, d.LockedRotor.Low, d.LockedRotor.High}
-		if d.LockedRotor.Source != motor.FromCodeLetter {
-			figures[4] = tables.Figure{} // one figure, not the ends of a range
-		}
-		return figures
-	case BranchConductors:
-		return selectionFigures(&r.Branch)
-	case MotorSupplyConductors:
-		return selectionFigures(&r.MotorSupply)
-	case SecondaryConductors:
-		return selectionFigures(&r.Secondary)
-	case ResistorConductors:
-		return selectionFigures(&r.Resistor)
-	case WindingConductors:
-		var figures []tables.Figure
-		for i := range r.Windings {
-			figures = append(figures, selectionFigures(&r.Windings[i])...)
-		}
-		return figures
-	case OverloadProtection:
-		o := &r.Overload
-		figures := []tables.Figure{o.Limit, o.StartLimit, o.Share, o.Protector, o.Units}
-		for _, w := range o.Windings {
-			figures = append(figures, w.Limit, w.StartLimit)
-		}
-		return figures
-	case ShortCircuitDevice:
-		x := &r.ShortCircuit
-		figures := []tables.Figure{x.Limit, x.Rating, x.StartLimit, x.StartRating, x.Instantaneous, x.Half, x.Smallest}
-		if x.Device == protection.InstantaneousBreaker {
-			figures[4] = tables.Figure{} // the same as the limit
-		}
-		return figures
-	case DisconnectingMeans:
-		x := &r.Disconnect
-		return []tables.Figure{x.Amperes, x.LockedRotor, x.Sight}
-	case ControllerRating:
-		x := &r.Controller
-		return []tables.Figure{x.Amperes, x.LockedRotor, x.GeneralUse, x.SnapSwitch}
-	case BondingConductor:
-		return []tables.Figure{r.Bonding.Row}
-	case RacewayFill:
-		return append(racewayFigures(&r.Raceway), racewayFigures(&r.Flexible)...)
-	case DropSection:
-		return dropFigures(&r.Drop)
-	}
-	x := &r.FaultDuty
-	return []tables.Figure{x.Source, x.Contribution, x.AtMotor, x.LineToLine, x.Withstand}
-}
-
-func racewayFigures(x *conductor.Filled) []tables.Figure {
-	return []tables.Figure{x.Area, x.Limit, x.Percent}
-}
-
-func dropFigures(x *VoltageDrop) []tables.Figure {
-	return []tables.Figure{x.Limit, x.Running, x.Starting, x.LongestRun}
-}
-
-func selectionFigures(s *conductor.Selection) []tables.Figure {
-	if s.IsZero() {
-		return nil
-	}
-	figures := []tables.Figure{s.Required, s.LeastRating, s.Termination, s.Ambient, s.Together, s.Need, s.Ampacity, s.SmallLimit}
-	if s.Need.Cmp(s.Required) == 0 {
-		figures[5] = tables.Figure{} // nothing to correct
-	}
-	return figures
 }
 
 // supplyEnd is the rule of the other end of motor supply conductors.
@@ -202,8 +84,9 @@ func (r *Result) cautions() []tables.Caution {
 	add(r.Raceway.Cautions...)
 	add(r.Flexible.Cautions...)
 	add(r.dropCautions()...)
+	var buffer [16]*tables.Figure
 	for s := range sectionCount {
-		for _, f := range r.section(s) {
+		for _, f := range r.section(buffer[:0], s) {
 			for _, cite := range f.FromMemory() {
 				add(tables.FromMemory(cite))
 			}

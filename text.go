@@ -29,9 +29,9 @@ func (r *Result) write(b *strings.Builder) {
 	c := &r.Circuit
 	fmt.Fprintf(b, "%s: %s, under %s\n", oneLine(c.Tag), describe(r), c.Edition.Standard())
 	for s := range sectionCount {
-		lines := r.section(s)
+		lines := r.section(nil, s)
 		chosen := r.chosen(s)
-		if !slices.ContainsFunc(lines, func(f tables.Figure) bool { return !f.IsZero() }) && chosen == "" {
+		if !slices.ContainsFunc(lines, func(f *tables.Figure) bool { return !f.IsZero() }) && chosen == "" {
 			continue
 		}
 		fmt.Fprintf(b, "\n%s", s)
@@ -41,7 +41,7 @@ func (r *Result) write(b *strings.Builder) {
 		b.WriteByte('\n')
 		for _, f := range lines {
 			if !f.IsZero() {
-				writeFigure(b, f)
+				writeFigure(b, *f)
 			}
 		}
 		b.WriteString(r.remark(s))
