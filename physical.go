@@ -326,7 +326,7 @@ func (r *Result) dropCautions() (list []tables.Caution) {
 		list = append(list, tables.Caution{Text: "the voltage drop running of " + d.Running.String() + " is above " + d.Limit.String() + " for one circuit", Cite: d.Limit.Citation()})
 	}
 	if !d.Running.IsZero() && r.Circuit.Motor.Nameplate.PowerFactor.IsZero() && r.Circuit.Motor.PhaseCount() > 0 {
-		list = append(list, tables.Caution{Text: "voltage drop is reckoned with a typical power factor: " + r.lineLoad().PowerFactor.String()})
+		list = append(list, tables.Caution{Text: "voltage drop is reckoned with a typical power factor, of three-phase motors: " + r.lineLoad().PowerFactor.String()})
 	}
 	if !d.Running.IsZero() && d.Starting.IsZero() && r.Circuit.Motor.PhaseCount() > 0 {
 		list = append(list, tables.Caution{Text: "no voltage drop starting is worked out for this way of starting or without a locked-rotor current"})

@@ -1,0 +1,161 @@
+package motorcircuit
+
+import (
+	"errors"
+	"fmt"
+	"strings"
+
+	"example.org/motorcircuit/tables"
+)
+
+// A Comparison is one circuit under several editions.
+type Comparison struct {
+	Editions    []tables.Edition `json:"editions"`
+	Results     []Result         `json:"results"`     // by edition
+	Differences []Difference     `json:"differences"` // in the order of the derivation; none if the editions agree
+}
+
+// A Difference is a figure or a choice that is not the same under all editions.
+type Difference struct {
+	Section string            `json:"section"`
+	What    string            `json:"what"`
+	Values  []string          `json:"values"` // by edition; "" where an edition has none
+	Cites   []tables.Citation `json:"cites"`  // the rule behind each value, by edition
+}
+
+// An EditionError is why a circuit cannot be sized under one of the editions of
+// a comparison.
+type EditionError struct {
+	Edition tables.Edition
+	Err     error
+}
+
+func (e *EditionError) Error() string { return fmt.Sprintf("under %v: %v", e.Edition, e.Err) }
+
+// Unwrap returns the error of the edition.
+func (e *EditionError) Unwrap() error { return e.Err }
+
+// Compare sizes one circuit under several editions and tells which figures
+// differ, with the rule behind each. The circuit's own edition is not used.
+// What one edition cannot size (its insulation has another designation, say)
+// comes back as an [*EditionError], all of them joined.
+func Compare(c Circuit, editions ...tables.Edition) (Comparison, error) {
+	if len(editions) < 2 {
+		return Comparison{}, &tables.InputError{Field: "editions", Value: itoa(len(editions)), Want: "two editions at the least"}
+	}
+	x := Comparison{Editions: editions}
+	var faults []error
+	for _, e := range editions {
+		c.Edition = e
+		r, err := Size(c)
+		if err != nil {
+			faults = append(faults, &EditionError{e, err})
+			continue
+		}
+		x.Results = append(x.Results, r)
+	}
+	if err := errors.Join(faults...); err != nil {
+		return Comparison{}, err
+	}
+	x.differences()
+	return x, nil
+}
+
+// A compared is one value of a result.
+type compared struct {
+	section Section
+	what    string
+	value   string
+	cite    tables.Citation
+}
+
+// compareBy lists what results are compared by: the choices of a section, then
+// its figures.
+func (r *Result) compareBy() []compared {
+	var list []compared
+	for s := range sectionCount {
+		switch s {
+		case BranchConductors:
+			list = append(list, compared{s, "conductors", wires(&r.Branch), r.Branch.Required.Citation()})
+		case MotorSupplyConductors:
+			list = append(list, compared{s, "conductors", wires(&r.MotorSupply), r.MotorSupply.Required.Citation()})
+		case SecondaryConductors:
+			list = append(list, compared{s, "conductors", wires(&r.Secondary), r.Secondary.Required.Citation()})
+		case BondingConductor:
+			list = append(list, compared{s, "conductor", r.Bonding.Size.String(), r.Bonding.Row.Citation()})
+		case RacewayFill:
+			list = append(list, compared{s, "trade size", r.Raceway.Trade, r.Raceway.Limit.Citation()})
+		}
+		for _, f := range r.section(nil, s) {
+			if !f.IsZero() {
+				list = append(list, compared{s, f.Name(), f.String(), f.Citation()})
+			}
+		}
+	}
+	return list
+}
+
+// differences lines the values of all results up by section and name, in the
+// order in which they first come.
+func (x *Comparison) differences() {
+	type key struct {
+		section Section
+		what    string
+	}
+	at := map[key]int{}
+	var keys []key
+	var rows []Difference
+	for i := range x.Results {
+		for _, v := range x.Results[i].compareBy() {
+			k := key{v.section, v.what}
+			row, ok := at[k]
+			if !ok {
+				row = len(rows)
+				at[k], keys = row, append(keys, k)
+				rows = append(rows, Difference{Section: v.section.String(), What: v.what,
+					Values: make([]string, len(x.Results)), Cites: make([]tables.Citation, len(x.Results))})
+			}
+			rows[row].Values[i], rows[row].Cites[i] = v.value, v.cite
+		}
+	}
+	for s := range sectionCount {
+		for i, row := range rows {
+			if keys[i].section == s && row.differs() {
+				x.Differences = append(x.Differences, row)
+			}
+		}
+	}
+}
+
+func (d *Difference) differs() bool {
+	for _, v := range d.Values {
+		if v != d.Values[0] {
+			return true
+		}
+	}
+	return false
+}
+
+// String tells the differences, one value a line with its rule.
+func (x Comparison) String() string {
+	var b strings.Builder
+	if len(x.Results) > 0 {
+		fmt.Fprintf(&b, "%s: %s\n", oneLine(x.Results[0].Circuit.Tag), describe(&x.Results[0]))
+	}
+	if len(x.Differences) == 0 {
+		b.WriteString("\nno figure differs between the editions\n")
+	}
+	for _, d := range x.Differences {
+		fmt.Fprintf(&b, "\n%s, %s\n", d.Section, d.What)
+		for i, e := range x.Editions {
+			value, cite := d.Values[i], ""
+			if value == "" {
+				value = "-"
+			} else if !d.Cites[i].IsZero() {
+				cite = ref(d.Cites[i])
+			}
+			fmt.Fprintf(&b, "  %-9s %s %s\n", e, value, cite)
+		}
+	}
+	return b.String()
+}
