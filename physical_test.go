@@ -168,7 +168,7 @@ func TestDropLimits(t *testing.T) {
 // A nameplate's power factor is taken, and a direct-current motor has none.
 func TestDropPowerFactor(t *testing.T) {
 	c := longRun(tables.NEC2023, "60")
-	assert.True(t, told(circuitOf(t, c).Cautions, "typical power factor: 0.89"))
+	assert.True(t, told(circuitOf(t, c).Cautions, "typical power factor, of three-phase motors: 0.89"))
 	typical := circuitOf(t, c).Drop.Running
 	c.Motor.Nameplate.PowerFactor = motor.Factor("0.6")
 	r := circuitOf(t, c)
