@@ -172,7 +172,7 @@ func TestDropPowerFactor(t *testing.T) {
 	typical := circuitOf(t, c).Drop.Running
 	c.Motor.Nameplate.PowerFactor = motor.Factor("0.6")
 	r := circuitOf(t, c)
-	assert.False(t, told(r.Cautions, "typical power factor:"))
+	assert.False(t, told(r.Cautions, "typical power factor"))
 	assert.Less(t, r.Drop.Running.Float(), typical.Float(), "a run of resistance loses less to a reactive load")
 	c = longRun(tables.NEC2023, "60")
 	c.Motor = motor.Motor{Kind: motor.DirectCurrent, Power: motor.HP("10"), Voltage: 240}
