@@ -1,20 +1,25 @@
-// Package motorcircuit sizes electric-motor branch circuits under the
-// electrical code in force, and shows the reason for every number.
+// Package motorcircuit sizes electric-motor circuits under the electrical code
+// in force, and shows the reason for every number.
 //
 // Fill a [Circuit] and call [Size]. The [Result] holds the design currents, the
 // conductors, the overload setting, the short-circuit device, the
-// disconnecting means and the controller; each number is a [tables.Figure] that
-// knows how it was worked out and which rule or table decided it. Printed, a
-// result is a derivation that an inspector can follow; as JSON, it feeds other
-// software.
+// disconnecting means, the controller, the bonding conductor and, with a length
+// and a raceway, the fill, the voltage drop and the fault duty; each number is a
+// [tables.Figure] that knows how it was worked out and which rule or table
+// decided it. Printed, a result is a derivation that an inspector can follow; as
+// JSON, it feeds other software; [Result.Quantities] feeds a takeoff.
+//
+// [SizeFeeder] sizes the feeder of several circuits, [SizeGroup] judges several
+// motors on one branch circuit, [SizeShared] sizes several circuits in one
+// raceway, and [Compare] sizes one circuit under several editions.
 //
 // Editions covered: NFPA 70 (NEC) of 2017, 2020 and 2023; CSA C22.1 (CEC, Part
 // I) of 2021 and 2024. What a code does not tabulate is refused, never guessed.
 //
 // The packages below do each step alone: tables (editions, citations, figures,
-// the published tables), motor (currents), conductor (sizes), protection
-// (overload, devices, switches). All functions are pure and safe for concurrent
-// use.
+// the published tables), motor (currents), conductor (sizes, taps, bonding,
+// raceway, voltage drop), protection (overload, devices, switches). All
+// functions are pure and safe for concurrent use.
 //
 // The figures are an aid to design. They do not replace the printed code, local
 // amendments, equipment markings, the judgement of a licensed person or the

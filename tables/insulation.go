@@ -138,7 +138,7 @@ func loadInsulationsNEC(path string, rule *Rule, fromMemory ...string) func() *i
 	})
 }
 
-// condition drops from a note what is a remark on the transcription.
+// condition drops from a note what is a remark on the copying.
 func condition(note string) string {
 	for _, remark := range []string{"table lists dry and wet; damp implied", "damp implied", "dual rating", "exempt from the rooftop temperature adder"} {
 		note = strings.TrimPrefix(strings.TrimPrefix(note, remark), "; ")

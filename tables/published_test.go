@@ -16,7 +16,7 @@ import (
 	"example.org/motorcircuit/tables"
 )
 
-// The files of testdata/published are a second transcription of the published
+// The files of testdata/published are a second copy of the published
 // tables, typed line by line in the shape of the printed page and not made from
 // tables/data. It rests on the same copies, so it finds slips of copying and of
 // code, not misprints of a copy. Every cell goes through the public lookup under
