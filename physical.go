@@ -9,14 +9,6 @@ import (
 	"example.org/motorcircuit/tables"
 )
 
-// A VoltageDrop is the voltage lost along a circuit's own run.
-type VoltageDrop struct {
-	Running    tables.Figure `json:"running,omitzero"`     // at design current, in percent
-	Starting   tables.Figure `json:"starting,omitzero"`    // with the rotor locked, in percent
-	Limit      tables.Figure `json:"limit,omitzero"`       // what the code has for one circuit, in percent
-	LongestRun tables.Figure `json:"longest_run,omitzero"` // of the chosen conductors within the limit, in metres
-}
-
 // A FaultDuty is what a fault at the motor draws, and what stands it.
 type FaultDuty struct {
 	Source       tables.Figure `json:"source,omitzero"`       // at the beginning of the run: the least interrupting rating of the device
@@ -46,6 +38,8 @@ var (
 	mostFault  = motor.Amps("300000")
 	mostXR     = motor.Factor("100")
 )
+
+var fifteenPercent = tables.Whole("limit", tables.Percent, 15)
 
 // checkPhysical reports what of a run's voltage drop and fault duty cannot stand.
 func checkPhysical(w conductor.Wiring, drop tables.Ratio, fault tables.Current, xr tables.Ratio) error {
@@ -111,57 +105,6 @@ func bondingBase(e tables.Edition, w conductor.Wiring, s conductor.Selection, lo
 // branchLoad is what the branch-circuit conductors are asked to carry.
 func (c Circuit) branchLoad(ampacity tables.Figure) conductor.Load {
 	return conductor.Load{Ampacity: ampacity, Count: c.Motor.LineConductors(), Motor75: c.Motor.IsDesignBCD()}
-}
-
-// upsized takes the next larger size until the running drop is within a limit in
-// percent. With no limit or no length it returns the selection as it is.
-func upsized(e tables.Edition, w conductor.Wiring, s conductor.Selection, load conductor.Load, line conductor.LineLoad, most tables.Ratio) (conductor.Selection, error) {
-	if most.IsZero() || w.Length.IsZero() {
-		return s, nil
-	}
-	limit := most.Figure("limit of voltage drop")
-	w.Sets = s.Sets
-	for {
-		drop, err := w.RunningDrop(e, s, line)
-		if err != nil || drop.Cmp(limit) <= 0 {
-			return s, err
-		}
-		smaller := conductor.Rejected{Size: s.Size, Why: "its voltage drop running is " + drop.String()}
-		w.Least = s.Size.Larger()
-		if w.Least == 0 {
-			return s, &tables.NoSizeError{Field: "max_drop_percent", Need: drop, Constraint: "no size keeps the drop within " + limit.String() + " %"}
-		}
-		next, err := w.Select(e, load)
-		var none *tables.NoSizeError
-		if errors.As(err, &none) {
-			return s, &tables.NoSizeError{Field: "max_drop_percent", Need: drop, Constraint: "no size keeps the drop within " + limit.String() + " %"}
-		} else if err != nil {
-			return s, err
-		}
-		s = next
-		s.Smaller = smaller
-	}
-}
-
-// lineLoad is the running motor as a load of the branch circuit.
-func (r *Result) lineLoad() conductor.LineLoad {
-	c := &r.Circuit
-	current := r.Demand.Design
-	if !r.Demand.Input.IsZero() {
-		current = r.Demand.Input
-	}
-	l := conductor.LineLoad{Volts: c.Motor.Voltage, Phases: c.Motor.PhaseCount(), Current: current}
-	if l.Phases == 0 {
-		return l
-	}
-	l.PowerFactor = c.Motor.Nameplate.PowerFactor.Figure("nameplate power factor")
-	if l.PowerFactor.IsZero() {
-		l.PowerFactor, _ = tables.TypicalPowerFactors(r.Demand.Horsepower)
-	}
-	if l.PowerFactor.IsZero() {
-		l.PowerFactor = tables.StatedFigure("typical running power factor", 0, &typicalFactor, tables.Plain, 85, 2)
-	}
-	return l
 }
 
 // physical works out the bonding conductor, the raceway, the voltage drop and
@@ -241,57 +184,6 @@ func bondingPath(e tables.Edition, r tables.Raceway) []tables.Caution {
 	return nil
 }
 
-// startingShare is the part of the full-voltage locked-rotor current that a way
-// of starting draws from the line, exactly; 0 where it is not known.
-func startingShare(s motor.Starting) float64 {
-	switch s {
-	case motor.AcrossTheLine:
-		return 1
-	case motor.WyeDelta:
-		return 1.0 / 3
-	}
-	return 0
-}
-
-// dropLimit is what the code has for one feeder or branch circuit.
-func dropLimit(e tables.Edition) tables.Figure {
-	if e.Code() == tables.CEC {
-		return tables.StatedFigure("voltage drop of one circuit", e, &cecDropLimit, tables.Percent, 3, 0).WithNote("and 5 % from the supply")
-	}
-	return tables.StatedFigure("voltage drop of one circuit", e, &necDropNote, tables.Percent, 3, 0).WithNote("advice, not enforced")
-}
-
-func (r *Result) drops(c Circuit) (err error) {
-	if c.Wiring.Length.IsZero() {
-		return nil
-	}
-	e := c.Edition
-	l := r.lineLoad()
-	d := &r.Drop
-	d.Limit = dropLimit(e)
-	if c.Motor.Use == motor.FirePump {
-		d.Limit = tables.StatedFigure("voltage drop running of a fire pump", e, &pumpDrop, tables.Percent, 5, 0).WithNote("at 115 % of full-load current; 15 % while starting")
-	}
-	if d.Running, err = c.Wiring.RunningDrop(e, r.Branch, l); err != nil {
-		return err
-	}
-	if d.LongestRun, err = c.Wiring.LongestRun(e, r.Branch, l, d.Limit); err != nil {
-		return err
-	}
-	rotor := r.Demand.LockedRotor.High
-	if share := startingShare(c.Motor.Starting); rotor.IsZero() || share == 0 || l.Phases == 0 || c.Motor.Starting == motor.Drive {
-		return nil
-	} else if share < 1 {
-		rotor = tables.ComputedFigure("line current while starting", e, &wyeStart, tables.Ampere, rotor.Float()*share, 2, true, "a third of the locked-rotor current, rounded up to 0.01 A", rotor)
-	}
-	l.Current = rotor
-	if _, l.PowerFactor = tables.TypicalPowerFactors(r.Demand.Horsepower); l.PowerFactor.IsZero() {
-		l.PowerFactor = tables.StatedFigure("typical locked-rotor power factor", 0, &typicalFactor, tables.Plain, 35, 2)
-	}
-	d.Starting, err = c.Wiring.StartingDrop(e, r.Branch, l)
-	return err
-}
-
 // fault works out the fault duty from the fault current at the beginning of the
 // run, in amperes.
 func (r *Result) fault(c Circuit, source tables.Figure) (err error) {
@@ -324,6 +216,9 @@ func (r *Result) dropCautions() (list []tables.Caution) {
 	d := &r.Drop
 	if !d.Running.IsZero() && d.Running.Cmp(d.Limit) > 0 {
 		list = append(list, tables.Caution{Text: "the voltage drop running of " + d.Running.String() + " is above " + d.Limit.String() + " for one circuit", Cite: d.Limit.Citation()})
+	}
+	if r.Circuit.Motor.Use == motor.FirePump && d.Starting.Cmp(fifteenPercent) > 0 {
+		list = append(list, tables.Caution{Text: "the voltage drop starting of " + d.Starting.String() + " is above the 15 % that a fire pump's controller may lose", Cite: pumpDrop.In(r.Circuit.Edition)})
 	}
 	if !d.Running.IsZero() && r.Circuit.Motor.Nameplate.PowerFactor.IsZero() && r.Circuit.Motor.PhaseCount() > 0 {
 		list = append(list, tables.Caution{Text: "voltage drop is reckoned with a typical power factor, of three-phase motors: " + r.lineLoad().PowerFactor.String()})

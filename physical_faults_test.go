@@ -112,3 +112,25 @@ func TestMaxDropBeyondTheInsulation(t *testing.T) {
 	require.ErrorAs(t, err, &none)
 	assert.Equal(t, "max_drop_percent", none.Field)
 }
+
+// NFPA 70 695.7: a fire pump's running drop is taken at 115 percent of its
+// full-load current, and its starting drop is held against 15 percent.
+func TestFirePumpDrop(t *testing.T) {
+	for _, e := range necEditions {
+		plain, err := motorcircuit.Size(pumpRun(e))
+		require.NoError(t, err)
+		c := pumpRun(e)
+		c.Motor.Use = motor.FirePump
+		r, err := motorcircuit.Size(c)
+		require.NoError(t, err)
+		assert.Equal(t, "59.8 A", r.Drop.Running.Operands()[0].String()) // 1.15 × 52
+		assert.InDelta(t, plain.Drop.Running.Float()*1.15, r.Drop.Running.Float(), 0.02)
+		short := r.String()
+		assert.NotContains(t, short, "above the 15 %")
+		c.Wiring.Length = conductor.Metres("400")
+		r, err = motorcircuit.Size(c)
+		require.NoError(t, err)
+		assert.Contains(t, r.String(), "above the 15 % that a fire pump's controller may lose [695.7]")
+		assert.Contains(t, r.String(), "is above 5 % for one circuit [695.7]")
+	}
+}
