@@ -74,6 +74,7 @@ type FeederResult struct {
 	NotCounted  []string              `json:"not_counted,omitempty"` // tags of the motors without a part in the sum: of an interlock, a line or a drive that others stand for
 	Ampacity    tables.Figure         `json:"ampacity"`              // least ampacity of the feeder
 	Conductors  conductor.Selection   `json:"conductors"`            // feeder conductors
+	Count       int                   `json:"conductors_in_set"`     // conductors of each set, a neutral with them
 	Largest     string                `json:"largest_device"`        // tag of the motor whose device governs the feeder's
 	Device      tables.Device         `json:"device"`                // kind of the feeder's device
 	Limit       tables.Figure         `json:"limit"`                 // greatest feeder device
@@ -116,7 +117,9 @@ func SizeFeeder(f Feeder) (FeederResult, error) {
 		return FeederResult{}, err
 	}
 	r.ampacity(&g)
-	if r.Conductors, err = f.Wiring.Select(f.Edition, conductor.Load{Ampacity: r.Ampacity, Count: g.lines()}); err != nil {
+	var carrying int
+	r.Count, carrying = g.conductors()
+	if r.Conductors, err = f.Wiring.Select(f.Edition, conductor.Load{Ampacity: r.Ampacity, Count: carrying}); err != nil {
 		return FeederResult{}, err
 	}
 	if err := r.device(&g); err != nil {

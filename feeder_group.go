@@ -220,13 +220,35 @@ func onLine(all []*member, line string) []*member {
 	return on
 }
 
-// lines is the number of current-carrying conductors of the feeder.
-func (g *group) lines() int {
-	n := 2
+// conductors returns how many conductors a set of the feeder has, and how many of
+// them count as carrying current. Lines that single-phase motors name are lines
+// of the feeder; a motor to neutral brings a neutral, which counts beside one or
+// two lines and not beside three, whose loads balance.
+func (g *group) conductors() (pulled, carrying int) {
+	system := systemOf(g.members).result.Circuit.Motor
+	lines, named, neutral := 0, "", false
 	for i := range g.members {
-		n = max(n, g.members[i].result.Circuit.Motor.LineConductors())
+		m := &g.members[i]
+		x := m.result.Circuit.Motor
+		lines = max(lines, x.LineConductors())
+		for _, line := range []string{"A", "B", "C"} {
+			if strings.Contains(m.fc.Lines, line) && !strings.Contains(named, line) {
+				named += line
+			}
+		}
+		lower := x.PhaseCount() == 1 && systemVolts(x.Voltage) < systemVolts(system.Voltage)
+		neutral = neutral || len(m.fc.Lines) == 1 || lower
 	}
-	return n
+	if lines == 2 && named != "" { // single-phase motors alone: the lines that they name
+		lines = len(named)
+	}
+	if !neutral {
+		return lines, lines
+	}
+	if lines >= 3 {
+		return lines + 1, lines
+	}
+	return lines + 1, lines + 1
 }
 
 // checkVoltages reports circuits whose voltage no one feeder can have: all must

@@ -16,7 +16,8 @@ func (r *FeederResult) physical(g *group) error {
 	f := &r.Feeder
 	e := f.Edition
 	line := r.lineLoad(g)
-	load := conductor.Load{Ampacity: r.Ampacity, Count: g.lines()}
+	_, carrying := g.conductors()
+	load := conductor.Load{Ampacity: r.Ampacity, Count: carrying}
 	base, err := sizeByAmpacity(e, f.Wiring, r.Conductors, load)
 	if err != nil {
 		return err
@@ -32,7 +33,7 @@ func (r *FeederResult) physical(g *group) error {
 	}
 	if f.Wiring.Raceway != 0 {
 		r.Raceway, err = conductor.SelectRaceway(e, f.Wiring.Raceway, false,
-			conductor.Pull{Insulation: r.Conductors.Insulation, Size: r.Conductors.Size, Count: g.lines()},
+			conductor.Pull{Insulation: r.Conductors.Insulation, Size: r.Conductors.Size, Count: r.Count},
 			conductor.Pull{Insulation: r.Conductors.Insulation, Size: r.Bonding.Size, Count: 1})
 		if err != nil {
 			return err

@@ -100,12 +100,12 @@ func TestFeederMaxDrop(t *testing.T) {
 func TestFeederQuantities(t *testing.T) {
 	for _, e := range tables.Editions() {
 		r := fed(t, longFeeder(e, "60", "5"))
-		assert.Equal(t, map[string]string{"conductor": "184.5", "bonding_conductor": "61.5", "raceway": "60", "device": "1"}, amounts(r.Quantities()))
+		assert.Equal(t, map[string]string{"conductor": "184.5", "bonding_conductor": "61.5", "raceway": "60", "device": "1", "disconnect": "1"}, amounts(r.Quantities()))
 		assert.Equal(t, 4, r.Raceway.Conductors)
 		assert.LessOrEqual(t, r.Raceway.Area.Cmp(r.Raceway.Limit), 0)
 		bare := longFeeder(e, "60", "5")
 		bare.Wiring.Length = tables.Length{}
-		assert.Equal(t, map[string]string{"device": "1"}, amounts(fed(t, bare).Quantities()))
+		assert.Equal(t, map[string]string{"device": "1", "disconnect": "1"}, amounts(fed(t, bare).Quantities()))
 	}
 }
 

@@ -79,7 +79,8 @@ func SizeGroup(gr Group) (GroupResult, error) {
 	}
 	fr.ampacity(&g)
 	r := GroupResult{Group: gr, Circuits: fr.Circuits, Terms: fr.Terms, Ampacity: fr.Ampacity}
-	if r.Conductors, err = gr.Wiring.Select(gr.Edition, conductor.Load{Ampacity: r.Ampacity, Count: g.lines()}); err != nil {
+	_, carrying := g.conductors()
+	if r.Conductors, err = gr.Wiring.Select(gr.Edition, conductor.Load{Ampacity: r.Ampacity, Count: carrying}); err != nil {
 		return GroupResult{}, err
 	}
 	if gr.Edition.Code() == tables.CEC {

@@ -13,7 +13,7 @@ type Quantity struct {
 	Kind   string          `json:"kind"` // "conductor", "bonding_conductor", "raceway", "device", "overload", "disconnect" or "controller"
 	Item   string          `json:"item"` // what it is, in the trade's words
 	Amount decimal.Decimal `json:"amount"`
-	Unit   string          `json:"unit"` // "m" or "each"
+	Unit   string          `json:"unit"` // "m", "each" or "set": fuses come in sets, one for each ungrounded conductor
 }
 
 // MakeUp is the allowance for ends in [Result.Quantities], in metres for each
@@ -27,8 +27,8 @@ var (
 
 // Quantities lists what the branch circuit takes: conductors of the run with
 // [MakeUp] each, raceway by length, and the devices. Without a length there are
-// no lines by length; the run from controller to motor is not in it where the
-// code treats it apart.
+// no lines by length. The runs that the code treats apart are not in it: from
+// controller to motor, from slip rings, to resistors and to each winding.
 func (r Result) Quantities() []Quantity {
 	c := &r.Circuit
 	list := runQuantities(c.Edition, c.Wiring.Length, c.Motor.LineConductors(), &r.Branch, &r.Bonding, &r.Raceway)
@@ -40,7 +40,7 @@ func (r Result) Quantities() []Quantity {
 	if x := &r.ShortCircuit; x.Rating.IsZero() {
 		add("device", x.Device.Name()+", set to "+x.Limit.String())
 	} else {
-		add("device", x.Rating.String()+" "+x.Device.Name())
+		list = append(list, deviceQuantity(x.Rating, x.Device))
 	}
 	if o := &r.Overload; !o.Limit.IsZero() {
 		add("overload", "overload relay of "+unitsText(o.Units.Text()))
@@ -59,12 +59,46 @@ func unitsText(n string) string {
 
 // Quantities lists what the feeder itself takes; its circuits have their own.
 func (r FeederResult) Quantities() []Quantity {
-	lines := 2
-	for i := range r.Circuits {
-		lines = max(lines, r.Circuits[i].Circuit.Motor.LineConductors())
+	list := runQuantities(r.Feeder.Edition, r.Feeder.Wiring.Length, r.Count, &r.Conductors, &r.Bonding, &r.Raceway)
+	list = append(list, deviceQuantity(r.Rating, r.Device))
+	if item := rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, tables.Citation{}); item != "" {
+		list = append(list, Quantity{"disconnect", item, each, "each"})
 	}
-	list := runQuantities(r.Feeder.Edition, r.Feeder.Wiring.Length, lines, &r.Conductors, &r.Bonding, &r.Raceway)
-	return append(list, Quantity{"device", r.Rating.String() + " " + r.Device.Name(), each, "each"})
+	return list
+}
+
+// Quantities lists what circuits in one raceway take: the conductors and devices
+// of each, and the raceway and bonding conductor of all once, as long as the
+// longest run. The quantities of the single results count those again.
+func (s SharedResult) Quantities() []Quantity {
+	var list []Quantity
+	longest := &s.Circuits[0]
+	for i := range s.Circuits {
+		r := &s.Circuits[i]
+		if r.Circuit.Wiring.Length.Cmp(longest.Circuit.Wiring.Length) > 0 {
+			longest = r
+		}
+		for _, q := range r.Quantities() {
+			if q.Kind != "raceway" && q.Kind != "bonding_conductor" {
+				list = append(list, q)
+			}
+		}
+	}
+	for _, q := range runQuantities(longest.Circuit.Edition, longest.Circuit.Wiring.Length, 0, &longest.Branch, &s.Bonding, &s.Raceway) {
+		if q.Kind != "conductor" {
+			list = append(list, q)
+		}
+	}
+	return list
+}
+
+// deviceQuantity is one short-circuit device, or one set of fuses.
+func deviceQuantity(rating tables.Figure, device tables.Device) Quantity {
+	unit := "each"
+	if device.IsFuse() {
+		unit = "set"
+	}
+	return Quantity{"device", rating.String() + " " + device.Name(), each, unit}
 }
 
 // runQuantities lists the conductors and the raceway of a run.

@@ -131,8 +131,8 @@ func (w Wiring) Validate(e tables.Edition) error {
 	case w.DropMethod == ByTableD3 && e != tables.CEC2024:
 		add("drop_method", w.DropMethod.String(), "impedance under "+e.Standard()+": Table D3 has this form from CSA C22.1:24 on")
 	}
-	if w.Length.Cmp(longest) > 0 {
-		add("length", w.Length.String(), "at most 10000 m")
+	if l := w.Length; !l.IsZero() && (l.Metres().Sign() <= 0 || l.Cmp(longest) > 0) {
+		add("length", l.String(), "above 0, at most 10000 m")
 	}
 	if w.Least.IsMetric() {
 		add("least_size", w.Least.String(), "an AWG or kcmil size")

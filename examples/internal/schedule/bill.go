@@ -116,15 +116,16 @@ func sizeIn(item string) tables.Size {
 	return size
 }
 
-// number returns the first number of an item and the item without it.
-func number(item string) (n decimal.Decimal, without string) {
+// number returns the first number of an item, fractions as the trade writes them,
+// and the item without it.
+func number(item string) (n tables.Power, without string) {
 	words := strings.Fields(item)
 	for i, word := range words {
-		if d, err := decimal.NewFromString(word); err == nil {
-			return d, strings.Join(slices.Delete(words, i, i+1), " ")
+		if p, err := tables.ParseHP(word); err == nil {
+			return p, strings.Join(slices.Delete(words, i, i+1), " ")
 		}
 	}
-	return decimal.Decimal{}, item
+	return tables.Power{}, item
 }
 
 // price returns a line's unit price and price, "" where it has none.
@@ -135,6 +136,21 @@ func (b *bill) price(line billLine) (unit, price string, sum decimal.Decimal) {
 	}
 	sum = p.Mul(b.amounts[line])
 	return p.String(), sum.String(), sum
+}
+
+// idle counts the prices that no line of the bill has.
+func (b *bill) idle() int {
+	used := map[priced]bool{}
+	for line := range b.amounts {
+		used[priced{line.kind, line.item}] = true
+	}
+	n := 0
+	for key := range b.prices {
+		if !used[key] {
+			n++
+		}
+	}
+	return n
 }
 
 func (b *bill) csv() error {
@@ -182,8 +198,11 @@ func (b *bill) text() error {
 		if b.sample {
 			invented = " (the unit prices of the sample are invented)"
 		}
-		fmt.Fprintf(b.w, "\ntotal of what has a price: %s%s\n%d lines have none\n", total, invented, unpriced)
+		fmt.Fprintf(b.w, "\ntotal of what has a price, to 0.01: %s%s\n%d lines have none\n", total.StringFixed(2), invented, unpriced)
+		if idle := b.idle(); idle > 0 && !b.sample {
+			fmt.Fprintf(b.w, "%d prices are of nothing in the bill\n", idle)
+		}
 	}
-	_, err := fmt.Fprintf(b.w, "\n%d motors and feeders have no length: their conductors and raceway are not in the bill\nconductors include %s m each for ends\n", b.short, mc.MakeUp)
+	_, err := fmt.Fprintf(b.w, "\n%d motors and feeders have no length: their conductors and raceway are not in the bill\nruns that the code treats apart (to the motor, from slip rings, to resistors, to windings) are not in it either\nfuses are counted in sets, one for each ungrounded conductor\nconductors include %s m each for ends\n", b.short, mc.MakeUp)
 	return err
 }

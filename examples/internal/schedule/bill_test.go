@@ -12,6 +12,8 @@ import (
 	"github.com/shopspring/decimal"
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
+
+	mc "example.org/motorcircuit"
 )
 
 const onePrice = "kind,item,unit_price\nraceway,EMT 1/2,3.25\n"
@@ -39,16 +41,25 @@ func summed(t *testing.T, out string) map[string]decimal.Decimal {
 	return amounts
 }
 
-// The bill of a schedule is the sum of the bills of its rows, whatever the order
+// The bill of a schedule is the sum of its results' quantities, whatever the order
 // of the rows.
 func TestBillIsTheSumOfItsRows(t *testing.T) {
 	lines := strings.Split(strings.TrimSpace(sample), "\n")
 	want := map[string]decimal.Decimal{}
-	for _, row := range lines[1:] {
-		if status, out, _ := bills(t, lines[0]+"\n"+row+"\n", "-format", "csv"); status == allSized {
-			for key, amount := range summed(t, out) {
-				want[key] = want[key].Add(amount)
-			}
+	rows, err := openSheet(motors, strings.NewReader(sample))
+	require.NoError(t, err)
+	for {
+		r, err := rows.next()
+		if err != nil {
+			break
+		}
+		result, err := mc.Size(r.value.Circuit)
+		if err != nil {
+			continue
+		}
+		for _, q := range result.Quantities() {
+			key := q.Kind + "|" + q.Item + "|" + q.Unit
+			want[key] = want[key].Add(q.Amount)
 		}
 	}
 	require.Greater(t, len(want), 50)
@@ -71,6 +82,19 @@ func TestBillIsTheSumOfItsRows(t *testing.T) {
 	}
 }
 
+// A feeder adds its own run: (25 + 1.5) × 3 of conductor beside the motor's.
+func TestBillWithFeeders(t *testing.T) {
+	path := filepath.Join(t.TempDir(), "feeders.csv")
+	require.NoError(t, os.WriteFile(path, []byte("tag,code,termination_c,length_m\nF,NEC-2023,75,25\n"), 0o600))
+	motor := "tag,code,kind,power,volts,termination_c,length_m,feeder\nM,NEC-2023,squirrel_cage,7-1/2 hp,460,75,40,F\n"
+	status, out, _ := bills(t, motor, "-format", "csv", "-feeders", path)
+	require.Equal(t, allSized, status)
+	got := summed(t, out)
+	assert.Equal(t, "204", got["conductor|14 AWG copper THWN|m"].String()) // 124.5 + 79.5
+	assert.Equal(t, "68", got["bonding_conductor|14 AWG copper|m"].String())
+	assert.Equal(t, "2", got["disconnect|at least 12.65 A and 7-1/2 hp|each"].String())
+}
+
 // Conductors of 40 m, three lines: (40 + 1.5) × 3; the bonding conductor once, the
 // raceway without ends.
 func TestBillOfOneMotor(t *testing.T) {
@@ -80,7 +104,7 @@ func TestBillOfOneMotor(t *testing.T) {
 	got := summed(t, out)
 	for key, want := range map[string]string{
 		"conductor|14 AWG copper THWN|m": "124.5", "bonding_conductor|14 AWG copper|m": "41.5", "raceway|EMT 1/2|m": "40",
-		"device|20 A time-delay fuse|each": "1", "overload|overload relay of 3 units|each": "1", "controller|at least 7-1/2 hp|each": "1",
+		"device|20 A time-delay fuse|set": "1", "overload|overload relay of 3 units|each": "1", "controller|at least 7-1/2 hp|each": "1",
 	} {
 		assert.Equal(t, want, got[key].String(), key)
 	}
@@ -99,19 +123,27 @@ func TestBillPrices(t *testing.T) {
 	assert.Contains(t, out, "raceway,EMT 1/2,m,40,3.25,130\n")
 	assert.Contains(t, out, "bonding_conductor,14 AWG copper,m,41.5,,\n")
 	_, out, _ = bills(t, motor, "-prices", write(onePrice))
-	assert.Contains(t, out, "total of what has a price: 130\n")
+	assert.Contains(t, out, "total of what has a price, to 0.01: 130.00\n")
 	assert.NotContains(t, out, "invented")
 	for text, want := range map[string]string{
 		"": "no header", "kind,item\n": "no column unit_price", "kind,item,unit_price\na,b,-1\n": `unit_price "-1"`,
 		"kind,item,unit_price\na,b,1e9\n": `unit_price "1e9"`, "kind,item,unit_price\na,b,1\na,b,2\n": "has a price already",
 		"kind,item,unit_price\na,b\n": "wrong number of fields", "kind,item,unit_price\na,b,\n": `unit_price ""`,
+		"kind,item,unit_price\na,b,1e-5\n": `unit_price "1e-5"`, "kind,item,unit_price\na,b,+5\n": `unit_price "+5"`,
+		"kind,item,unit_price,unit_price\na,b,1,2\n": "names column unit_price twice",
 	} {
 		status, out, complaint := bills(t, motor, "-prices", write(text))
 		assert.Equal(t, cannotRun, status, text)
 		assert.Empty(t, out)
 		assert.Contains(t, complaint, want)
 	}
-	status, _, complaint := bills(t, motor, "-format", "json")
+	status, out, _ = bills(t, motor, "-prices", write("\uFEFF"+onePrice+"raceway,emt 1/2,9\n"))
+	assert.Equal(t, allSized, status)
+	assert.Contains(t, out, "1 prices are of nothing in the bill")
+	status, _, complaint := bills(t, motor, "-prices", "-")
+	assert.Equal(t, cannotRun, status)
+	assert.Contains(t, complaint, "standard input")
+	status, _, complaint = bills(t, motor, "-format", "json")
 	assert.Equal(t, cannotRun, status)
 	assert.Contains(t, complaint, "want one of text, csv")
 }
@@ -130,4 +162,15 @@ func FuzzPrices(f *testing.F) {
 			require.False(t, price.IsNegative(), "%v", key)
 		}
 	})
+}
+
+// Items stand by number, fractions too.
+func TestBillOrder(t *testing.T) {
+	n, rest := number("RMC 1-1/4")
+	assert.Equal(t, "RMC", rest)
+	for _, larger := range []string{"RMC 1-1/2", "RMC 3", "RMC 3-1/2"} {
+		m, _ := number(larger)
+		assert.Positive(t, m.Cmp(n), larger)
+		n = m
+	}
 }

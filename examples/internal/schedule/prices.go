@@ -1,6 +1,7 @@
 package schedule
 
 import (
+	"bytes"
 	"encoding/csv"
 	"errors"
 	"fmt"
@@ -8,6 +9,8 @@ import (
 	"strings"
 
 	"github.com/shopspring/decimal"
+
+	"example.org/motorcircuit/tables"
 )
 
 // A priceList is unit prices by kind and item.
@@ -37,7 +40,11 @@ func (p program) openPrices(name string, onSample bool, stdin io.Reader) (priceL
 
 // readPrices reads the columns kind, item and unit_price, in any order.
 func readPrices(r io.Reader) (priceList, error) {
-	rows, err := csv.NewReader(r).ReadAll()
+	text, err := io.ReadAll(r)
+	if err != nil {
+		return nil, err
+	}
+	rows, err := csv.NewReader(bytes.NewReader(bytes.TrimPrefix(text, []byte("\uFEFF")))).ReadAll()
 	if err != nil {
 		return nil, err
 	}
@@ -46,7 +53,11 @@ func readPrices(r io.Reader) (priceList, error) {
 	}
 	at := map[string]int{}
 	for i, name := range rows[0] {
-		at[strings.ToLower(strings.TrimSpace(name))] = i
+		name = strings.ToLower(strings.TrimSpace(name))
+		if _, twice := at[name]; twice {
+			return nil, fmt.Errorf("the header names column %s twice", clip(name))
+		}
+		at[name] = i
 	}
 	for _, name := range []string{"kind", "item", "unit_price"} {
 		if _, ok := at[name]; !ok {
@@ -57,14 +68,14 @@ func readPrices(r io.Reader) (priceList, error) {
 	for i, row := range rows[1:] {
 		key := priced{strings.TrimSpace(row[at["kind"]]), strings.TrimSpace(row[at["item"]])}
 		text := strings.TrimSpace(row[at["unit_price"]])
-		price, err := decimal.NewFromString(text)
-		if len(text) > 24 || err != nil || price.IsNegative() || price.Exponent() > 0 {
+		price, err := tables.ParseRatio(text)
+		if err != nil {
 			return nil, fmt.Errorf("row %d: unit_price %q: want a plain decimal, 0 or more", i+2, clip(text))
 		}
 		if _, twice := list[key]; twice {
 			return nil, fmt.Errorf("row %d: %s %q has a price already", i+2, key.kind, key.item)
 		}
-		list[key] = price
+		list[key] = price.Decimal()
 	}
 	return list, nil
 }

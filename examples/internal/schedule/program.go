@@ -131,6 +131,9 @@ func (p program) run(args []string, stdin io.Reader, stdout, stderr io.Writer) i
 	if err != nil {
 		return complain(err)
 	}
+	if pricesName == "-" && (feedersName == "-" || flags.Arg(0) == "-") {
+		return complain(errors.New("standard input cannot be the prices file and another input too"))
+	}
 	prices, err := p.openPrices(pricesName, flags.NArg() == 0, stdin)
 	if err != nil {
 		return complain(err)
