@@ -13,6 +13,8 @@ import (
 	"testing"
 
 	"github.com/stretchr/testify/require"
+
+	"example.org/motorcircuit/internal/testkit"
 )
 
 // TestAPI compares the exported names of every public package with the list in
@@ -24,7 +26,7 @@ func TestAPI(t *testing.T) {
 		lines = append(lines, exported(t, dir)...)
 	}
 	slices.Sort(lines)
-	checkGolden(t, "api.txt", strings.Join(slices.Compact(lines), "\n")+"\n")
+	testkit.Golden(t, "internal/testdata/api.txt", strings.Join(slices.Compact(lines), "\n")+"\n")
 }
 
 func exported(t *testing.T, dir string) (lines []string) {

@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -24,13 +25,13 @@ func TestFeederDemand(t *testing.T) {
 		assert.Equal(t, "6", r.Conductors.Size.Name(), "65 A at 75 °C")
 		if e.Code() == tables.NEC {
 			assert.Equal(t, "95 A", r.Limit.String(), "70 + 20 + 5: the factor is not for the device")
-			assert.True(t, cautioned(r.Cautions, "430.26", "demand factor"))
+			assert.True(t, testkit.Cautioned(r.Cautions, "430.26", "demand factor"))
 			continue
 		}
 		assert.Equal(t, "70 A", r.Limit.String(), "65 A of the conductors, next up, below 95")
 		assert.Equal(t, "70 A", r.Rating.String())
 		assert.Equal(t, "Rule 28-204(4)", r.Limit.Citation().Ref)
-		assert.True(t, cautioned(r.Cautions, "Rule 28-108(3)", "demand factor"))
+		assert.True(t, testkit.Cautioned(r.Cautions, "Rule 28-108(3)", "demand factor"))
 	}
 	// Where the conductors carry the limit anyway, it stands: (12.5 + 19 × 10) × 0.99
 	// = 200.475 A takes 4/0 (230 A); 17.5 + 190 = 207.5 A.
@@ -67,7 +68,7 @@ func TestFeederDrives(t *testing.T) {
 	for _, e := range everyone {
 		r := sized(t, feeder(e, drawing("vfd", "40", onDrive("36", ""))))
 		want := e == tables.NEC2017
-		assert.Equal(t, want, cautioned(r.Cautions, "430.24", "how a drive counts"), e)
+		assert.Equal(t, want, testkit.Cautioned(r.Cautions, "430.24", "how a drive counts"), e)
 	}
 }
 
@@ -102,7 +103,7 @@ func TestFeederInstantaneous(t *testing.T) {
 			if e.Code() == tables.CEC {
 				rule = "Rule 28-204(1)"
 			}
-			assert.True(t, cautioned(r.Cautions, rule, "instantaneous-trip breaker"))
+			assert.True(t, testkit.Cautioned(r.Cautions, rule, "instantaneous-trip breaker"))
 		}
 	}
 }
@@ -116,7 +117,7 @@ func TestFeederHardStart(t *testing.T) {
 		{"small one", everyone, list{drawing("a", "40"), drawing("b", "20", hardStart)}, "70 A", "a", "90 A", "90 A", "a"},
 	})
 	r := sized(t, feeder(tables.CEC2024, drawing("a", "40", hardStart)))
-	assert.True(t, cautioned(r.Cautions, "", "higher ceiling"))
+	assert.True(t, testkit.Cautioned(r.Cautions, "", "higher ceiling"))
 }
 
 // CEC Rule 28-204(2): motors that must start together count as one motor of their
@@ -209,7 +210,7 @@ func TestFeederDisconnectNEC(t *testing.T) {
 		r = sized(t, feeder(e, cage("a", "500", 460), cage("b", "10", 460)))
 		assert.True(t, r.Disconnect.Horsepower.IsZero())
 		assert.Equal(t, "694.6 A", r.Disconnect.Amperes.String(), "604 × 1.15")
-		assert.True(t, cautioned(r.Cautions, "430.110(C)(1)", "more than any horsepower"))
+		assert.True(t, testkit.Cautioned(r.Cautions, "430.110(C)(1)", "more than any horsepower"))
 	}
 }
 
@@ -244,7 +245,7 @@ func TestFeederBonding(t *testing.T) {
 		}
 		assert.Equal(t, want, r.Bonding.Size.Name())
 		assert.Equal(t, row, r.Bonding.Row.String())
-		assert.True(t, cautioned(r.Cautions, rule, "of its own"))
+		assert.True(t, testkit.Cautioned(r.Cautions, rule, "of its own"))
 	}
 }
 

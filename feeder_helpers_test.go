@@ -2,7 +2,6 @@ package motorcircuit_test
 
 import (
 	"errors"
-	"slices"
 	"strings"
 	"testing"
 
@@ -158,41 +157,22 @@ func terms(r motorcircuit.FeederResult) string {
 	return strings.Join(texts, ", ")
 }
 
-// cautioned reports a caution of a result that cites the rule and speaks of the subject.
-func cautioned(list []tables.Caution, ref, subject string) bool {
-	return slices.ContainsFunc(list, func(c tables.Caution) bool {
-		return c.Cite.Ref == ref && strings.Contains(c.Text, subject)
-	})
-}
-
 // circuitFaults returns the fields at fault by index of circuit, from joined errors.
 func circuitFaults(err error) map[int][]string {
 	found := make(map[int][]string)
 	var walk func(error, int)
 	walk = func(err error, at int) {
-		if many, ok := err.(interface{ Unwrap() []error }); ok {
-			for _, one := range many.Unwrap() {
-				walk(one, at)
+		for _, one := range tables.Faults(err) {
+			var circuit *motorcircuit.CircuitError
+			if errors.As(one, &circuit) && at < 0 {
+				walk(circuit.Err, circuit.Index)
+				continue
 			}
-			return
-		}
-		var (
-			circuit *motorcircuit.CircuitError
-			input   *tables.InputError
-			none    *tables.NotTabulatedError
-			size    *tables.NoSizeError
-		)
-		switch {
-		case errors.As(err, &circuit) && at < 0:
-			walk(circuit.Err, circuit.Index)
-		case errors.As(err, &input):
-			found[at] = append(found[at], input.Field)
-		case errors.As(err, &none):
-			found[at] = append(found[at], none.Field)
-		case errors.As(err, &size):
-			found[at] = append(found[at], size.Field)
-		default:
-			found[at] = append(found[at], "untyped")
+			field := tables.FieldOf(one)
+			if field == "" {
+				field = "untyped"
+			}
+			found[at] = append(found[at], field)
 		}
 	}
 	walk(err, -1)

@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -120,7 +121,7 @@ func TestFeederInterlocks(t *testing.T) {
 	})
 	for _, e := range everyone {
 		r := sized(t, feeder(e, seasons...))
-		assert.True(t, cautioned(r.Cautions, "", "interlocked"))
+		assert.True(t, testkit.Cautioned(r.Cautions, "", "interlocked"))
 		assert.Equal(t, "heat 37.5, fan 25, free 20", terms(r), "the set that governs is shown")
 		assert.Len(t, r.Circuits, 4, "every circuit is sized")
 	}
@@ -142,7 +143,7 @@ func TestFeederLines(t *testing.T) {
 		{"between lines", everyone, list{single("a", "3", 208, "AB"), single("b", "3", 208, "CA")}, "42.075 A", "a", "", "", ""},
 	})
 	r := sized(t, feeder(tables.NEC2023, pump, single("fan", "2", 115, "A")))
-	assert.True(t, cautioned(r.Cautions, "", "line of most load"))
+	assert.True(t, testkit.Cautioned(r.Cautions, "", "line of most load"))
 }
 
 // Other loads: NEC 430.24(3), (4) a continuous one at 125 percent, any other at

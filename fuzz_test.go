@@ -91,31 +91,28 @@ func FuzzSize(f *testing.F) {
 	})
 }
 
-// requireNamed holds that every joined error is typed and names its field.
+// requireNamed holds that every fault is typed and names its field.
 func requireNamed(t *testing.T, err error) {
 	t.Helper()
-	if many, ok := err.(interface{ Unwrap() []error }); ok {
-		for _, one := range many.Unwrap() {
-			requireNamed(t, one)
+	for _, one := range tables.Faults(err) {
+		var (
+			input *tables.InputError
+			none  *tables.NotTabulatedError
+			size  *tables.NoSizeError
+		)
+		switch within := errors.Unwrap(one); {
+		case within != nil: // the faults of a circuit
+			requireNamed(t, within)
+			continue
+		case errors.As(one, &input):
+			require.NotEmpty(t, input.Want)
+		case errors.As(one, &none):
+			require.NotEmpty(t, none.Covers)
+		case errors.As(one, &size):
+			require.NotEmpty(t, size.Constraint)
+		default:
+			t.Fatalf("an error that is not typed: %v", one)
 		}
-		return
-	}
-	var (
-		input *tables.InputError
-		none  *tables.NotTabulatedError
-		size  *tables.NoSizeError
-	)
-	switch {
-	case errors.As(err, &input):
-		require.NotEmpty(t, input.Field)
-		require.NotEmpty(t, input.Want)
-	case errors.As(err, &none):
-		require.NotEmpty(t, none.Field)
-		require.NotEmpty(t, none.Covers)
-	case errors.As(err, &size):
-		require.NotEmpty(t, size.Field)
-		require.NotEmpty(t, size.Constraint)
-	default:
-		t.Fatalf("an error that is not typed: %v", err)
+		require.NotEmpty(t, tables.FieldOf(one))
 	}
 }

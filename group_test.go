@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -221,7 +222,7 @@ func TestGroupConductors(t *testing.T) {
 		assert.Equal(t, "78.5 A", r.Ampacity.String(), "50 + 20 + 8.5")
 		assert.Len(t, r.Terms, 3)
 		assert.Equal(t, "b", r.Circuits[0].Circuit.Tag, "in the order given")
-		assert.True(t, cautioned(r.Cautions, "", "overload protection"))
+		assert.True(t, testkit.Cautioned(r.Cautions, "", "overload protection"))
 	}
 }
 

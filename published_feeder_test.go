@@ -9,6 +9,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -112,7 +113,7 @@ func TestPublishedFeeders(t *testing.T) {
 					held++
 				}
 				if e == newest[x.code] {
-					checkGolden(t, "golden/"+x.id+".txt", r.String())
+					testkit.Golden(t, "internal/testdata/golden/"+x.id+".txt", r.String())
 				}
 			})
 		}

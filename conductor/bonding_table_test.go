@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -98,7 +99,7 @@ func TestBondingInParallel(t *testing.T) {
 				want, rule = tt.cec, "Rule 10-616(4)"
 			}
 			assert.Equal(t, want, b.Size.Name(), "%v %s A", e, tt.device)
-			assert.True(t, cautioned(b.Cautions, rule, "of its own"))
+			assert.True(t, testkit.Cautioned(b.Cautions, rule, "of its own"))
 		}
 	}
 }
@@ -110,11 +111,11 @@ func TestBondingRefusals(t *testing.T) {
 		require.NoError(t, err)
 		assert.Equal(t, "800", b.Size.Name())
 		b, err = conductor.SelectBonding(e, amps("6000.01"), circuit(tables.Copper, "2000", 1), 0)
-		assert.Equal(t, "device", field(err))
+		assert.Equal(t, "device", tables.FieldOf(err))
 		assert.True(t, b.IsZero())
 	}
 	_, err := conductor.SelectBonding(0, amps("20"), circuit(tables.Copper, "14", 1), 0)
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 	_, err = conductor.SelectBonding(tables.NEC2023, amps("20"), circuit(9, "14", 1), 0)
-	assert.Equal(t, "wiring.material", field(err))
+	assert.Equal(t, "wiring.material", tables.FieldOf(err))
 }

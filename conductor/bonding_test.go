@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -91,7 +92,7 @@ func TestBondingOfSets(t *testing.T) {
 			want, ref = "3", "Rule 10-616(4)" // 400 A each
 		}
 		assert.Equal(t, want, b.Size.Name())
-		assert.True(t, cautioned(b.Cautions, ref, "bonding conductor of its own"))
+		assert.True(t, testkit.Cautioned(b.Cautions, ref, "bonding conductor of its own"))
 	}
 }
 

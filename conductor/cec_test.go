@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -81,12 +82,12 @@ func TestReadingsCEC(t *testing.T) {
 				assert.Equal(t, tt.strict, s.Size.String())
 				assert.Equal(t, tt.strictAmps, s.Ampacity.String())
 				corrected := tt.name != "nothing to correct"
-				assert.Equal(t, corrected, cautioned(s.Cautions, "Rules 4-004 and 4-006", "the stricter reading"))
+				assert.Equal(t, corrected, testkit.Cautioned(s.Cautions, "Rules 4-004 and 4-006", "the stricter reading"))
 				w.Reading = conductor.CorrectInsulation
 				s = chosen(t, w, e, load(tt.amps))
 				assert.Equal(t, tt.loose, s.Size.String())
 				assert.Equal(t, tt.looseAmps, s.Ampacity.String())
-				assert.Equal(t, corrected, cautioned(s.Cautions, "Rules 4-004 and 4-006", "the less strict reading"))
+				assert.Equal(t, corrected, testkit.Cautioned(s.Cautions, "Rules 4-004 and 4-006", "the less strict reading"))
 			})
 		}
 	}
@@ -122,7 +123,7 @@ func TestFreeAirCEC(t *testing.T) {
 			if tt.conductors > 4 {
 				table = "Table 2"
 			}
-			assert.True(t, rests(s.Ampacity, table), "%d conductors", tt.conductors)
+			assert.True(t, testkit.Rests(s.Ampacity, table), "%d conductors", tt.conductors)
 		}
 	}
 }
@@ -133,10 +134,10 @@ func TestAluminumCEC(t *testing.T) {
 		w := conductor.Wiring{Material: conductor.Aluminum, Insulation: "RW90", Termination: 75}
 		s := chosen(t, w, e, load("100"))
 		assert.Equal(t, "1 AWG", s.Size.String(), "Table 4, 75 °C: 100 A; 2 AWG 90 A")
-		assert.True(t, rests(s.Ampacity, "Table 4"))
+		assert.True(t, testkit.Rests(s.Ampacity, "Table 4"))
 		w.Run = tables.InFreeAir
 		s = chosen(t, w, e, load("100"))
 		assert.Equal(t, "4 AWG", s.Size.String(), "Table 3, 75 °C: 100 A; 6 AWG 75 A")
-		assert.True(t, rests(s.Ampacity, "Table 3"))
+		assert.True(t, testkit.Rests(s.Ampacity, "Table 3"))
 	}
 }

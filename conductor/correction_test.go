@@ -131,7 +131,7 @@ func TestOwnConductors(t *testing.T) {
 		l.Count = 6
 		for _, run := range []tables.Run{tables.InRaceway, tables.InCable, tables.InFreeAir} {
 			_, err := conductor.Wiring{Conductors: 5, Run: run}.Select(e, l)
-			assert.Equal(t, "wiring.conductors", field(err))
+			assert.Equal(t, "wiring.conductors", tables.FieldOf(err))
 		}
 		_, err := conductor.Wiring{Conductors: 6}.Select(e, l)
 		assert.NoError(t, err)

@@ -8,6 +8,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -22,7 +23,7 @@ func TestDropByTableD3(t *testing.T) {
 		f, err := w.RunningDrop(tables.CEC2024, s, l)
 		require.NoError(t, err)
 		assert.Equal(t, want, f.String(), awg)
-		assert.True(t, rests(f, "Table D3"))
+		assert.True(t, testkit.Rests(f, "Table D3"))
 		// Operation at 90 °C 5 percent more, at 60 °C 5 percent less.
 		for _, x := range []struct {
 			celsius int
@@ -82,10 +83,10 @@ func TestDropMethodText(t *testing.T) {
 		if e == tables.CEC2024 {
 			assert.NoError(t, err)
 		} else {
-			assert.Equal(t, "wiring.drop_method", field(err), e.String())
+			assert.Equal(t, "wiring.drop_method", tables.FieldOf(err), e.String())
 		}
-		assert.Equal(t, "wiring.drop_method", field(conductor.Wiring{DropMethod: 9}.Validate(e)))
-		assert.Equal(t, "wiring.flexible", field(conductor.Wiring{Flexible: conductor.EMT}.Validate(e)))
+		assert.Equal(t, "wiring.drop_method", tables.FieldOf(conductor.Wiring{DropMethod: 9}.Validate(e)))
+		assert.Equal(t, "wiring.flexible", tables.FieldOf(conductor.Wiring{Flexible: conductor.EMT}.Validate(e)))
 		assert.NoError(t, conductor.Wiring{Flexible: conductor.LFMC}.Validate(e))
 	}
 }
@@ -104,10 +105,10 @@ func TestTransformerFault(t *testing.T) {
 	assert.Equal(t, "5209 A", single.String()) // 104.17 A × 50, rounded up
 	for _, bad := range []conductor.Transformer{{}, {KVA: x.KVA}, {Percent: x.Percent}} {
 		_, err := bad.Fault(tables.NEC2023, 480, 3)
-		assert.Contains(t, field(err), "transformer.")
+		assert.Contains(t, tables.FieldOf(err), "transformer.")
 	}
 	_, err = x.Fault(tables.NEC2023, 0, 3)
-	assert.Equal(t, "transformer.volts", field(err))
+	assert.Equal(t, "transformer.volts", tables.FieldOf(err))
 	_, err = x.Fault(0, 480, 3)
 	assert.Error(t, err)
 }

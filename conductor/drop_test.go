@@ -9,6 +9,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -47,7 +48,7 @@ func TestDropFigures(t *testing.T) {
 		f := running(t, e, conductor.Copper, "4", "200 ft", conductor.RMC, line("65", "0.85"))
 		assert.Equal(t, "1.39 %", f.String())
 		assert.Equal(t, "IEEE 141-1993 3.11", f.Citation().Ref)
-		assert.True(t, rests(f, "NFPA 70 Chapter 9 Table 9"))
+		assert.True(t, testkit.Rests(f, "NFPA 70 Chapter 9 Table 9"))
 		w, s := run(t, e, conductor.Copper, "4", "200 ft", conductor.RMC)
 		f, err := w.StartingDrop(e, s, line("363", "0.36"))
 		require.NoError(t, err)
@@ -100,8 +101,8 @@ func TestDropDirectCurrent(t *testing.T) {
 	l := conductor.LineLoad{Volts: 240, Current: amps("40")}
 	f := running(t, tables.NEC2023, conductor.Copper, "8", "200 ft", conductor.EMT, l)
 	assert.Equal(t, "5.19 %", f.String())
-	assert.True(t, rests(f, "NFPA 70 Chapter 9 Table 8"))
-	assert.False(t, rests(f, "NFPA 70 Chapter 9 Table 9"))
+	assert.True(t, testkit.Rests(f, "NFPA 70 Chapter 9 Table 8"))
+	assert.False(t, testkit.Rests(f, "NFPA 70 Chapter 9 Table 9"))
 }
 
 // The run is as warm as its terminals: Table 8 note 2, 0.00323 per °C for copper

@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -17,7 +18,7 @@ func TestMotorSupplySixtyDegreeWire(t *testing.T) {
 		s, err := conductor.Wiring{Insulation: "TW"}.SelectMotorSupply(e, load("80"), conductor.MotorEnd{InsulationClass: "B"})
 		require.NoError(t, err)
 		assert.Equal(t, "75 °C insulation", s.Insulation)
-		assert.True(t, cautioned(s.Cautions, "Rule 28-104", "spliced"))
+		assert.True(t, testkit.Cautioned(s.Cautions, "Rule 28-104", "spliced"))
 	}
 }
 
@@ -25,7 +26,7 @@ func TestMotorSupplySixtyDegreeWire(t *testing.T) {
 func TestSelectNeedsALoad(t *testing.T) {
 	for _, e := range tables.Editions() {
 		_, err := conductor.Wiring{}.Select(e, conductor.Load{Count: 3})
-		assert.Equal(t, "load.ampacity", field(err))
+		assert.Equal(t, "load.ampacity", tables.FieldOf(err))
 	}
 }
 

@@ -38,8 +38,8 @@ func FuzzSelect(f *testing.F) {
 			if !s.IsZero() || !s.Required.IsZero() || s.Cautions != nil {
 				t.Fatalf("%+v: error %v with a selection", w, err)
 			}
-			for _, one := range leaves(err) {
-				name := field(one)
+			for _, one := range tables.Faults(err) {
+				name := tables.FieldOf(one)
 				if name != "edition" && name != "wiring" && name != "load.ampacity" && name != "motor.nameplate.insulation_class" && !strings.HasPrefix(name, "wiring.") {
 					t.Fatalf("%+v: error %v names %q", w, one, name)
 				}

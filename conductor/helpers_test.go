@@ -1,8 +1,6 @@
 package conductor_test
 
 import (
-	"errors"
-	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -37,55 +35,4 @@ func chosen(t *testing.T, w conductor.Wiring, e tables.Edition, l conductor.Load
 	s, err := w.Select(e, l)
 	require.NoError(t, err)
 	return s
-}
-
-// cautioned reports a caution that cites the rule and speaks of the subject.
-func cautioned(list []tables.Caution, ref, subject string) bool {
-	for _, c := range list {
-		if c.Cite.Ref == ref && strings.Contains(c.Text, subject) {
-			return true
-		}
-	}
-	return false
-}
-
-// rests reports whether a figure rests on a rule or table.
-func rests(f tables.Figure, ref string) bool {
-	for _, c := range f.Citations() {
-		if c.Ref == ref {
-			return true
-		}
-	}
-	return false
-}
-
-// leaves takes joined errors apart.
-func leaves(err error) []error {
-	if joined, ok := err.(interface{ Unwrap() []error }); ok {
-		var all []error
-		for _, e := range joined.Unwrap() {
-			all = append(all, leaves(e)...)
-		}
-		return all
-	}
-	if err == nil {
-		return nil
-	}
-	return []error{err}
-}
-
-// field returns the field path that a typed error names, "" for another error.
-func field(err error) string {
-	var input *tables.InputError
-	var table *tables.NotTabulatedError
-	var none *tables.NoSizeError
-	switch {
-	case errors.As(err, &input):
-		return input.Field
-	case errors.As(err, &table):
-		return table.Field
-	case errors.As(err, &none):
-		return none.Field
-	}
-	return ""
 }

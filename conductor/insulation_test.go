@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -76,7 +77,7 @@ func TestCablesInRaceway(t *testing.T) {
 			if allowed {
 				assert.NoError(t, err, insulation)
 			} else {
-				assert.Equal(t, "wiring.insulation", field(err), insulation)
+				assert.Equal(t, "wiring.insulation", tables.FieldOf(err), insulation)
 				assert.ErrorContains(t, err, "raceway", insulation)
 			}
 			for _, run := range []tables.Run{tables.InCable, tables.InFreeAir} {
@@ -91,17 +92,17 @@ func TestCablesInRaceway(t *testing.T) {
 // Conditions of use that the table notes are told.
 func TestInsulationNotes(t *testing.T) {
 	s := chosen(t, conductor.Wiring{Insulation: "UF"}, tables.NEC2023, load("20"))
-	assert.True(t, cautioned(s.Cautions, "Table 310.4(1)", "Article 340"))
+	assert.True(t, testkit.Cautioned(s.Cautions, "Table 310.4(1)", "Article 340"))
 	s = chosen(t, conductor.Wiring{Insulation: "TECK90"}, tables.CEC2024, load("20"))
-	assert.True(t, cautioned(s.Cautions, "Table 19", "jacket"))
+	assert.True(t, testkit.Cautioned(s.Cautions, "Table 19", "jacket"))
 	s = chosen(t, conductor.Wiring{Insulation: "XHHW"}, tables.NEC2023, load("20"))
-	assert.False(t, cautioned(s.Cautions, "Table 310.4(1)", ""), "no conditions")
+	assert.False(t, testkit.Cautioned(s.Cautions, "Table 310.4(1)", ""), "no conditions")
 }
 
 // The CEC's types are not the NEC's.
 func TestForeignInsulation(t *testing.T) {
 	for e, insulation := range map[tables.Edition]string{tables.NEC2023: "RW90", tables.NEC2017: "TECK90", tables.CEC2021: "THHN", tables.CEC2024: "XHHW-2"} {
 		_, err := conductor.Wiring{Insulation: insulation}.Select(e, load("20"))
-		assert.Equal(t, "wiring.insulation", field(err))
+		assert.Equal(t, "wiring.insulation", tables.FieldOf(err))
 	}
 }

@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -75,7 +76,7 @@ func TestSmallConductorsTold(t *testing.T) {
 			assert.Equal(t, tt.amps+" A", s.Ampacity.String())
 			assert.Equal(t, tt.limit, s.SmallLimit.String())
 			assert.Equal(t, ref, s.SmallLimit.Citation().Ref)
-			assert.Equal(t, tt.limit != "", cautioned(s.Cautions, told, "small-conductor"), "%v %v", tt.size, e)
+			assert.Equal(t, tt.limit != "", testkit.Cautioned(s.Cautions, told, "small-conductor"), "%v %v", tt.size, e)
 		}
 	}
 }
@@ -109,7 +110,7 @@ func TestLargestSizeNEC(t *testing.T) {
 				if e == tables.NEC2017 {
 					ref = "310.10(H)"
 				}
-				assert.True(t, cautioned(s.Cautions, ref, "parallel"))
+				assert.True(t, testkit.Cautioned(s.Cautions, ref, "parallel"))
 			}
 		}
 	}

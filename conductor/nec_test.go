@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -93,7 +94,7 @@ func TestRooftopNEC(t *testing.T) {
 				if e == tables.NEC2017 {
 					ref = "310.15(B)(3)(c)"
 				}
-				assert.Equal(t, tt.factor != "0.91", cautioned(s.Cautions, ref, "33 °C added"))
+				assert.Equal(t, tt.factor != "0.91", testkit.Cautioned(s.Cautions, ref, "33 °C added"))
 			})
 		}
 	}
@@ -119,10 +120,10 @@ func TestCitationsNEC(t *testing.T) {
 			assert.Equal(t, tt.ambient, s.Ambient.Citation().Ref)
 			assert.Equal(t, tt.together, s.Together.Citation().Ref)
 			assert.Equal(t, tt.correct, s.Need.Citation().Ref)
-			assert.True(t, rests(s.Ampacity, tt.ampacity))
-			assert.True(t, rests(s.Ampacity, "110.14(C)"))
+			assert.True(t, testkit.Rests(s.Ampacity, tt.ampacity))
+			assert.True(t, testkit.Rests(s.Ampacity, "110.14(C)"))
 			w.Run, w.Conductors = tables.InFreeAir, 0
-			assert.True(t, rests(chosen(t, w, tt.e, load("60")).Ampacity, tt.freeAir))
+			assert.True(t, testkit.Rests(chosen(t, w, tt.e, load("60")).Ampacity, tt.freeAir))
 			assert.Equal(t, tt.least, chosen(t, conductor.Wiring{}, tt.e, load("1")).Smaller.Cite.Ref)
 			assert.Equal(t, tt.parallel, chosen(t, conductor.Wiring{Sets: 2}, tt.e, load("1")).Smaller.Cite.Ref)
 		})

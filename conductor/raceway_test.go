@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -150,7 +151,7 @@ func TestJamming(t *testing.T) {
 				if s.Metric == f.Metric {
 					ratio := s.Diameter.Float() / d.Float()
 					jams := ratio >= 2.8 && ratio <= 3.2
-					assert.Equal(t, jams, cautioned(f.Cautions, "Chapter 9 Table 1", "jam"), "%s in %s %s: %v", awg, r.Name(), s.Trade, ratio)
+					assert.Equal(t, jams, testkit.Cautioned(f.Cautions, "Chapter 9 Table 1", "jam"), "%s in %s %s: %v", awg, r.Name(), s.Trade, ratio)
 					if jams {
 						told++
 					} else {
@@ -196,12 +197,12 @@ func TestRacewayErrors(t *testing.T) {
 		assert.False(t, none.Need.IsZero())
 		for _, pulls := range [][]conductor.Pull{nil, {pull("TW", "6", 0)}} {
 			_, err = conductor.SelectRaceway(e, conductor.EMT, false, pulls...)
-			assert.Equal(t, "wiring.raceway", field(err))
+			assert.Equal(t, "wiring.raceway", tables.FieldOf(err))
 		}
 		_, err = conductor.SelectRaceway(e, 0, false, pull("TW", "6", 3))
-		assert.Equal(t, "wiring.raceway", field(err))
+		assert.Equal(t, "wiring.raceway", tables.FieldOf(err))
 		_, err = conductor.SelectRaceway(e, conductor.EMT, false, pull("TW", "18", 3))
-		assert.Equal(t, "wiring.insulation", field(err))
+		assert.Equal(t, "wiring.insulation", tables.FieldOf(err))
 	}
 	assert.Empty(t, conductor.Filled{}.Name(tables.NEC2023))
 }

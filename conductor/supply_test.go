@@ -8,6 +8,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -45,16 +46,16 @@ func TestMotorSupplyColumn(t *testing.T) {
 				s, err := w.SelectMotorSupply(e, load(tt.amps), conductor.MotorEnd{InsulationClass: tt.class, NonVentilated: tt.closed})
 				require.NoError(t, err)
 				assert.Equal(t, tt.least, s.LeastRating.String())
-				assert.True(t, rests(s.LeastRating, "Table 37"))
+				assert.True(t, testkit.Rests(s.LeastRating, "Table 37"))
 				assert.Equal(t, tt.column, s.Termination.String())
 				assert.Equal(t, "Rule 28-104", s.Termination.Citation().Ref)
 				assert.Equal(t, tt.size, s.Size.String())
 				assert.Equal(t, tt.ampacity, s.Ampacity.String())
 				assert.Equal(t, tt.used, s.Insulation)
 				apart := tt.least != "75 °C"
-				assert.Equal(t, apart, cautioned(s.Cautions, "Rule 28-104", "at least 1.2 m"))
-				assert.Equal(t, tt.used != tt.insulation, cautioned(s.Cautions, "Rule 28-104", "spliced"))
-				assert.Equal(t, tt.class == "", cautioned(s.Cautions, "Table 37", "class B taken"))
+				assert.Equal(t, apart, testkit.Cautioned(s.Cautions, "Rule 28-104", "at least 1.2 m"))
+				assert.Equal(t, tt.used != tt.insulation, testkit.Cautioned(s.Cautions, "Rule 28-104", "spliced"))
+				assert.Equal(t, tt.class == "", testkit.Cautioned(s.Cautions, "Table 37", "class B taken"))
 			})
 		}
 	}
@@ -123,12 +124,12 @@ func TestMotorSupplyRefused(t *testing.T) {
 	}
 	for _, e := range cecEditions {
 		_, err := conductor.Wiring{}.SelectMotorSupply(e, load("80"), conductor.MotorEnd{InsulationClass: "Z"})
-		assert.Equal(t, "motor.nameplate.insulation_class", field(err))
+		assert.Equal(t, "motor.nameplate.insulation_class", tables.FieldOf(err))
 		_, err = conductor.Wiring{Insulation: "THHN"}.SelectMotorSupply(e, load("80"), conductor.MotorEnd{})
-		assert.Equal(t, "wiring.insulation", field(err))
+		assert.Equal(t, "wiring.insulation", tables.FieldOf(err))
 		_, err = conductor.Wiring{Conductors: 2}.SelectMotorSupply(e, load("80"), conductor.MotorEnd{})
-		assert.Equal(t, "wiring.conductors", field(err))
+		assert.Equal(t, "wiring.conductors", tables.FieldOf(err))
 	}
 	_, err := conductor.Wiring{}.SelectMotorSupply(0, load("80"), conductor.MotorEnd{})
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 }

@@ -144,11 +144,11 @@ func TestTapRefusals(t *testing.T) {
 		"tap.device": func(t *conductor.Tap) { t.Device = tables.Figure{} },
 	} {
 		f, err := tap("3 m", true, clear).Ampacity(tables.NEC2023)
-		assert.Equal(t, name, field(err))
+		assert.Equal(t, name, tables.FieldOf(err))
 		assert.True(t, f.IsZero())
 	}
 	_, err := tap("3 m", true).Ampacity(0)
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 	// A length that is not given is not a short one.
 	none := tap("3 m", true)
 	none.Length = tables.Length{}

@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/tables"
 )
 
@@ -68,8 +69,8 @@ func TestTerminationTemperature(t *testing.T) {
 // Terminals of 90 °C are rare below 1000 V: told under the NEC.
 func TestTerminals90Told(t *testing.T) {
 	for _, e := range necEditions {
-		assert.True(t, cautioned(chosen(t, conductor.Wiring{Insulation: "THHN", Termination: 90}, e, load("95")).Cautions, "110.14(C)(1)", "90 °C"))
-		assert.False(t, cautioned(chosen(t, conductor.Wiring{Insulation: "THHN", Termination: 75}, e, load("95")).Cautions, "110.14(C)(1)", "90 °C"))
+		assert.True(t, testkit.Cautioned(chosen(t, conductor.Wiring{Insulation: "THHN", Termination: 90}, e, load("95")).Cautions, "110.14(C)(1)", "90 °C"))
+		assert.False(t, testkit.Cautioned(chosen(t, conductor.Wiring{Insulation: "THHN", Termination: 75}, e, load("95")).Cautions, "110.14(C)(1)", "90 °C"))
 	}
 }
 

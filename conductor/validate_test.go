@@ -39,7 +39,7 @@ func TestValidateFields(t *testing.T) {
 				var w conductor.Wiring
 				require.NoError(t, w.Validate(e))
 				tt.set(&w)
-				list := leaves(w.Validate(e))
+				list := tables.Faults(w.Validate(e))
 				require.Len(t, list, 1, "%v", w.Validate(e))
 				var input *tables.InputError
 				require.ErrorAs(t, list[0], &input)
@@ -81,7 +81,7 @@ func TestValidateAmbient(t *testing.T) {
 func TestRooftopCEC(t *testing.T) {
 	w := conductor.Wiring{Rooftop: true}
 	for _, e := range cecEditions {
-		assert.Equal(t, "wiring.rooftop", field(w.Validate(e)))
+		assert.Equal(t, "wiring.rooftop", tables.FieldOf(w.Validate(e)))
 	}
 	for _, e := range necEditions {
 		assert.NoError(t, w.Validate(e))
@@ -99,7 +99,7 @@ func TestValidateJoins(t *testing.T) {
 		}
 		_, err := w.Select(e, load("10"))
 		var got []string
-		for _, one := range leaves(err) {
+		for _, one := range tables.Faults(err) {
 			var input *tables.InputError
 			require.ErrorAs(t, one, &input)
 			got = append(got, input.Field)
@@ -111,7 +111,7 @@ func TestValidateJoins(t *testing.T) {
 func TestSelectNeedsAnEdition(t *testing.T) {
 	for _, e := range []tables.Edition{0, 99} {
 		_, err := conductor.Wiring{}.Select(e, load("10"))
-		assert.Equal(t, "edition", field(err))
+		assert.Equal(t, "edition", tables.FieldOf(err))
 	}
 }
 
@@ -125,7 +125,7 @@ func TestReadingText(t *testing.T) {
 		assert.Equal(t, want, got)
 	}
 	got := conductor.CorrectInsulation
-	assert.Equal(t, "wiring.reading", field(got.UnmarshalText([]byte("both"))))
+	assert.Equal(t, "wiring.reading", tables.FieldOf(got.UnmarshalText([]byte("both"))))
 	assert.Zero(t, got, "an error resets the value")
 	printed, err := conductor.CorrectInsulation.MarshalText()
 	require.NoError(t, err)

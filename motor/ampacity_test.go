@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -82,7 +83,7 @@ func TestDutyAmpacity(t *testing.T) {
 				assert.Equal(t, tt.want, d.Supply.String())
 			}
 			assert.Equal(t, rule, ref(d.Branch))
-			assert.True(t, rests(d.Branch, table))
+			assert.True(t, testkit.Rests(d.Branch, table))
 		}
 	}
 }
@@ -202,7 +203,7 @@ func TestSecondaryAmpacity(t *testing.T) {
 func TestTwoPhaseCaution(t *testing.T) {
 	m := motor.Motor{Kind: motor.SquirrelCage, Phases: 2, Power: motor.HP("10"), Voltage: 230}
 	for _, e := range necEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "Table 430.249", "1.41"))
-		assert.False(t, cautioned(demand(t, cage50(), e).Cautions, "Table 430.249", "1.41"))
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "Table 430.249", "1.41"))
+		assert.False(t, testkit.Cautioned(demand(t, cage50(), e).Cautions, "Table 430.249", "1.41"))
 	}
 }

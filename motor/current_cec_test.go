@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -92,7 +93,7 @@ func TestBranchSelectionCEC(t *testing.T) {
 		assert.Equal(t, "40 A", d.Design.String())
 		assert.Equal(t, "38 A", d.Overload.String(), "28-710: of rated-load current")
 		assert.Equal(t, "Rule 28-710", ref(d.Overload))
-		assert.True(t, cautioned(d.Cautions, "Rule 28-706", "branch-circuit selection"))
+		assert.True(t, testkit.Cautioned(d.Cautions, "Rule 28-706", "branch-circuit selection"))
 		assert.Equal(t, "42 A", demand(t, compressor("42", "40", ""), e).Design.String())
 	}
 }
@@ -120,7 +121,7 @@ func TestCurrentsRefusedCEC(t *testing.T) {
 				d, err := tt.m.Demand(e)
 				require.Error(t, err)
 				assert.Equal(t, motor.Demand{}, d)
-				assert.Equal(t, tt.field, field(err))
+				assert.Equal(t, tt.field, tables.FieldOf(err))
 				assert.Contains(t, err.Error(), e.Standard()+" "+tt.ref)
 			})
 		}

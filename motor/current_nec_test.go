@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -104,7 +105,7 @@ func TestSixPoles(t *testing.T) {
 		m := marked50()
 		m.Nameplate.SpeedRPM = rpm
 		for _, e := range necEditions {
-			assert.Equal(t, want, cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "1200"), "%d r/min %v", rpm, e)
+			assert.Equal(t, want, testkit.Cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "1200"), "%d r/min %v", rpm, e)
 		}
 	}
 }
@@ -115,8 +116,8 @@ func TestOverloadWithoutNameplateNEC(t *testing.T) {
 		d := demand(t, cage50(), e)
 		assert.Equal(t, "65 A", d.Overload.String(), "430.6(A)(2) asks for the nameplate")
 		assert.Equal(t, tables.Assumed, d.Overload.Op())
-		assert.True(t, cautioned(d.Cautions, "430.6(A)(2)", "no nameplate current"), e)
-		assert.False(t, cautioned(demand(t, marked50(), e).Cautions, "430.6(A)(2)", "no nameplate current"), e)
+		assert.True(t, testkit.Cautioned(d.Cautions, "430.6(A)(2)", "no nameplate current"), e)
+		assert.False(t, testkit.Cautioned(demand(t, marked50(), e).Cautions, "430.6(A)(2)", "no nameplate current"), e)
 	}
 }
 
@@ -166,7 +167,7 @@ func TestCurrentsRefusedNEC(t *testing.T) {
 				d, err := tt.m.Demand(e)
 				require.Error(t, err)
 				assert.Equal(t, motor.Demand{}, d)
-				assert.Equal(t, tt.field, field(err))
+				assert.Equal(t, tt.field, tables.FieldOf(err))
 				cite := tables.Citation{}
 				switch x := err.(type) {
 				case *tables.NotTabulatedError:

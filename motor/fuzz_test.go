@@ -83,8 +83,8 @@ func FuzzDemand(f *testing.F) {
 		if !d.Design.IsZero() || !d.Branch.IsZero() || d.Cautions != nil {
 			t.Fatalf("%+v: error %v with a demand", m, err)
 		}
-		for _, one := range leaves(err) {
-			if name := field(one); name != "edition" && !strings.HasPrefix(name, "motor.") {
+		for _, one := range tables.Faults(err) {
+			if name := tables.FieldOf(one); name != "edition" && !strings.HasPrefix(name, "motor.") {
 				t.Fatalf("%+v: error %v names %q", m, one, name)
 			}
 		}

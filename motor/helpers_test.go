@@ -1,8 +1,6 @@
 package motor_test
 
 import (
-	"errors"
-	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -57,54 +55,3 @@ func demand(t *testing.T, m motor.Motor, e tables.Edition) motor.Demand {
 
 // ref returns the rule or table that decided a figure, without its note.
 func ref(f tables.Figure) string { return f.Citation().Ref }
-
-// rests reports whether a figure rests on a rule or table.
-func rests(f tables.Figure, ref string) bool {
-	for _, c := range f.Citations() {
-		if c.Ref == ref {
-			return true
-		}
-	}
-	return false
-}
-
-// cautioned reports a caution that cites the rule and speaks of the subject.
-func cautioned(list []tables.Caution, ref, subject string) bool {
-	for _, c := range list {
-		if c.Cite.Ref == ref && strings.Contains(c.Text, subject) {
-			return true
-		}
-	}
-	return false
-}
-
-// leaves takes joined errors apart.
-func leaves(err error) []error {
-	if joined, ok := err.(interface{ Unwrap() []error }); ok {
-		var all []error
-		for _, e := range joined.Unwrap() {
-			all = append(all, leaves(e)...)
-		}
-		return all
-	}
-	if err == nil {
-		return nil
-	}
-	return []error{err}
-}
-
-// field returns the field path that a typed error names, "" for another error.
-func field(err error) string {
-	var input *tables.InputError
-	var table *tables.NotTabulatedError
-	var size *tables.NoSizeError
-	switch {
-	case errors.As(err, &input):
-		return input.Field
-	case errors.As(err, &table):
-		return table.Field
-	case errors.As(err, &size):
-		return size.Field
-	}
-	return ""
-}

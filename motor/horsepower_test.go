@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -57,17 +58,17 @@ func TestHorsepower(t *testing.T) {
 func TestHorsepowerCautions(t *testing.T) {
 	m := motor.Motor{Kind: motor.SquirrelCage, Voltage: 460, Nameplate: motor.Nameplate{Amperes: motor.Amps("48")}}
 	for _, e := range necEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "amperes only"), e)
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "amperes only"), e)
 	}
 	for _, e := range cecEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "Tables 44, 45 and D2", "not marked in horsepower"), e)
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "Tables 44, 45 and D2", "not marked in horsepower"), e)
 	}
 	m.Power = motor.KW("30")
 	for _, e := range necEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "kilowatts"), e)
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "kilowatts"), e)
 	}
 	m.Power, m.Nameplate.Amperes = tables.Power{}, motor.Amps("591")
 	for _, e := range necEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "no horsepower follows"), e)
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "430.6(A)(1)", "no horsepower follows"), e)
 	}
 }

@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -83,11 +84,11 @@ func TestDesignACaution(t *testing.T) {
 	m := cage50()
 	m.Nameplate.DesignLetter = "A"
 	for _, e := range necEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "430.110(C)(3)", "Design A"), e)
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "430.110(C)(3)", "Design A"), e)
 	}
 	m.Nameplate.CodeLetter = "G"
 	for _, e := range necEditions {
-		assert.False(t, cautioned(demand(t, m, e).Cautions, "430.110(C)(3)", "Design A"), e)
+		assert.False(t, testkit.Cautioned(demand(t, m, e).Cautions, "430.110(C)(3)", "Design A"), e)
 	}
 }
 
@@ -96,7 +97,7 @@ func TestLetterVCaution(t *testing.T) {
 	m := cage50()
 	m.Nameplate.CodeLetter = "V"
 	for _, e := range necEditions {
-		assert.True(t, cautioned(demand(t, m, e).Cautions, "Table 430.7(B)", "no upper end"), e)
+		assert.True(t, testkit.Cautioned(demand(t, m, e).Cautions, "Table 430.7(B)", "no upper end"), e)
 	}
 }
 

@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -43,21 +44,21 @@ func TestResistorConductors(t *testing.T) {
 			got := demand(t, w, e)
 			assert.Equal(t, tt.secondary, got.Resistor.String(), tt.duty)
 			assert.Equal(t, "430.23(C)", ref(got.Resistor))
-			assert.True(t, rests(got.Resistor, "Table 430.23(C)"))
+			assert.True(t, testkit.Rests(got.Resistor, "Table 430.23(C)"))
 			assert.Equal(t, "81.25 A", got.Secondary.String(), "slip rings to controller, as without resistors")
 			got = demand(t, d, e)
 			assert.Equal(t, tt.dc, got.Resistor.String(), tt.duty)
 			assert.Equal(t, "430.29", ref(got.Resistor))
-			assert.True(t, rests(got.Resistor, "Table 430.29"))
+			assert.True(t, testkit.Rests(got.Resistor, "Table 430.29"))
 		}
 		for _, e := range cecEditions {
 			got := demand(t, w, e)
 			assert.Equal(t, tt.secondary, got.Resistor.String(), tt.duty)
 			assert.Equal(t, "Rule 28-112", ref(got.Resistor))
-			assert.True(t, rests(got.Resistor, "Table 28"))
+			assert.True(t, testkit.Rests(got.Resistor, "Table 28"))
 			assert.NotEmpty(t, got.Resistor.FromMemory(), "Table 28 is from memory")
 			_, err := d.Demand(e)
-			assert.Equal(t, "motor.resistor", field(err), "the CEC has no table for direct current")
+			assert.Equal(t, "motor.resistor", tables.FieldOf(err), "the CEC has no table for direct current")
 		}
 	}
 	for _, e := range allEditions {
@@ -81,7 +82,7 @@ func TestRectifier(t *testing.T) {
 		}
 		for _, e := range cecEditions {
 			_, err := m.Demand(e)
-			assert.Equal(t, "motor.rectifier", field(err))
+			assert.Equal(t, "motor.rectifier", tables.FieldOf(err))
 		}
 	}
 }
@@ -173,7 +174,7 @@ func TestValveActuator(t *testing.T) {
 	m := motor.Motor{Kind: motor.SquirrelCage, Power: motor.HP("5"), Voltage: 460, Use: motor.ValveActuator}
 	for _, e := range allEditions {
 		_, err := m.Demand(e)
-		assert.Equal(t, "motor.nameplate.amperes", field(err))
+		assert.Equal(t, "motor.nameplate.amperes", tables.FieldOf(err))
 		marked := m
 		marked.Nameplate.Amperes = motor.Amps("9.2")
 		d := demand(t, marked, e)
@@ -197,6 +198,6 @@ func TestFirePumpDemand(t *testing.T) {
 	}
 	for _, e := range cecEditions {
 		_, err := m.Demand(e)
-		assert.Equal(t, "motor.use", field(err))
+		assert.Equal(t, "motor.use", tables.FieldOf(err))
 	}
 }

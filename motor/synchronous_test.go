@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -39,8 +40,8 @@ func TestSynchronousPowerFactor(t *testing.T) {
 				assert.Equal(t, tt.want, d.Table.String(), tt.source)
 				assert.Equal(t, tt.want, d.Design.String(), tt.source)
 				assert.Equal(t, tt.ref, ref(d.Table))
-				assert.True(t, rests(d.Design, tt.table))
-				assert.Equal(t, tt.pf == "", cautioned(d.Cautions, tt.ref, "no power factor"))
+				assert.True(t, testkit.Rests(d.Design, tt.table))
+				assert.Equal(t, tt.pf == "", testkit.Cautioned(d.Cautions, tt.ref, "no power factor"))
 			})
 		}
 	}
@@ -53,6 +54,6 @@ func TestSynchronousNameplateCEC(t *testing.T) {
 	for _, e := range cecEditions {
 		d := demand(t, m, e)
 		assert.Equal(t, "110 A", d.Design.String(), "28-106(1)")
-		assert.False(t, cautioned(d.Cautions, "Table 44", "no power factor"))
+		assert.False(t, testkit.Cautioned(d.Cautions, "Table 44", "no power factor"))
 	}
 }

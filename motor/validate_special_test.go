@@ -62,8 +62,8 @@ func TestValidateSpecial(t *testing.T) {
 			require.NoError(t, m.Validate(), "sound before it is altered")
 			tt.alter(&m)
 			var fields []string
-			for _, one := range leaves(m.Validate()) {
-				fields = append(fields, field(one))
+			for _, one := range tables.Faults(m.Validate()) {
+				fields = append(fields, tables.FieldOf(one))
 			}
 			assert.Equal(t, tt.want, fields)
 		})

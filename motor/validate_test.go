@@ -99,7 +99,7 @@ func TestValidateFields(t *testing.T) {
 			m := marked50()
 			require.NoError(t, m.Validate())
 			tt.set(&m)
-			list := leaves(m.Validate())
+			list := tables.Faults(m.Validate())
 			require.Len(t, list, 1, "%v", m.Validate())
 			var input *tables.InputError
 			require.ErrorAs(t, list[0], &input)
@@ -177,7 +177,7 @@ func TestValidateJoins(t *testing.T) {
 	for _, e := range tables.Editions() {
 		_, err := m.Demand(e)
 		var got []string
-		for _, one := range leaves(err) {
+		for _, one := range tables.Faults(err) {
 			var input *tables.InputError
 			require.ErrorAs(t, one, &input)
 			got = append(got, input.Field)
@@ -189,7 +189,7 @@ func TestValidateJoins(t *testing.T) {
 func TestDemandNeedsAnEdition(t *testing.T) {
 	for _, e := range []tables.Edition{0, 99} {
 		d, err := cage50().Demand(e)
-		assert.Equal(t, "edition", field(err))
+		assert.Equal(t, "edition", tables.FieldOf(err))
 		assert.Equal(t, motor.Demand{}, d)
 	}
 }

@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -42,7 +43,7 @@ func TestSmallSwitchesNEC(t *testing.T) {
 				}
 				assert.True(t, x.Amperes.IsZero())
 				assert.True(t, x.LockedRotor.IsZero())
-				assert.True(t, cautioned(x.Cautions, "430.83", "inverse-time breaker"))
+				assert.True(t, testkit.Cautioned(x.Cautions, "430.83", "inverse-time breaker"))
 			})
 		}
 	}

@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -43,10 +44,10 @@ func TestDeviceCEC(t *testing.T) {
 				s := device(t, e, tt.kind, tt.m)
 				assert.Equal(t, tt.limit, s.Limit.String(), tt.source)
 				assert.Equal(t, "Rule 28-200(3)", ref(s.Limit))
-				assert.True(t, rests(s.Limit, "Table 29"))
+				assert.True(t, testkit.Rests(s.Limit, "Table 29"))
 				assert.Equal(t, tt.rating, s.Rating.String(), tt.source)
 				assert.Equal(t, "Rule 28-200(3)", ref(s.Rating))
-				assert.True(t, cautioned(s.Cautions, "Rule 28-202", "marked"))
+				assert.True(t, testkit.Cautioned(s.Cautions, "Rule 28-202", "marked"))
 			})
 		}
 	}
@@ -73,7 +74,7 @@ func TestReducedVoltageCEC(t *testing.T) {
 			for kind, want := range map[tables.Device]string{nonTime: tt.nonTime, timeDelay: tt.timeDelay, breaker: tt.breaker} {
 				s := device(t, e, kind, started(tt.start, drawing(tt.amps)))
 				assert.Equal(t, want, s.Limit.String(), "%v %s A %v", tt.start, tt.amps, kind)
-				assert.Equal(t, tt.start == motor.SoftStarter, cautioned(s.Cautions, "Table 29", "soft starter"))
+				assert.Equal(t, tt.start == motor.SoftStarter, testkit.Cautioned(s.Cautions, "Table 29", "soft starter"))
 			}
 		}
 	}

@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -42,7 +43,7 @@ func TestDevicePercentNEC(t *testing.T) {
 					assert.Equal(t, kind, s.Device)
 					assert.Equal(t, want, s.Limit.String(), kind)
 					assert.Equal(t, "430.52(C)(1)", ref(s.Limit))
-					assert.True(t, rests(s.Limit, table))
+					assert.True(t, testkit.Rests(s.Limit, table))
 					assert.Equal(t, want, s.Rating.String(), "%v: a standard rating stays", kind)
 					assert.True(t, s.Instantaneous.IsZero())
 				}
@@ -93,8 +94,8 @@ func TestNextRatingUpNEC(t *testing.T) {
 					want = "430.52(C)(1)(a)"
 				}
 				assert.Equal(t, want, ref(s.Rating))
-				assert.True(t, rests(s.Rating, "240.6(A)"))
-				assert.True(t, cautioned(s.Cautions, "430.52(C)(2)", "lower maximum"))
+				assert.True(t, testkit.Rests(s.Rating, "240.6(A)"))
+				assert.True(t, testkit.Cautioned(s.Cautions, "430.52(C)(2)", "lower maximum"))
 			})
 		}
 	}
@@ -205,7 +206,7 @@ func TestLowSpeedSynchronous(t *testing.T) {
 			if rule == "" {
 				rule = "Table 29"
 			}
-			assert.Equal(t, want, cautioned(device(t, e, breaker, m).Cautions, rule, "200 percent"), "%d r/min %v", rpm, e)
+			assert.Equal(t, want, testkit.Cautioned(device(t, e, breaker, m).Cautions, rule, "200 percent"), "%d r/min %v", rpm, e)
 		}
 	}
 }
@@ -215,11 +216,11 @@ func TestDeviceRefused(t *testing.T) {
 		m := cage50()
 		for _, kind := range []tables.Device{0, 99} {
 			s, err := protection.SizeShortCircuit(e, kind, m, demand(t, m, e))
-			assert.Equal(t, "device", field(err))
+			assert.Equal(t, "device", tables.FieldOf(err))
 			assert.Equal(t, protection.ShortCircuit{}, s)
 		}
 	}
 	m := cage50()
 	_, err := protection.SizeShortCircuit(0, breaker, m, demand(t, m, tables.NEC2023))
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 }

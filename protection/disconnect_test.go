@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -42,8 +43,8 @@ func TestDisconnectNEC(t *testing.T) {
 				assert.Equal(t, tt.rotor, x.LockedRotor.String())
 				assert.Equal(t, "15 m", x.Sight.String())
 				assert.Equal(t, "430.102", ref(x.Sight))
-				assert.Equal(t, tt.ref == "430.110(A)", cautioned(x.Cautions, "430.110(A) Exception", "unfused"))
-				assert.Equal(t, tt.m.Kind == motor.Torque, cautioned(x.Cautions, "430.109", "torque"))
+				assert.Equal(t, tt.ref == "430.110(A)", testkit.Cautioned(x.Cautions, "430.110(A) Exception", "unfused"))
+				assert.Equal(t, tt.m.Kind == motor.Torque, testkit.Cautioned(x.Cautions, "430.109", "torque"))
 			})
 		}
 	}
@@ -101,7 +102,7 @@ func TestIsolatingSwitch(t *testing.T) {
 			if e.Code() == tables.CEC {
 				want, rule = tt.cec, "Rule 28-602(3)"
 			}
-			assert.Equal(t, want, cautioned(disconnect(t, e, m).Cautions, rule, "isolating"), "%+v %v", tt, e)
+			assert.Equal(t, want, testkit.Cautioned(disconnect(t, e, m).Cautions, rule, "isolating"), "%+v %v", tt, e)
 		}
 	}
 }

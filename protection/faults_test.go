@@ -45,9 +45,9 @@ func TestNoEdition(t *testing.T) {
 	m := compressor("38", "", "")
 	d := demand(t, m, tables.NEC2023)
 	_, err := protection.SizeShortCircuit(0, breaker, m, d)
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 	_, err = protection.SizeOverload(0, m, d)
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 	assert.Equal(t, protection.Disconnect{}, protection.SizeDisconnect(0, m, d))
 	assert.Equal(t, protection.Controller{}, protection.SizeController(0, m, d))
 }

@@ -1,8 +1,6 @@
 package protection_test
 
 import (
-	"errors"
-	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -96,39 +94,3 @@ func controller(t *testing.T, e tables.Edition, m motor.Motor) protection.Contro
 
 // ref returns the rule or table that decided a figure, without its note.
 func ref(f tables.Figure) string { return f.Citation().Ref }
-
-// rests reports whether a figure rests on a rule or table.
-func rests(f tables.Figure, ref string) bool {
-	for _, c := range f.Citations() {
-		if c.Ref == ref {
-			return true
-		}
-	}
-	return false
-}
-
-// cautioned reports a caution that cites the rule and speaks of the subject.
-func cautioned(list []tables.Caution, ref, subject string) bool {
-	for _, c := range list {
-		if c.Cite.Ref == ref && strings.Contains(c.Text, subject) {
-			return true
-		}
-	}
-	return false
-}
-
-// field returns the field path that a typed error names, "" for another error.
-func field(err error) string {
-	var input *tables.InputError
-	var table *tables.NotTabulatedError
-	var none *tables.NoSizeError
-	switch {
-	case errors.As(err, &input):
-		return input.Field
-	case errors.As(err, &table):
-		return table.Field
-	case errors.As(err, &none):
-		return none.Field
-	}
-	return ""
-}

@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
 )
@@ -47,7 +48,7 @@ func TestHermeticDeviceNEC(t *testing.T) {
 					want = "440.22(A) Exception No. 2"
 				}
 				assert.Equal(t, want, ref(s.StartLimit))
-				assert.True(t, cautioned(s.Cautions, "440.22(A)", "marked on the equipment"))
+				assert.True(t, testkit.Cautioned(s.Cautions, "440.22(A)", "marked on the equipment"))
 			})
 		}
 	}
@@ -56,11 +57,11 @@ func TestHermeticDeviceNEC(t *testing.T) {
 // The exceptions of 440.22(A) and what they are numbered from 2023.
 func TestHermeticExceptionsNEC(t *testing.T) {
 	s := device(t, tables.NEC2023, breaker, compressor("41", "", ""))
-	assert.True(t, rests(s.Rating, "440.22(A) Exception No. 1"), "next size up")
+	assert.True(t, testkit.Rests(s.Rating, "440.22(A) Exception No. 1"), "next size up")
 	s = device(t, tables.NEC2023, breaker, compressor("2", "", ""))
-	assert.True(t, rests(s.Rating, "440.22(A) Exception No. 3"), "15 A")
+	assert.True(t, testkit.Rests(s.Rating, "440.22(A) Exception No. 3"), "15 A")
 	s = device(t, tables.NEC2020, breaker, compressor("41", "", ""))
-	assert.False(t, rests(s.Rating, "440.22(A) Exception No. 1"))
+	assert.False(t, testkit.Rests(s.Rating, "440.22(A) Exception No. 1"))
 }
 
 // 175 percent of 3428.6 A is 6000.05 A: above every rating to round up to.

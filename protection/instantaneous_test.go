@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -53,7 +54,7 @@ func TestInstantaneousNEC(t *testing.T) {
 				}
 				assert.True(t, s.Rating.IsZero(), "a setting has no standard rating")
 				assert.True(t, s.StartRating.IsZero())
-				assert.True(t, cautioned(s.Cautions, "430.52(C)(3)", "listed combination controller"))
+				assert.True(t, testkit.Cautioned(s.Cautions, "430.52(C)(3)", "listed combination controller"))
 			})
 		}
 	}
@@ -93,14 +94,14 @@ func TestInstantaneousCEC(t *testing.T) {
 				s := device(t, e, magnetic, tt.m)
 				assert.Equal(t, tt.want, s.Limit.String(), tt.work)
 				assert.Equal(t, tt.want, s.Instantaneous.String())
-				assert.True(t, rests(s.Limit, "Rule 28-210"))
+				assert.True(t, testkit.Rests(s.Limit, "Rule 28-210"))
 				assert.True(t, s.Rating.IsZero())
 				assert.True(t, s.StartLimit.IsZero(), "no second step")
-				assert.True(t, cautioned(s.Cautions, "Rule 28-210", "combination starter"))
+				assert.True(t, testkit.Cautioned(s.Cautions, "Rule 28-210", "combination starter"))
 				// 28-200(5): the same limit binds a breaker whose trip is adjusted apart.
 				s = device(t, e, breaker, tt.m)
 				assert.Equal(t, tt.want, s.Instantaneous.String())
-				assert.True(t, cautioned(s.Cautions, "Rule 28-200(5)", "instantaneous"))
+				assert.True(t, testkit.Cautioned(s.Cautions, "Rule 28-200(5)", "instantaneous"))
 				assert.True(t, device(t, e, timeDelay, tt.m).Instantaneous.IsZero())
 			})
 		}
@@ -117,7 +118,7 @@ func TestInstantaneousRefused(t *testing.T) {
 		}
 		for _, m := range motors {
 			s, err := protection.SizeShortCircuit(e, magnetic, m, demand(t, m, e))
-			assert.Equal(t, "device", field(err), "%v %v", m.Kind, e)
+			assert.Equal(t, "device", tables.FieldOf(err), "%v %v", m.Kind, e)
 			assert.Equal(t, protection.ShortCircuit{}, s)
 		}
 	}

@@ -5,6 +5,7 @@ import (
 
 	"github.com/stretchr/testify/assert"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -47,7 +48,7 @@ func TestOverload(t *testing.T) {
 			assert.Equal(t, "430.32(A)(1)", ref(o.Limit))
 			assert.Equal(t, tt.start, o.StartLimit.String(), "%+v %v", tt, e)
 			assert.Equal(t, "430.32(C)", ref(o.StartLimit))
-			assert.True(t, rests(o.Limit, "430.6(A)(2)"))
+			assert.True(t, testkit.Rests(o.Limit, "430.6(A)(2)"))
 			assert.True(t, o.Protector.IsZero())
 		}
 		for _, e := range cecEditions {
@@ -103,7 +104,7 @@ func TestHermeticOverload(t *testing.T) {
 			assert.Equal(t, "53.2 A", o.Limit.String(), e)
 			assert.Equal(t, tt.ref, ref(o.Limit))
 			assert.True(t, o.StartLimit.IsZero())
-			assert.True(t, cautioned(o.Cautions, tt.ref, "125 percent"))
+			assert.True(t, testkit.Cautioned(o.Cautions, tt.ref, "125 percent"))
 		}
 	}
 }
@@ -162,8 +163,8 @@ func TestOverloadCautions(t *testing.T) {
 			if rule == "" {
 				continue
 			}
-			assert.True(t, cautioned(overload(t, e, tt.on).Cautions, rule, ""), "%s %v", tt.name, e)
-			assert.False(t, cautioned(overload(t, e, tt.off).Cautions, rule, ""), "%s %v", tt.name, e)
+			assert.True(t, testkit.Cautioned(overload(t, e, tt.on).Cautions, rule, ""), "%s %v", tt.name, e)
+			assert.False(t, testkit.Cautioned(overload(t, e, tt.off).Cautions, rule, ""), "%s %v", tt.name, e)
 		}
 	}
 }
@@ -171,6 +172,6 @@ func TestOverloadCautions(t *testing.T) {
 func TestOverloadNeedsAnEdition(t *testing.T) {
 	m := cage50()
 	o, err := protection.SizeOverload(0, m, demand(t, m, tables.NEC2023))
-	assert.Equal(t, "edition", field(err))
+	assert.Equal(t, "edition", tables.FieldOf(err))
 	assert.Equal(t, protection.Overload{}, o)
 }

@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
@@ -74,7 +75,7 @@ func TestDeviceOfWindings(t *testing.T) {
 			assert.Equal(t, tt.rating, x.Rating.String())
 			assert.Equal(t, tt.smallest, x.Smallest.String())
 			assert.Equal(t, tt.ref, ref(x.Smallest))
-			assert.True(t, cautioned(x.Cautions, tt.ref, ""))
+			assert.True(t, testkit.Cautioned(x.Cautions, tt.ref, ""))
 			assert.True(t, device(t, e, timeDelay, cage50()).Smallest.IsZero())
 		}
 	}
@@ -151,7 +152,7 @@ func TestFirePump(t *testing.T) {
 				assert.Equal(t, "695.4(B)(2)(a)", ref(x.Limit))
 				assert.Equal(t, tables.MarkB, x.Limit.Mark())
 				assert.True(t, x.StartLimit.IsZero())
-				assert.True(t, cautioned(x.Cautions, "695.4(B)(2)(a)", "FIRE PUMP"))
+				assert.True(t, testkit.Cautioned(x.Cautions, "695.4(B)(2)(a)", "FIRE PUMP"))
 			}
 			assert.Equal(t, "400 A", device(t, e, d, letter).Rating.String())
 		}
@@ -159,13 +160,13 @@ func TestFirePump(t *testing.T) {
 		assert.True(t, o.Limit.IsZero())
 		assert.True(t, o.StartLimit.IsZero())
 		assert.True(t, o.Units.IsZero())
-		assert.True(t, cautioned(o.Cautions, "695.6(C)", "no overload protection"))
+		assert.True(t, testkit.Cautioned(o.Cautions, "695.6(C)", "no overload protection"))
 
 		// Without a locked-rotor current there is no device.
 		a := pump()
 		a.Nameplate.DesignLetter = "A"
 		_, err := protection.SizeShortCircuit(e, timeDelay, a, demand(t, a, e))
-		assert.Equal(t, "motor.nameplate.locked_rotor_amperes", field(err))
+		assert.Equal(t, "motor.nameplate.locked_rotor_amperes", tables.FieldOf(err))
 	}
 }
 

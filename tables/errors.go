@@ -1,6 +1,7 @@
 package tables
 
 import (
+	"errors"
 	"fmt"
 	"strings"
 )
@@ -72,6 +73,40 @@ func (e *NoSizeError) Error() string {
 		s += fmt.Sprintf(" [%v]", e.Cite)
 	}
 	return s
+}
+
+// Faults takes joined errors apart, those joined within them too, in the order
+// in which they were found: all that is wrong with an input, one by one.
+func Faults(err error) []error {
+	if err == nil {
+		return nil
+	}
+	joined, ok := err.(interface{ Unwrap() []error })
+	if !ok {
+		return []error{err}
+	}
+	var all []error
+	for _, e := range joined.Unwrap() {
+		all = append(all, Faults(e)...)
+	}
+	return all
+}
+
+// FieldOf returns the path of the input field that an error is about, such as
+// "motor.nameplate.service_factor"; "" for an error that is of no field.
+func FieldOf(err error) string {
+	var input *InputError
+	var missing *NotTabulatedError
+	var none *NoSizeError
+	switch {
+	case errors.As(err, &input):
+		return input.Field
+	case errors.As(err, &missing):
+		return missing.Field
+	case errors.As(err, &none):
+		return none.Field
+	}
+	return ""
 }
 
 // clip shortens text that goes into a message.

@@ -3,6 +3,7 @@ package tables_test
 import (
 	"encoding/json"
 	"errors"
+	"fmt"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -32,6 +33,19 @@ func TestErrorTexts(t *testing.T) {
 	assert.ErrorAs(t, joined, new(*tables.InputError))
 	assert.ErrorAs(t, joined, new(*tables.NotTabulatedError))
 	assert.ErrorAs(t, joined, new(*tables.NoSizeError))
+}
+
+func TestFaults(t *testing.T) {
+	a, b, c := &tables.InputError{Field: "a"}, &tables.NotTabulatedError{Field: "b"}, &tables.NoSizeError{Field: "c"}
+	plain := errors.New("of no field")
+	var fields []string
+	for _, one := range tables.Faults(errors.Join(errors.Join(a, b), plain, fmt.Errorf("wrapped: %w", c))) {
+		fields = append(fields, tables.FieldOf(one))
+	}
+	assert.Equal(t, []string{"a", "b", "", "c"}, fields)
+	assert.Equal(t, []error{a}, tables.Faults(a))
+	assert.Empty(t, tables.Faults(nil))
+	assert.Empty(t, tables.FieldOf(nil))
 }
 
 func TestCaution(t *testing.T) {

@@ -1,29 +1,20 @@
 package main
 
 import (
-	"flag"
-	"os"
-	"path/filepath"
 	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
+
+	"example.org/motorcircuit/internal/testkit"
 )
 
-var update = flag.Bool("update", false, "rewrite the golden file, then read the diff")
-
 func TestGolden(t *testing.T) {
-	path := filepath.Join("testdata", "golden", "feeder.txt")
 	var b strings.Builder
 	require.NoError(t, run(&b))
 	got := b.String()
-	if *update {
-		require.NoError(t, os.WriteFile(path, []byte(got), 0o644))
-	}
-	want, err := os.ReadFile(path)
-	require.NoError(t, err)
-	assert.Equal(t, string(want), got)
+	testkit.Golden(t, "testdata/golden/feeder.txt", got)
 	// CSA C22.1:24, by hand. One pump counts: 39 A × 125 % + 31 A × 90 % + 16 A
 	// + 24 A ÷ 80 % by Rules 28-108 and 28-110; 39 A × 250 % + 31 A + 16 A + 30 A
 	// by Rule 28-204.

@@ -1,7 +1,6 @@
 package main
 
 import (
-	"flag"
 	"io"
 	"os"
 	"path/filepath"
@@ -10,9 +9,9 @@ import (
 
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
-)
 
-var update = flag.Bool("update", false, "rewrite the golden file, then read the diff")
+	"example.org/motorcircuit/internal/testkit"
+)
 
 // printed runs the program and returns what it prints.
 func printed(t *testing.T) string {
@@ -33,14 +32,8 @@ func printed(t *testing.T) string {
 }
 
 func TestGolden(t *testing.T) {
-	path := filepath.Join("testdata", "golden", "onemotor.txt")
 	got := printed(t)
-	if *update {
-		require.NoError(t, os.WriteFile(path, []byte(got), 0o644))
-	}
-	want, err := os.ReadFile(path)
-	require.NoError(t, err)
-	assert.Equal(t, string(want), got)
+	testkit.Golden(t, "testdata/golden/onemotor.txt", got)
 	// NFPA 70-2023: Table 430.250, 430.22, 430.52, 430.32, by hand.
 	for _, line := range []string{
 		"conductor: 10 AWG for 26.25 A by NFPA 70-2023 430.22\n",

@@ -66,8 +66,8 @@ func (f *faults[T]) texts() []string {
 // could not be read, or that rests on one, is left out: it is told already.
 func (f *faults[T]) judge(err error) {
 	unread := slices.Clone(f.list)
-	for _, e := range leaves(err) {
-		column := f.of.of(fieldOf(e))
+	for _, e := range tables.Faults(err) {
+		column := f.of.of(tables.FieldOf(e))
 		told := func(x fault) bool { return x.column == column || column >= 0 && f.rests(column, x.column) }
 		if !slices.ContainsFunc(unread, told) {
 			f.add(e, column)
@@ -78,36 +78,4 @@ func (f *faults[T]) judge(err error) {
 // rests reports whether the verdict on a column rests on another.
 func (f *faults[T]) rests(column, on int) bool {
 	return on >= 0 && slices.Contains(strings.Fields(f.of.columns[column].needs), f.of.columns[on].name)
-}
-
-// leaves takes joined errors apart.
-func leaves(err error) []error {
-	if err == nil {
-		return nil
-	}
-	joined, ok := err.(interface{ Unwrap() []error })
-	if !ok {
-		return []error{err}
-	}
-	var all []error
-	for _, e := range joined.Unwrap() {
-		all = append(all, leaves(e)...)
-	}
-	return all
-}
-
-// fieldOf returns the library's name of the field that an error is about.
-func fieldOf(err error) string {
-	var input *tables.InputError
-	var missing *tables.NotTabulatedError
-	var noSize *tables.NoSizeError
-	switch {
-	case errors.As(err, &input):
-		return input.Field
-	case errors.As(err, &missing):
-		return missing.Field
-	case errors.As(err, &noSize):
-		return noSize.Field
-	}
-	return ""
 }

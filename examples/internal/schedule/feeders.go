@@ -129,7 +129,7 @@ func (l *feederList) size(r *row[mc.Feeder]) *answer[mc.FeederResult] {
 func (l *feederList) judge(r *row[mc.Feeder], on *load, err error) {
 	var own []error
 	var ofMotors []string
-	for _, e := range leaves(err) {
+	for _, e := range tables.Faults(err) {
 		var ofMotor *mc.CircuitError
 		switch {
 		case errors.As(e, &ofMotor):
@@ -138,7 +138,7 @@ func (l *feederList) judge(r *row[mc.Feeder], on *load, err error) {
 			for _, text := range words.texts() {
 				ofMotors = append(ofMotors, "motor "+nameOf(ofMotor.Tag)+": "+text)
 			}
-		case len(on.circuits) == 0 && fieldOf(e) == "circuits": // told below in words of its own
+		case len(on.circuits) == 0 && tables.FieldOf(e) == "circuits": // told below in words of its own
 		default:
 			own = append(own, e)
 		}

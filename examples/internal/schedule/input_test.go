@@ -266,9 +266,9 @@ func TestLongCells(t *testing.T) {
 // A fault that the program knows no column for is told of the row.
 func TestFaultOfNoColumn(t *testing.T) {
 	f := faults[motorRow]{of: motors}
-	for _, err := range leaves(errors.Join(errors.New("odd"), &tables.InputError{Field: "wiring.run", Want: "a run"})) {
-		assert.Equal(t, -1, motors.of(fieldOf(err)))
-		f.add(err, motors.of(fieldOf(err)))
+	for _, err := range tables.Faults(errors.Join(errors.New("odd"), &tables.InputError{Field: "wiring.run", Want: "a run"})) {
+		assert.Equal(t, -1, motors.of(tables.FieldOf(err)))
+		f.add(err, motors.of(tables.FieldOf(err)))
 	}
 	assert.Equal(t, []string{"row: odd", "row is not given: want a run"}, f.texts())
 }

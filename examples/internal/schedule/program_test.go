@@ -5,7 +5,6 @@ import (
 	"encoding/csv"
 	"encoding/json"
 	"errors"
-	"flag"
 	"math/rand/v2"
 	"os"
 	"path/filepath"
@@ -16,23 +15,11 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
+	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
 )
-
-var update = flag.Bool("update", false, "rewrite golden files, then read the diff")
-
-func checkGolden(t *testing.T, name, got string) {
-	t.Helper()
-	path := filepath.Join("testdata", "golden", name)
-	if *update {
-		require.NoError(t, os.WriteFile(path, []byte(got), 0o644))
-	}
-	want, err := os.ReadFile(path)
-	require.NoError(t, err)
-	assert.Equal(t, string(want), got)
-}
 
 // ran runs the program on the text of a schedule.
 func ran(t *testing.T, schedule string, flags ...string) (status int, out, complaint string) {
@@ -82,7 +69,7 @@ func TestSample(t *testing.T) {
 			var stdout, stderr bytes.Buffer
 			assert.Equal(t, 1, Run(tt.args, strings.NewReader(""), &stdout, &stderr), "the sample has one bad motor and one bad feeder")
 			assert.Empty(t, stderr.String())
-			checkGolden(t, tt.golden, stdout.String())
+			testkit.Golden(t, "testdata/golden/"+tt.golden, stdout.String())
 		})
 	}
 }
