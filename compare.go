@@ -74,13 +74,10 @@ type compared struct {
 func (r *Result) compareBy() []compared {
 	var list []compared
 	for s := range sectionCount {
+		for _, x := range r.selections(s) {
+			list = append(list, compared{s, "conductors", wires(x), x.Required.Citation()})
+		}
 		switch s {
-		case BranchConductors:
-			list = append(list, compared{s, "conductors", wires(&r.Branch), r.Branch.Required.Citation()})
-		case MotorSupplyConductors:
-			list = append(list, compared{s, "conductors", wires(&r.MotorSupply), r.MotorSupply.Required.Citation()})
-		case SecondaryConductors:
-			list = append(list, compared{s, "conductors", wires(&r.Secondary), r.Secondary.Required.Citation()})
 		case BondingConductor:
 			list = append(list, compared{s, "conductor", r.Bonding.Size.String(), r.Bonding.Row.Citation()})
 		case RacewayFill:
@@ -96,18 +93,23 @@ func (r *Result) compareBy() []compared {
 }
 
 // differences lines the values of all results up by section and name, in the
-// order in which they first come.
+// order in which they first come. Where a section has several of one name, those
+// of the windings say, the first is held against the first.
 func (x *Comparison) differences() {
 	type key struct {
 		section Section
 		what    string
+		nth     int
 	}
 	at := map[key]int{}
 	var keys []key
 	var rows []Difference
 	for i := range x.Results {
+		seen := map[key]int{}
 		for _, v := range x.Results[i].compareBy() {
-			k := key{v.section, v.what}
+			k := key{section: v.section, what: v.what}
+			seen[k]++
+			k.nth = seen[k]
 			row, ok := at[k]
 			if !ok {
 				row = len(rows)

@@ -77,6 +77,22 @@ func TestCompareWithItself(t *testing.T) {
 	}
 }
 
+// The windings of a multispeed motor do not hide one another: NEC 430.22(B) and
+// CEC Rule 28-808 make a run to each, of 28 A and 12 A × 125 percent.
+func TestCompareWindings(t *testing.T) {
+	c := motorcircuit.Circuit{Wiring: conductor.Wiring{Termination: 75}, Motor: motor.Motor{Kind: motor.SquirrelCage, Power: motor.HP("20"), Voltage: 460,
+		Nameplate: motor.Nameplate{Windings: []motor.Winding{{Amperes: motor.Amps("28")}, {Amperes: motor.Amps("12")}}}}}
+	x, err := motorcircuit.Compare(c, tables.NEC2023, tables.CEC2024)
+	require.NoError(t, err)
+	var got []string
+	for _, d := range x.Differences {
+		if d.Section == motorcircuit.WindingConductors.String() && d.What == "conductors" {
+			got = append(got, d.Values...)
+		}
+	}
+	assert.Equal(t, []string{"10 AWG copper THWN, raceway, dry", "10 AWG copper RW75, raceway, dry", "14 AWG copper THWN, raceway, dry", "14 AWG copper RW75, raceway, dry"}, got)
+}
+
 func TestCompareErrors(t *testing.T) {
 	c := pumpRun(0)
 	_, err := motorcircuit.Compare(c, tables.NEC2023)

@@ -101,14 +101,7 @@ type Term struct {
 // answer does not depend on the order of the circuits. All faults come back
 // joined; those of a circuit are in a [*CircuitError].
 func SizeFeeder(f Feeder) (FeederResult, error) {
-	r := FeederResult{Feeder: f, Device: f.Device}
-	if r.Device == 0 {
-		r.Device = protection.TimeDelayFuse
-	}
-	if err := f.validate(); err != nil {
-		return FeederResult{}, err
-	}
-	members, err := r.sizeCircuits()
+	r, members, err := f.begin()
 	if err != nil {
 		return FeederResult{}, err
 	}
@@ -131,6 +124,19 @@ func SizeFeeder(f Feeder) (FeederResult, error) {
 	}
 	r.Cautions = r.cautions(&g)
 	return r, nil
+}
+
+// begin validates a feeder and sizes its branch circuits.
+func (f Feeder) begin() (FeederResult, []member, error) {
+	r := FeederResult{Feeder: f, Device: f.Device}
+	if r.Device == 0 {
+		r.Device = protection.TimeDelayFuse
+	}
+	if err := f.validate(); err != nil {
+		return FeederResult{}, nil, err
+	}
+	members, err := r.sizeCircuits()
+	return r, members, err
 }
 
 // validate reports the faults of the feeder itself.

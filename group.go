@@ -2,7 +2,6 @@ package motorcircuit
 
 import (
 	"example.org/motorcircuit/conductor"
-	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
 )
 
@@ -62,14 +61,7 @@ func SizeGroup(gr Group) (GroupResult, error) {
 		}
 		f.Circuits = append(f.Circuits, FeederCircuit{Circuit: c})
 	}
-	fr := FeederResult{Feeder: f, Device: f.Device}
-	if fr.Device == 0 {
-		fr.Device = protection.TimeDelayFuse
-	}
-	if err := f.validate(); err != nil {
-		return GroupResult{}, err
-	}
-	members, err := fr.sizeCircuits()
+	fr, members, err := f.begin()
 	if err != nil {
 		return GroupResult{}, err
 	}

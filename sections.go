@@ -56,27 +56,19 @@ func (r Result) Figures() iter.Seq2[Section, tables.Figure] {
 
 // section appends the figures of a section, absent ones too, to a list.
 func (r *Result) section(list []*tables.Figure, s Section) []*tables.Figure {
+	for _, x := range r.selections(s) {
+		list = selectionFigures(list, x)
+	}
 	d := &r.Demand
 	switch s {
+	case BranchConductors, MotorSupplyConductors, SecondaryConductors, ResistorConductors, WindingConductors:
+		return list
 	case Currents:
 		list = append(list, &d.Table, &d.Design, &d.Overload, &d.Input)
 		if d.LockedRotor.Source == motor.FromCodeLetter { // the ends of a range
 			list = append(list, &d.LockedRotor.Low)
 		}
 		return append(list, &d.LockedRotor.High)
-	case BranchConductors:
-		return selectionFigures(list, &r.Branch)
-	case MotorSupplyConductors:
-		return selectionFigures(list, &r.MotorSupply)
-	case SecondaryConductors:
-		return selectionFigures(list, &r.Secondary)
-	case ResistorConductors:
-		return selectionFigures(list, &r.Resistor)
-	case WindingConductors:
-		for i := range r.Windings {
-			list = selectionFigures(list, &r.Windings[i])
-		}
-		return list
 	case OverloadProtection:
 		o := &r.Overload
 		list = append(list, &o.Limit, &o.StartLimit, &o.Share, &o.Protector, &o.Units)
@@ -106,6 +98,32 @@ func (r *Result) section(list []*tables.Figure, s Section) []*tables.Figure {
 	}
 	x := &r.FaultDuty
 	return append(list, &x.Source, &x.Contribution, &x.AtMotor, &x.LineToLine, &x.Withstand)
+}
+
+// selections returns the conductors of a section: none for a section of other
+// things, one for each winding of a multispeed motor.
+func (r *Result) selections(s Section) []*conductor.Selection {
+	var x *conductor.Selection
+	switch s {
+	case BranchConductors:
+		x = &r.Branch
+	case MotorSupplyConductors:
+		x = &r.MotorSupply
+	case SecondaryConductors:
+		x = &r.Secondary
+	case ResistorConductors:
+		x = &r.Resistor
+	case WindingConductors:
+		all := make([]*conductor.Selection, len(r.Windings))
+		for i := range all {
+			all[i] = &r.Windings[i]
+		}
+		return all
+	}
+	if x == nil || x.IsZero() {
+		return nil
+	}
+	return []*conductor.Selection{x}
 }
 
 func racewayFigures(list []*tables.Figure, x *conductor.Filled) []*tables.Figure {

@@ -44,7 +44,9 @@ func (r *Result) write(b *strings.Builder) {
 				writeFigure(b, *f)
 			}
 		}
-		b.WriteString(r.remark(s))
+		for _, x := range r.selections(s) {
+			b.WriteString(whySmallerFails(x))
+		}
 	}
 	writeCautions(b, r.Cautions)
 }
@@ -133,21 +135,14 @@ var startings = map[motor.Starting]string{
 
 // chosen says what a section comes to.
 func (r *Result) chosen(s Section) string {
-	switch s {
-	case BranchConductors:
-		return wires(&r.Branch)
-	case MotorSupplyConductors:
-		return wires(&r.MotorSupply)
-	case SecondaryConductors:
-		return wires(&r.Secondary)
-	case ResistorConductors:
-		return wires(&r.Resistor)
-	case WindingConductors:
-		texts := make([]string, len(r.Windings))
-		for i := range r.Windings {
-			texts[i] = wires(&r.Windings[i])
+	if runs := r.selections(s); len(runs) > 0 {
+		texts := make([]string, len(runs))
+		for i, x := range runs {
+			texts[i] = wires(x)
 		}
 		return strings.Join(texts, "; ")
+	}
+	switch s {
 	case OverloadProtection:
 		if r.Overload.Limit.IsZero() {
 			return "none"
@@ -198,21 +193,7 @@ func wires(s *conductor.Selection) string {
 	return text + ", " + strings.ReplaceAll(s.Run.String(), "_", " ") + ", " + s.Location.String()
 }
 
-// remark says why the next smaller size of a section fails.
-func (r *Result) remark(s Section) string {
-	switch s {
-	case BranchConductors:
-		return whySmallerFails(&r.Branch)
-	case MotorSupplyConductors:
-		return whySmallerFails(&r.MotorSupply)
-	case SecondaryConductors:
-		return whySmallerFails(&r.Secondary)
-	case ResistorConductors:
-		return whySmallerFails(&r.Resistor)
-	}
-	return ""
-}
-
+// whySmallerFails says why the next smaller size does not do.
 func whySmallerFails(x *conductor.Selection) string {
 	switch small := x.Smaller; {
 	case small.Size == 0:

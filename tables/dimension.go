@@ -95,28 +95,5 @@ func loadDimensions(path string, rule *Rule, size, diameter, area string, length
 
 // loadBareAreas reads the overall areas of stranded conductors.
 func loadBareAreas(path string) func() map[Size]exact.Num {
-	return loaded(func() (map[Size]exact.Num, error) {
-		g, err := open(path)
-		if err != nil {
-			return nil, err
-		}
-		col, err := g.Col("overall_area_in2")
-		if err != nil {
-			return nil, err
-		}
-		areas := make(map[Size]exact.Num)
-		for _, row := range g.Rows {
-			if row[1] != "stranded" {
-				continue
-			}
-			s, err := ParseSize(row[0])
-			if err != nil {
-				return nil, err
-			}
-			if areas[s], err = exact.Parse(row[col]); err != nil {
-				return nil, err
-			}
-		}
-		return areas, nil
-	})
+	return loaded(func() (map[Size]exact.Num, error) { return bySize(path, "overall_area_in2", stranded) })
 }

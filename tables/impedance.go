@@ -54,11 +54,14 @@ func (e Edition) DCResistance(m Material, s Size) (Figure, error) {
 	if err := e.Check(); err != nil {
 		return Figure{}, err
 	}
-	r, ok := dcResistances()[s]
-	if !ok || m >= materialCount || r[m].IsZero() {
+	var r exact.Num
+	if m < materialCount {
+		r = dcResistances()[m][s]
+	}
+	if r.IsZero() {
 		return Figure{}, &NotTabulatedError{Field: "wiring.material", Table: necTable8.In(e), Row: "resistance of " + s.String() + " " + m.String(), Covers: "18 AWG to 2000 kcmil"}
 	}
-	return newFigure("dc resistance", Tabulated, e, &necTable8, r[m], OhmPerKft).WithNote(s.String() + " " + m.String()), nil
+	return newFigure("dc resistance", Tabulated, e, &necTable8, r, OhmPerKft).WithNote(s.String() + " " + m.String()), nil
 }
 
 var (
@@ -102,33 +105,11 @@ var impedances = loaded(func() (map[Size]impedanceCell, error) {
 	return cells, nil
 })
 
-var dcResistances = loaded(func() (map[Size][materialCount]exact.Num, error) {
-	const path = "nec/conductor_properties.csv"
-	g, err := open(path)
-	if err != nil {
-		return nil, err
-	}
-	cu, err1 := g.Col("dc_cu_uncoated_ohm_per_kft")
-	al, err2 := g.Col("dc_al_ohm_per_kft")
-	if err1 != nil || err2 != nil {
-		return nil, fmt.Errorf("%s: a column is missing", path)
-	}
-	cells := make(map[Size][materialCount]exact.Num)
-	for _, row := range g.Rows {
-		if row[1] != "stranded" {
-			continue
+var dcResistances = loaded(func() (cells [materialCount]map[Size]exact.Num, err error) {
+	for m, column := range []string{"dc_cu_uncoated_ohm_per_kft", "dc_al_ohm_per_kft"} {
+		if cells[m], err = bySize("nec/conductor_properties.csv", column, stranded); err != nil {
+			return cells, err
 		}
-		s, err := ParseSize(row[0])
-		if err != nil {
-			return nil, err
-		}
-		var n [materialCount]exact.Num
-		for m, col := range []int{cu, al} {
-			if n[m], err = exact.Parse(row[col]); err != nil {
-				return nil, fmt.Errorf("%s: %v: %w", path, s, err)
-			}
-		}
-		cells[s] = n
 	}
 	return cells, nil
 })

@@ -86,11 +86,5 @@ func (l Length) MarshalText() ([]byte, error) { return []byte(l.String()), nil }
 
 // UnmarshalText is [ParseLength]; no text is "not given".
 func (l *Length) UnmarshalText(text []byte) error {
-	*l = Length{}
-	if len(text) == 0 {
-		return nil
-	}
-	p, err := ParseLength(string(text))
-	*l = p
-	return err
+	return readOr(l, text, ParseLength)
 }

@@ -144,11 +144,5 @@ func (p Power) MarshalText() ([]byte, error) { return []byte(p.String()), nil }
 
 // UnmarshalText is [ParsePower]; no text is "not given".
 func (p *Power) UnmarshalText(text []byte) error {
-	*p = Power{}
-	if len(text) == 0 {
-		return nil
-	}
-	q, err := ParsePower(string(text))
-	*p = q
-	return err
+	return readOr(p, text, ParsePower)
 }

@@ -123,13 +123,7 @@ func (q Quantity[U]) MarshalText() ([]byte, error) { return []byte(q.String()), 
 
 // UnmarshalText reads what MarshalText writes; no text is "not given".
 func (q *Quantity[U]) UnmarshalText(text []byte) error {
-	if len(text) == 0 {
-		*q = Quantity[U]{}
-		return nil
-	}
-	p, err := parseQuantity[U](string(text))
-	*q = p
-	return err
+	return readOr(q, text, parseQuantity[U])
 }
 
 func withUnit(n exact.Num, u Unit) string {

@@ -6,6 +6,8 @@ import (
 	"strings"
 
 	"github.com/shopspring/decimal"
+
+	"example.org/motorcircuit/internal/exact"
 )
 
 // A Size is a conductor size: a name of the AWG and kcmil series from 18 AWG
@@ -134,14 +136,14 @@ func (s Size) Area() decimal.Decimal {
 	case s.IsMetric():
 		return decimal.RequireFromString(s.Name())
 	case s.IsValid():
-		return sizeAreas()[s]
+		return sizeAreas()[s].Decimal()
 	}
 	return decimal.Decimal{}
 }
 
 // CircularMils returns the cross-section of an AWG or kcmil size in circular
 // mils, NFPA 70 Chapter 9 Table 8; 0 for other sizes.
-func (s Size) CircularMils() decimal.Decimal { return sizeMils()[s] }
+func (s Size) CircularMils() decimal.Decimal { return sizeMils()[s].Decimal() }
 
 // Cmp compares sizes by cross-section: -1, 0 or 1. The zero Size is smallest.
 func (s Size) Cmp(t Size) int {
@@ -156,38 +158,14 @@ func (s Size) MarshalText() ([]byte, error) { return []byte(s.String()), nil }
 
 // UnmarshalText is [ParseSize]; no text is "not given".
 func (s *Size) UnmarshalText(text []byte) error {
-	*s = 0
-	if len(text) == 0 {
-		return nil
-	}
-	p, err := ParseSize(string(text))
-	*s = p
-	return err
+	return readOr(s, text, ParseSize)
 }
 
 var (
-	sizeAreas = loaded(func() (map[Size]decimal.Decimal, error) { return sizeColumn("area_mm2") })
-	sizeMils  = loaded(func() (map[Size]decimal.Decimal, error) { return sizeColumn("area_cmil") })
+	sizeAreas = loaded(func() (map[Size]exact.Num, error) {
+		return bySize("nec/conductor_standard_sizes.csv", "area_mm2", every)
+	})
+	sizeMils = loaded(func() (map[Size]exact.Num, error) {
+		return bySize("nec/conductor_standard_sizes.csv", "area_cmil", every)
+	})
 )
-
-func sizeColumn(name string) (map[Size]decimal.Decimal, error) {
-	g, err := open("nec/conductor_standard_sizes.csv")
-	if err != nil {
-		return nil, err
-	}
-	col, err := g.Col(name)
-	if err != nil {
-		return nil, err
-	}
-	cells := make(map[Size]decimal.Decimal, len(g.Rows))
-	for _, row := range g.Rows {
-		size, err := ParseSize(row[0])
-		if err != nil {
-			return nil, err
-		}
-		if cells[size], err = decimal.NewFromString(row[col]); err != nil {
-			return nil, err
-		}
-	}
-	return cells, nil
-}

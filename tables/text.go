@@ -33,3 +33,12 @@ func ReadText[T ~uint8](v *T, field string, text []byte, texts []string) error {
 	}
 	return &InputError{Field: field, Value: clip(string(text)), Want: "one of " + strings.Join(want, ", ")}
 }
+
+// readOr sets v to what a parser reads; no text is the zero value, "not given".
+func readOr[T any](v *T, text []byte, parse func(string) (T, error)) (err error) {
+	var none T
+	if *v = none; len(text) > 0 {
+		*v, err = parse(string(text))
+	}
+	return err
+}
