@@ -24,10 +24,10 @@ const (
 
 // A Pull is conductors of one size and insulation that are pulled into a raceway.
 type Pull struct {
-	Insulation string // the edition's designation; of a bare conductor that of the others
-	Size       tables.Size
-	Count      int
-	Bare       bool // bare: NEC Table 8; the CEC's tables have only insulated ones
+	Insulation string      `json:"insulation,omitzero"` // the edition's designation; of a bare conductor that of the others
+	Size       tables.Size `json:"size"`
+	Count      int         `json:"count"`
+	Bare       bool        `json:"bare,omitzero"` // bare: NEC Table 8; the CEC's tables have only insulated ones
 }
 
 // A Filled is a raceway chosen for what is pulled into it.

@@ -109,6 +109,10 @@ func (q Quantity[U]) String() string {
 	return withUnit(q.n, u.unit())
 }
 
+// CurrentOf returns a figure in amperes as a quantity; not given for an absent
+// figure.
+func CurrentOf(f Figure) Current { return Current{f.value, !f.IsZero()} }
+
 // Figure returns q as a figure of the given name, as the caller's input.
 func (q Quantity[U]) Figure(name string) Figure {
 	var u U

@@ -1,0 +1,129 @@
+package motorcircuit
+
+import (
+	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/tables"
+)
+
+// An Installed is what stands of a motor's branch circuit, for [Check]. Every part
+// may be left out: what is not given is not judged.
+type Installed struct {
+	Branch      Conductors         `json:"branch,omitzero"`              // branch-circuit conductors
+	MotorSupply Conductors         `json:"motor_supply,omitzero"`        // run to the motor, where the code treats it apart
+	Secondary   Conductors         `json:"secondary,omitzero"`           // wound-rotor secondary conductors
+	Resistor    Conductors         `json:"resistor,omitzero"`            // conductors to resistors apart from the controller
+	Windings    []InstalledWinding `json:"windings,omitempty"`           // of a multispeed motor, in the order of its nameplate
+	Overload    InstalledOverload  `json:"overload,omitzero"`            // overload protection of the motor
+	Device      InstalledDevice    `json:"device,omitzero"`              // short-circuit and ground-fault device
+	Disconnect  Switch             `json:"disconnecting_means,omitzero"` // disconnecting means
+	Controller  Switch             `json:"controller,omitzero"`          // controller
+	Bonding     BondingConductors  `json:"bonding,omitzero"`             // bonding conductor of each set of conductors
+	Raceway     InstalledRaceway   `json:"raceway,omitzero"`             // raceway of each set of conductors
+	Flexible    InstalledRaceway   `json:"flexible,omitzero"`            // flexible connection at the motor
+	Length      tables.Length      `json:"length,omitzero"`              // of the run, one way; not given is the circuit's
+	HardStart   bool               `json:"hard_start,omitzero"`          // the motor will not start under the ordinary limits, so that the higher ones hold
+}
+
+// An InstalledFeeder is what stands of a feeder, for [CheckFeeder]. What is not
+// given is not judged.
+type InstalledFeeder struct {
+	Conductors Conductors        `json:"conductors,omitzero"`          // feeder conductors
+	Device     InstalledDevice   `json:"device,omitzero"`              // short-circuit and ground-fault device
+	Disconnect Switch            `json:"disconnecting_means,omitzero"` // disconnecting means of the whole group
+	Bonding    BondingConductors `json:"bonding,omitzero"`             // bonding conductor of each set of conductors
+	Raceway    InstalledRaceway  `json:"raceway,omitzero"`             // raceway of each set of conductors
+	Length     tables.Length     `json:"length,omitzero"`              // of the run, one way; not given is the feeder's
+}
+
+// Conductors are the conductors of a run. Their metal, and how they are run, is
+// the wiring's of the circuit.
+type Conductors struct {
+	Size       tables.Size `json:"size,omitzero"`       // AWG or kcmil; zero leaves the run out
+	Sets       int         `json:"sets,omitzero"`       // in parallel for each phase, each set in its own raceway, at most [conductor.MaxSets]; zero is 1
+	Insulation string      `json:"insulation,omitzero"` // the edition's designation; "" is the wiring's
+}
+
+// An InstalledWinding is what stands of the circuit to one winding of a multispeed
+// motor.
+type InstalledWinding struct {
+	Conductors Conductors        `json:"conductors,omitzero"`
+	Overload   InstalledOverload `json:"overload,omitzero"`
+}
+
+// An InstalledOverload is overload protection as it is set.
+type InstalledOverload struct {
+	Setting tables.Current `json:"setting_amps,omitzero"` // current at which it is set to trip
+	Heater  tables.Current `json:"heater_amps,omitzero"`  // rating of a heater, or of a fuse or breaker that serves as overload protection
+	Units   int            `json:"units,omitzero"`        // number of units
+	Share   bool           `json:"share,omitzero"`        // stands inside the delta, or in half of a part winding, and carries its share only
+}
+
+// An InstalledDevice is a short-circuit and ground-fault device.
+type InstalledDevice struct {
+	Kind          tables.Device  `json:"kind,omitzero"`               // zero is the circuit's
+	Rating        tables.Current `json:"rating_amps,omitzero"`        // ampere rating; for an adjustable breaker its setting
+	Instantaneous tables.Current `json:"instantaneous_amps,omitzero"` // setting of the instantaneous trip
+	Interrupting  tables.Current `json:"interrupting_amps,omitzero"`  // interrupting rating
+}
+
+// A Switch is a disconnecting means or a controller: what it is rated.
+type Switch struct {
+	Amperes     tables.Current `json:"amperes,omitzero"`
+	Horsepower  tables.Power   `json:"horsepower,omitzero"`
+	LockedRotor tables.Current `json:"locked_rotor_amperes,omitzero"`
+	Unfused     bool           `json:"unfused,omitzero"` // a listed unfused motor-circuit switch (NEC 430.110(A) Exception)
+}
+
+// BondingConductors are the bonding conductors of a run, one with each set of
+// conductors.
+type BondingConductors struct {
+	Size     tables.Size     `json:"size,omitzero"`     // zero leaves them out
+	Material tables.Material `json:"material,omitzero"` // zero is copper
+}
+
+// An InstalledRaceway is the raceway of each set of conductors.
+type InstalledRaceway struct {
+	Type   tables.Raceway   `json:"type,omitzero"`       // zero is the wiring's
+	Trade  string           `json:"trade_size,omitzero"` // in inches, "3/4", or the metric designator, "21"; "" leaves the raceway out
+	Others []conductor.Pull `json:"others,omitempty"`    // conductors of other circuits in it; those that carry current count in the wiring's Conductors too
+}
+
+// AsInstalled returns the circuit as it was designed, for [Check] to judge when
+// the motor, the length or the surroundings have changed.
+func (r Result) AsInstalled() Installed {
+	in := Installed{
+		Branch: asInstalled(&r.Branch), MotorSupply: asInstalled(&r.MotorSupply), Secondary: asInstalled(&r.Secondary), Resistor: asInstalled(&r.Resistor),
+		Overload:   InstalledOverload{Setting: tables.CurrentOf(r.Overload.Limit), Units: int(r.Overload.Units.Value().IntPart())},
+		Device:     InstalledDevice{Kind: r.ShortCircuit.Device, Rating: tables.CurrentOf(r.ShortCircuit.Rating), Instantaneous: tables.CurrentOf(r.ShortCircuit.Instantaneous), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
+		Disconnect: Switch{Amperes: tables.CurrentOf(r.Disconnect.Amperes), Horsepower: r.Disconnect.Horsepower, LockedRotor: tables.CurrentOf(r.Disconnect.LockedRotor)},
+		Controller: Switch{Amperes: tables.CurrentOf(r.Controller.Amperes), Horsepower: r.Controller.Horsepower, LockedRotor: tables.CurrentOf(r.Controller.LockedRotor)},
+		Bonding:    BondingConductors{Size: r.Bonding.Size, Material: r.Bonding.Material},
+		Raceway:    InstalledRaceway{Type: r.Raceway.Raceway, Trade: r.Raceway.Trade},
+		Flexible:   InstalledRaceway{Type: r.Flexible.Raceway, Trade: r.Flexible.Trade},
+		Length:     r.Circuit.Wiring.Length,
+	}
+	for i := range r.Windings {
+		w := InstalledWinding{Conductors: asInstalled(&r.Windings[i])}
+		if i < len(r.Overload.Windings) {
+			w.Overload.Setting = tables.CurrentOf(r.Overload.Windings[i].Limit)
+		}
+		in.Windings = append(in.Windings, w)
+	}
+	return in
+}
+
+// AsInstalled returns the feeder as it was designed, for [CheckFeeder].
+func (r FeederResult) AsInstalled() InstalledFeeder {
+	return InstalledFeeder{
+		Conductors: asInstalled(&r.Conductors),
+		Device:     InstalledDevice{Kind: r.Device, Rating: tables.CurrentOf(r.Rating), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
+		Disconnect: Switch{Amperes: tables.CurrentOf(r.Disconnect.Amperes), Horsepower: r.Disconnect.Horsepower, LockedRotor: tables.CurrentOf(r.Disconnect.LockedRotor)},
+		Bonding:    BondingConductors{Size: r.Bonding.Size, Material: r.Bonding.Material},
+		Raceway:    InstalledRaceway{Type: r.Raceway.Raceway, Trade: r.Raceway.Trade},
+		Length:     r.Feeder.Wiring.Length,
+	}
+}
+
+func asInstalled(s *conductor.Selection) Conductors {
+	return Conductors{Size: s.Size, Sets: s.Sets, Insulation: s.Insulation}
+}
