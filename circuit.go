@@ -114,8 +114,7 @@ func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
 		load.Ampacity, load.Count = d.Supply, c.Motor.SupplyConductors()
 		c.Wiring.Conductors = atLeastOwn(c.Wiring.Conductors, load.Count)
 		if e.Code() == tables.CEC {
-			n := c.Motor.Nameplate
-			r.MotorSupply, faults[1] = c.Wiring.SelectMotorSupply(e, load, conductor.MotorEnd{InsulationClass: n.InsulationClass, NonVentilated: n.NonVentilated, Power: d.Horsepower})
+			r.MotorSupply, faults[1] = c.Wiring.SelectMotorSupply(e, load, c.motorEnd(&d))
 		} else {
 			r.MotorSupply, faults[1] = c.Wiring.Select(e, load)
 		}
@@ -133,6 +132,12 @@ func (r *Result) conductors(e tables.Edition, c Circuit, d motor.Demand) error {
 		r.Windings, faults[4] = append(r.Windings, s), errors.Join(faults[4], err)
 	}
 	return errors.Join(faults[:]...)
+}
+
+// motorEnd describes the terminal box of the motor.
+func (c *Circuit) motorEnd(d *motor.Demand) conductor.MotorEnd {
+	n := &c.Motor.Nameplate
+	return conductor.MotorEnd{InsulationClass: n.InsulationClass, NonVentilated: n.NonVentilated, Power: d.Horsepower}
 }
 
 // atLeastOwn carries a count given for the branch circuit over to another run,

@@ -105,7 +105,7 @@ func SizeFeeder(f Feeder) (FeederResult, error) {
 	if err != nil {
 		return FeederResult{}, err
 	}
-	g := group{edition: f.Edition, members: members, continuous: f.Continuous.Figure("continuous other load"), other: f.Other.Figure("other load")}
+	g := f.group(members)
 	if err := g.plan(); err != nil {
 		return FeederResult{}, err
 	}
@@ -124,6 +124,11 @@ func SizeFeeder(f Feeder) (FeederResult, error) {
 	}
 	r.Cautions = r.cautions(&g)
 	return r, nil
+}
+
+// group is the motors and other loads of the feeder.
+func (f Feeder) group(members []member) group {
+	return group{edition: f.Edition, members: members, continuous: f.Continuous.Figure("continuous other load"), other: f.Other.Figure("other load")}
 }
 
 // begin validates a feeder and sizes its branch circuits.

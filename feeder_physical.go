@@ -32,9 +32,7 @@ func (r *FeederResult) physical(g *group) error {
 		return err
 	}
 	if f.Wiring.Raceway != 0 {
-		r.Raceway, err = conductor.SelectRaceway(e, f.Wiring.Raceway, false,
-			conductor.Pull{Insulation: r.Conductors.Insulation, Size: r.Conductors.Size, Count: r.Count},
-			conductor.Pull{Insulation: r.Conductors.Insulation, Size: r.Bonding.Size, Count: 1})
+		r.Raceway, err = conductor.SelectRaceway(e, f.Wiring.Raceway, false, pullsOf(&r.Conductors, r.Count, r.Bonding.Size)...)
 		if err != nil {
 			return err
 		}

@@ -65,7 +65,7 @@ func SizeGroup(gr Group) (GroupResult, error) {
 	if err != nil {
 		return GroupResult{}, err
 	}
-	g := group{edition: gr.Edition, members: members, other: gr.Other.Figure("other load")}
+	g := f.group(members)
 	if err := g.plan(); err != nil {
 		return GroupResult{}, err
 	}

@@ -2,6 +2,7 @@ package motorcircuit
 
 import (
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
 )
 
@@ -41,6 +42,10 @@ type Conductors struct {
 	Size       tables.Size `json:"size,omitzero"`       // AWG or kcmil; zero leaves the run out
 	Sets       int         `json:"sets,omitzero"`       // in parallel for each phase, each set in its own raceway, at most [conductor.MaxSets]; zero is 1
 	Insulation string      `json:"insulation,omitzero"` // the edition's designation; "" is the wiring's
+
+	// Insulated is what the insulation of motor supply conductors is rated under the
+	// CEC; not given is the rating of its designation.
+	Insulated tables.Temperature `json:"insulation_rating,omitzero"`
 }
 
 // An InstalledWinding is what stands of the circuit to one winding of a multispeed
@@ -53,7 +58,7 @@ type InstalledWinding struct {
 // An InstalledOverload is overload protection as it is set.
 type InstalledOverload struct {
 	Setting tables.Current `json:"setting_amps,omitzero"` // current at which it is set to trip
-	Heater  tables.Current `json:"heater_amps,omitzero"`  // rating of a heater, or of a fuse or breaker that serves as overload protection
+	Heater  tables.Current `json:"heater_amps,omitzero"`  // rated trip current of its heater
 	Units   int            `json:"units,omitzero"`        // number of units
 	Share   bool           `json:"share,omitzero"`        // stands inside the delta, or in half of a part winding, and carries its share only
 }
@@ -91,16 +96,25 @@ type InstalledRaceway struct {
 // AsInstalled returns the circuit as it was designed, for [Check] to judge when
 // the motor, the length or the surroundings have changed.
 func (r Result) AsInstalled() Installed {
+	x := &r.ShortCircuit
 	in := Installed{
 		Branch: asInstalled(&r.Branch), MotorSupply: asInstalled(&r.MotorSupply), Secondary: asInstalled(&r.Secondary), Resistor: asInstalled(&r.Resistor),
 		Overload:   InstalledOverload{Setting: tables.CurrentOf(r.Overload.Limit), Units: int(r.Overload.Units.Value().IntPart())},
-		Device:     InstalledDevice{Kind: r.ShortCircuit.Device, Rating: tables.CurrentOf(r.ShortCircuit.Rating), Instantaneous: tables.CurrentOf(r.ShortCircuit.Instantaneous), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
-		Disconnect: Switch{Amperes: tables.CurrentOf(r.Disconnect.Amperes), Horsepower: r.Disconnect.Horsepower, LockedRotor: tables.CurrentOf(r.Disconnect.LockedRotor)},
-		Controller: Switch{Amperes: tables.CurrentOf(r.Controller.Amperes), Horsepower: r.Controller.Horsepower, LockedRotor: tables.CurrentOf(r.Controller.LockedRotor)},
+		Device:     InstalledDevice{Kind: x.Device, Rating: tables.CurrentOf(x.Rating), Instantaneous: tables.CurrentOf(x.Instantaneous), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
+		Disconnect: switchAsInstalled(r.Disconnect.Amperes, r.Disconnect.LockedRotor, r.Disconnect.Horsepower),
+		Controller: switchAsInstalled(r.Controller.Amperes, r.Controller.LockedRotor, r.Controller.Horsepower),
 		Bonding:    BondingConductors{Size: r.Bonding.Size, Material: r.Bonding.Material},
 		Raceway:    InstalledRaceway{Type: r.Raceway.Raceway, Trade: r.Raceway.Trade},
 		Flexible:   InstalledRaceway{Type: r.Flexible.Raceway, Trade: r.Flexible.Trade},
 		Length:     r.Circuit.Wiring.Length,
+	}
+	if x.Device == protection.InstantaneousBreaker { // whose limit is a setting
+		in.Device.Instantaneous = tables.CurrentOf(x.Limit)
+	}
+	if least := r.MotorSupply.LeastRating; !least.IsZero() {
+		if _, err := r.Circuit.Edition.Insulation(r.MotorSupply.Insulation); err != nil { // hotter than the branch circuit's, of no certain type
+			in.MotorSupply.Insulation, in.MotorSupply.Insulated = "", tables.TemperatureOf(least)
+		}
 	}
 	for i := range r.Windings {
 		w := InstalledWinding{Conductors: asInstalled(&r.Windings[i])}
@@ -117,7 +131,7 @@ func (r FeederResult) AsInstalled() InstalledFeeder {
 	return InstalledFeeder{
 		Conductors: asInstalled(&r.Conductors),
 		Device:     InstalledDevice{Kind: r.Device, Rating: tables.CurrentOf(r.Rating), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
-		Disconnect: Switch{Amperes: tables.CurrentOf(r.Disconnect.Amperes), Horsepower: r.Disconnect.Horsepower, LockedRotor: tables.CurrentOf(r.Disconnect.LockedRotor)},
+		Disconnect: switchAsInstalled(r.Disconnect.Amperes, r.Disconnect.LockedRotor, r.Disconnect.Horsepower),
 		Bonding:    BondingConductors{Size: r.Bonding.Size, Material: r.Bonding.Material},
 		Raceway:    InstalledRaceway{Type: r.Raceway.Raceway, Trade: r.Raceway.Trade},
 		Length:     r.Feeder.Wiring.Length,
@@ -126,4 +140,8 @@ func (r FeederResult) AsInstalled() InstalledFeeder {
 
 func asInstalled(s *conductor.Selection) Conductors {
 	return Conductors{Size: s.Size, Sets: s.Sets, Insulation: s.Insulation}
+}
+
+func switchAsInstalled(amperes, rotor tables.Figure, horsepower tables.Power) Switch {
+	return Switch{Amperes: tables.CurrentOf(amperes), Horsepower: horsepower, LockedRotor: tables.CurrentOf(rotor)}
 }

@@ -39,7 +39,10 @@ var (
 	mostXR     = motor.Factor("100")
 )
 
-var fifteenPercent = tables.Whole("limit", tables.Percent, 15)
+// pumpStart is what the controller of a fire pump may lose while the motor starts.
+func pumpStart(e tables.Edition) tables.Figure {
+	return tables.StatedFigure("voltage drop starting of a fire pump", e, &pumpDrop, tables.Percent, 15, 0)
+}
 
 // checkPhysical reports what of a run's voltage drop and fault duty cannot stand.
 func checkPhysical(w conductor.Wiring, drop tables.Ratio, fault tables.Current, xr tables.Ratio) error {
@@ -110,7 +113,7 @@ func (c Circuit) branchLoad(ampacity tables.Figure) conductor.Load {
 // physical works out the bonding conductor, the raceway, the voltage drop and
 // the fault duty of the chosen conductors.
 func (r *Result) physical(c Circuit) error {
-	if err := r.bonding(c); err != nil {
+	if err := r.bonding(c, r.ShortCircuit.Rating, r.Branch.Material); err != nil {
 		return err
 	}
 	if err := r.fill(c); err != nil {
@@ -122,11 +125,11 @@ func (r *Result) physical(c Circuit) error {
 	return r.fault(c, c.Fault.Figure("fault current at the source"))
 }
 
-// bonding sizes the bonding conductor by the branch device; an instantaneous
-// trip counts as the time-delay fuse that would be allowed (NEC 250.122(D)(2)).
-func (r *Result) bonding(c Circuit) error {
+// bonding sizes the bonding conductor by the rating of the branch device; an
+// instantaneous trip, which has none, counts as the time-delay fuse that would be
+// allowed (NEC 250.122(D)(2)).
+func (r *Result) bonding(c Circuit, rating tables.Figure, material tables.Material) error {
 	e := c.Edition
-	rating := r.ShortCircuit.Rating
 	if rating.IsZero() {
 		x, err := protection.SizeShortCircuit(e, protection.TimeDelayFuse, c.Motor, r.Demand)
 		if err != nil {
@@ -143,17 +146,16 @@ func (r *Result) bonding(c Circuit) error {
 	if err != nil {
 		return err
 	}
-	r.Bonding, err = conductor.SelectBonding(e, rating, r.Branch, base)
+	run := r.Branch
+	run.Material = material
+	r.Bonding, err = conductor.SelectBonding(e, rating, run, base)
 	return err
 }
 
 // fill chooses the raceway of one set of conductors with its bonding conductor,
 // and that of a flexible connection at the motor.
 func (r *Result) fill(c Circuit) (err error) {
-	pulls := []conductor.Pull{
-		{Insulation: r.Branch.Insulation, Size: r.Branch.Size, Count: c.Motor.LineConductors()},
-		{Insulation: r.Branch.Insulation, Size: r.Bonding.Size, Count: 1},
-	}
+	pulls := pullsOf(&r.Branch, c.Motor.LineConductors(), r.Bonding.Size)
 	for _, x := range []struct {
 		kind tables.Raceway
 		into *conductor.Filled
@@ -167,6 +169,11 @@ func (r *Result) fill(c Circuit) (err error) {
 		x.into.Cautions = append(x.into.Cautions, bondingPath(c.Edition, x.kind)...)
 	}
 	return nil
+}
+
+// pullsOf is what is pulled into the raceway of one set of conductors.
+func pullsOf(s *conductor.Selection, lines int, bonding tables.Size) []conductor.Pull {
+	return []conductor.Pull{{Insulation: s.Insulation, Size: s.Size, Count: lines}, {Insulation: s.Insulation, Size: bonding, Count: 1}}
 }
 
 // bondingPath tells whether a raceway may bond in place of the conductor.
@@ -217,7 +224,7 @@ func (r *Result) dropCautions() (list []tables.Caution) {
 	if !d.Running.IsZero() && d.Running.Cmp(d.Limit) > 0 {
 		list = append(list, tables.Caution{Text: "the voltage drop running of " + d.Running.String() + " is above " + d.Limit.String() + " for one circuit", Cite: d.Limit.Citation()})
 	}
-	if r.Circuit.Motor.Use == motor.FirePump && d.Starting.Cmp(fifteenPercent) > 0 {
+	if r.Circuit.Motor.Use == motor.FirePump && d.Starting.Cmp(pumpStart(r.Circuit.Edition)) > 0 {
 		list = append(list, tables.Caution{Text: "the voltage drop starting of " + d.Starting.String() + " is above the 15 % that a fire pump's controller may lose", Cite: pumpDrop.In(r.Circuit.Edition)})
 	}
 	if !d.Running.IsZero() && r.Circuit.Motor.Nameplate.PowerFactor.IsZero() && r.Circuit.Motor.PhaseCount() > 0 {

@@ -22,7 +22,7 @@ func upsized(e tables.Edition, w conductor.Wiring, s conductor.Selection, load c
 	if most.IsZero() || w.Length.IsZero() {
 		return s, nil
 	}
-	limit := most.Figure("limit of voltage drop")
+	limit := tables.PercentFigure("limit of voltage drop", most)
 	w.Sets = s.Sets
 	for {
 		drop, err := w.RunningDrop(e, s, line)
@@ -32,12 +32,12 @@ func upsized(e tables.Edition, w conductor.Wiring, s conductor.Selection, load c
 		smaller := conductor.Rejected{Size: s.Size, Why: "its voltage drop running is " + drop.String()}
 		w.Least = s.Size.Larger()
 		if w.Least == 0 {
-			return s, &tables.NoSizeError{Field: "max_drop_percent", Need: drop, Constraint: "no size keeps the drop within " + limit.String() + " %"}
+			return s, &tables.NoSizeError{Field: "max_drop_percent", Need: drop, Constraint: "no size keeps the drop within " + limit.String()}
 		}
 		next, err := w.Select(e, load)
 		var none *tables.NoSizeError
 		if errors.As(err, &none) {
-			return s, &tables.NoSizeError{Field: "max_drop_percent", Need: drop, Constraint: "no size keeps the drop within " + limit.String() + " %"}
+			return s, &tables.NoSizeError{Field: "max_drop_percent", Need: drop, Constraint: "no size keeps the drop within " + limit.String()}
 		} else if err != nil {
 			return s, err
 		}

@@ -2,6 +2,7 @@ package conductor
 
 import (
 	"strconv"
+	"strings"
 
 	"example.org/motorcircuit/tables"
 )
@@ -71,54 +72,98 @@ const leastMetric = 16
 // in a nipple (NEC). Errors are [*tables.InputError], [*tables.NotTabulatedError]
 // and [*tables.NoSizeError].
 func SelectRaceway(e tables.Edition, r tables.Raceway, nipple bool, pulls ...Pull) (Filled, error) {
-	sizes, err := e.RacewaySizes(r)
+	p, sizes, err := pulled(e, r, nipple, pulls)
 	if err != nil {
 		return Filled{}, err
 	}
-	rule := &necFill
-	if e.Code() == tables.CEC {
-		rule = &cecFill
-	}
-	f := Filled{Raceway: r}
-	var areas []tables.Figure
-	var diameter tables.Figure
-	for _, p := range pulls {
-		d, area, err := e.ConductorDimensions(p.Insulation, p.Size)
-		if bare := e.BareArea(p.Size); p.Bare && !bare.IsZero() {
-			area, err = bare, nil
-		}
-		if err != nil {
-			return Filled{}, err
-		}
-		areas = append(areas, tables.ProductOf(strconv.Itoa(p.Count)+" of "+p.Size.String(), e, rule, area, tables.Whole("conductors", tables.Plain, p.Count)))
-		f.Conductors += p.Count
-		if p.Count == 3 && !p.Bare {
-			diameter = d
-		}
-	}
-	if f.Conductors == 0 {
-		return Filled{}, &tables.InputError{Field: "wiring.raceway", Want: "at least one conductor to pull into it"}
-	}
-	f.Area = tables.SumOf("area of the conductors", e, rule, areas...)
 	for _, s := range sizes {
 		if s.Metric < leastMetric {
 			continue
 		}
-		limit := s.Limit(f.Conductors, nipple)
-		if limit.IsZero() {
-			limit = s.Limit(f.Conductors, false)
+		if p.Area.Cmp(p.limit(s)) <= 0 {
+			return p.in(s), nil
 		}
-		if f.Area.Cmp(limit) > 0 {
-			continue
-		}
-		f.Trade, f.Metric, f.Limit = s.Trade, s.Metric, limit
-		f.Percent = tables.PercentOf("fill", e, rule, f.Area, s.Area)
-		if !diameter.IsZero() {
-			if ratio := s.Diameter.Float() / diameter.Float(); ratio >= 2.8 && ratio <= 3.2 && e.Code() == tables.NEC && f.Conductors == 3 {
-				f.Cautions = append(f.Cautions, tables.Caution{Text: "three conductors of this size may jam in this raceway while they are pulled", Cite: necJam.In(e)})
-			}
-		}
-		return f, nil
 	}
-	return Filled{}, &tables.NoSizeError{Field: "wiring.raceway", Need: f.Area, Cite: rule.In(e), Constraint: "no trade size of " + r.Name() + " is large enough"}
+	return Filled{}, &tables.NoSizeError{Field: "wiring.raceway", Need: p.Area, Cite: p.rule.In(e), Constraint: "no trade size of " + r.Name() + " is large enough"}
+}
+
+// RateRaceway returns how full a raceway that is there gets of what is pulled into
+// it, whether or not it may be as full. The trade size is in inches, "3/4", or the
+// metric designator, "21". Errors are as of [SelectRaceway]; a trade size that the
+// type has not is a [*tables.NotTabulatedError].
+func RateRaceway(e tables.Edition, r tables.Raceway, trade string, nipple bool, pulls ...Pull) (Filled, error) {
+	p, sizes, err := pulled(e, r, nipple, pulls)
+	if err != nil {
+		return Filled{}, err
+	}
+	names := make([]string, len(sizes))
+	for i, s := range sizes {
+		if trade == s.Trade || trade == strconv.Itoa(s.Metric) {
+			return p.in(s), nil
+		}
+		names[i] = s.Trade + " (" + strconv.Itoa(s.Metric) + ")"
+	}
+	return Filled{}, &tables.NotTabulatedError{Field: "trade_size", Table: sizes[0].Area.Citation(), Row: r.Name() + " of trade size " + strconv.Quote(trade), Covers: strings.Join(names, ", ")}
+}
+
+// A pulling is what is pulled into a raceway of some size.
+type pulling struct {
+	Filled
+	e        tables.Edition
+	rule     *tables.Rule
+	diameter tables.Figure // of one of three insulated conductors
+	nipple   bool
+}
+
+// pulled adds up what is pulled into a type of raceway, and lists its sizes.
+func pulled(e tables.Edition, r tables.Raceway, nipple bool, pulls []Pull) (pulling, []tables.RacewaySize, error) {
+	sizes, err := e.RacewaySizes(r)
+	if err != nil {
+		return pulling{}, nil, err
+	}
+	p := pulling{Filled: Filled{Raceway: r}, e: e, rule: &necFill, nipple: nipple}
+	if e.Code() == tables.CEC {
+		p.rule = &cecFill
+	}
+	var areas []tables.Figure
+	for _, c := range pulls {
+		d, area, err := e.ConductorDimensions(c.Insulation, c.Size)
+		if bare := e.BareArea(c.Size); c.Bare && !bare.IsZero() {
+			area, err = bare, nil
+		}
+		if err != nil {
+			return pulling{}, nil, err
+		}
+		areas = append(areas, tables.ProductOf(strconv.Itoa(c.Count)+" of "+c.Size.String(), e, p.rule, area, tables.Whole("conductors", tables.Plain, c.Count)))
+		p.Conductors += c.Count
+		if c.Count == 3 && !c.Bare {
+			p.diameter = d
+		}
+	}
+	if p.Conductors == 0 {
+		return pulling{}, nil, &tables.InputError{Field: "wiring.raceway", Want: "at least one conductor to pull into it"}
+	}
+	p.Area = tables.SumOf("area of the conductors", e, p.rule, areas...)
+	return p, sizes, nil
+}
+
+// limit is the area of a size that may be filled.
+func (p *pulling) limit(s tables.RacewaySize) tables.Figure {
+	if limit := s.Limit(p.Conductors, p.nipple); !limit.IsZero() {
+		return limit
+	}
+	return s.Limit(p.Conductors, false)
+}
+
+// in returns the raceway of a size, filled.
+func (p *pulling) in(s tables.RacewaySize) Filled {
+	f := p.Filled
+	f.Trade, f.Metric, f.Limit = s.Trade, s.Metric, p.limit(s)
+	f.Percent = tables.PercentOf("fill", p.e, p.rule, f.Area, s.Area)
+	if !p.diameter.IsZero() {
+		if ratio := s.Diameter.Float() / p.diameter.Float(); ratio >= 2.8 && ratio <= 3.2 && p.e.Code() == tables.NEC && f.Conductors == 3 {
+			f.Cautions = append(f.Cautions, tables.Caution{Text: "three conductors of this size may jam in this raceway while they are pulled", Cite: necJam.In(p.e)})
+		}
+	}
+	return f
 }

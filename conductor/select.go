@@ -51,17 +51,26 @@ func (s Selection) IsZero() bool { return s.Size == 0 }
 // are [*tables.InputError], [*tables.NotTabulatedError] and
 // [*tables.NoSizeError].
 func (w Wiring) Select(e tables.Edition, l Load) (Selection, error) {
-	if err := w.check(e, l); err != nil {
+	c, err := w.choice(e, l)
+	if err != nil {
 		return Selection{}, err
+	}
+	return c.choose()
+}
+
+// choice begins the search for the conductors of a wiring that carry the load.
+func (w Wiring) choice(e tables.Edition, l Load) (*choice, error) {
+	if err := w.check(e, l); err != nil {
+		return nil, err
 	}
 	ins, err := w.insulation(e)
 	if err != nil {
-		return Selection{}, err
+		return nil, err
 	}
 	r := rulesOf(e)
 	s := r.start(w, l, ins)
 	s.Termination = r.termination(e, w, l, ins.celsius)
-	return r.choose(e, w, l, ins, s, r.columns(w, ins.celsius, celsiusOf(s.Termination)))
+	return r.choice(e, w, l, ins, s, r.columns(w, ins.celsius, celsiusOf(s.Termination)))
 }
 
 // check reports a wiring or a load that cannot stand.
@@ -92,41 +101,53 @@ func (r *rules) start(w Wiring, l Load, ins insulation) Selection {
 // that the factors apply to, and the one that holds uncorrected.
 type columns struct{ corrected, terminal int }
 
-// choose finds the smallest size for which the corrected ampacity and the
-// uncorrected one of the termination both carry the load.
-func (r *rules) choose(e tables.Edition, w Wiring, l Load, ins insulation, s Selection, cols columns) (Selection, error) {
+// choice looks up the factors of a run and the tables that its conductors are held
+// to.
+func (r *rules) choice(e tables.Edition, w Wiring, l Load, ins insulation, s Selection, cols columns) (*choice, error) {
 	run, err := r.corrections(e, w, l, ins, &s)
 	if err != nil {
-		return Selection{}, err
+		return nil, err
 	}
 	table, err := e.Ampacities(run, w.Material)
 	if err != nil {
-		return Selection{}, err
+		return nil, err
 	}
 	// Terminals go by the table for raceways, also where the run is in free air.
 	terminal, err := e.Ampacities(r.terminalRun(run), w.Material)
 	if err != nil {
-		return Selection{}, err
+		return nil, err
 	}
-	c := choice{e: e, w: w, r: r, s: &s, table: table, terminal: terminal,
-		cols: columns{table.Column(cols.corrected), terminal.Column(cols.terminal)}, most: ins.Most}
-	least := max(r.least[w.Material], ins.Least, w.Least)
+	return &choice{e: e, w: w, r: r, s: s, ins: ins, table: table, terminal: terminal,
+		cols: columns{table.Column(cols.corrected), terminal.Column(cols.terminal)}}, nil
+}
+
+// choose finds the smallest size for which the corrected ampacity and the
+// uncorrected one of the termination both carry the load.
+func (c *choice) choose() (Selection, error) {
 	first, last := 1, MaxSets
-	if w.Sets > 0 {
-		first, last = w.Sets, w.Sets
+	if c.w.Sets > 0 {
+		first, last = c.w.Sets, c.w.Sets
 	}
 	for sets := first; sets <= last; sets++ {
-		from := least
-		if sets > 1 {
-			from = max(least, leastParallel)
-		}
+		least, _ := c.least(sets)
+		from := max(least, c.w.Least)
 		if size := c.smallest(sets, from); size != 0 {
-			c.finish(size, sets, from)
-			return s, nil
+			c.finish(size, sets)
+			c.tellSmaller(from)
+			return c.s, nil
 		}
 	}
-	return Selection{}, &tables.NoSizeError{Field: "wiring", Need: l.Ampacity, Cite: table.Citation(),
-		Constraint: "no " + ins.Type + " " + w.Material.String() + " conductor up to " + ins.Most.String() + " carries it, in " + setsText(first, last)}
+	return Selection{}, &tables.NoSizeError{Field: "wiring", Need: c.s.Required, Cite: c.table.Citation(),
+		Constraint: "no " + c.ins.Type + " " + c.w.Material.String() + " conductor up to " + c.ins.Most.String() + " carries it, in " + setsText(first, last)}
+}
+
+// least returns the smallest size that the code allows in so many sets, and the
+// rule that says so.
+func (c *choice) least(sets int) (tables.Size, *tables.Rule) {
+	if size := max(c.r.least[c.w.Material], c.ins.Least); sets <= 1 || size >= leastParallel {
+		return size, &c.r.leastRule
+	}
+	return leastParallel, &c.r.parallel
 }
 
 func setsText(first, last int) string {
@@ -141,31 +162,33 @@ type choice struct {
 	e               tables.Edition
 	w               Wiring
 	r               *rules
-	s               *Selection
+	s               Selection
+	ins             insulation
 	table, terminal tables.AmpacityTable
 	cols            columns
-	most            tables.Size
+}
+
+// need works out the least table ampacity of one conductor of so many sets.
+func (c *choice) need(sets int) tables.Figure {
+	c.s.Need = c.s.Required
+	if divisors := c.factors(sets); len(divisors) > 0 {
+		c.s.Need = tables.QuotientOf("least table ampacity of one conductor", c.e, &c.r.correction, c.s.Required, divisors...)
+	}
+	return c.s.Need
 }
 
 // smallest returns the smallest size from the given one that carries the load in
 // so many sets, 0 if none does.
 func (c *choice) smallest(sets int, from tables.Size) tables.Size {
-	s := c.s
-	need := s.Required
-	divisors := c.factors(sets)
-	if len(divisors) > 0 {
-		need = tables.QuotientOf("least table ampacity of one conductor", c.e, &c.r.correction, s.Required, divisors...)
-	}
-	s.Need = need
-	size := c.table.AtLeast(need, c.cols.corrected, from, c.most)
+	size := c.table.AtLeast(c.need(sets), c.cols.corrected, from, c.ins.Most)
 	if size == 0 || c.cols.terminal == 0 {
 		return size
 	}
-	at := s.Required
+	at := c.s.Required
 	if sets > 1 {
-		at = tables.QuotientOf("ampacity of one conductor at its termination", c.e, &c.r.parallel, s.Required, setsFigure(sets))
+		at = tables.QuotientOf("ampacity of one conductor at its termination", c.e, &c.r.parallel, at, setsFigure(sets))
 	}
-	return c.terminal.AtLeast(at, c.cols.terminal, size, c.most)
+	return c.terminal.AtLeast(at, c.cols.terminal, size, c.ins.Most)
 }
 
 func setsFigure(sets int) tables.Figure { return tables.Whole("sets in parallel", tables.Plain, sets) }
@@ -186,9 +209,12 @@ func (c *choice) factors(sets int) []tables.Figure {
 }
 
 // usable returns the ampacity of a size in so many sets: the corrected one, or
-// that of its termination if it is less.
+// that of its termination if it is less; absent where a table prints none.
 func (c *choice) usable(size tables.Size, sets int) tables.Figure {
 	corrected := c.table.Ampacity(size, c.cols.corrected)
+	if corrected.IsZero() {
+		return corrected
+	}
 	if f := c.factors(sets); len(f) > 0 {
 		corrected = tables.ProductOf("corrected ampacity", c.e, &c.r.correction, append([]tables.Figure{corrected}, f...)...)
 	}
@@ -196,6 +222,9 @@ func (c *choice) usable(size tables.Size, sets int) tables.Figure {
 		return corrected
 	}
 	terminal := c.terminal.Ampacity(size, c.cols.terminal)
+	if terminal.IsZero() {
+		return terminal
+	}
 	if sets > 1 {
 		terminal = tables.ProductOf("ampacity", c.e, &c.r.parallel, terminal, setsFigure(sets))
 	}
@@ -205,25 +234,30 @@ func (c *choice) usable(size tables.Size, sets int) tables.Figure {
 	return tables.SmallestOf("usable ampacity", c.e, &c.r.terminalRule, corrected, terminal.Renamed(terminal.Name()+" at the terminals"))
 }
 
-// finish fills in the chosen size and tells why the next smaller one fails.
-func (c *choice) finish(size tables.Size, sets int, from tables.Size) {
-	s := c.s
+// finish fills in the size.
+func (c *choice) finish(size tables.Size, sets int) {
+	s := &c.s
 	s.Size, s.Sets = size, sets
 	s.Ampacity = c.usable(size, sets)
 	s.SmallLimit = c.e.SmallConductorLimit(s.Material, size)
-	if smaller := size.Smaller(); smaller >= from {
-		s.Smaller = Rejected{Size: smaller, Ampacity: c.usable(smaller, sets), Why: "carries less than is asked for"}
-	} else if rule := &c.r.leastRule; smaller != 0 {
-		why := "below the smallest size allowed"
-		if sets > 1 {
-			rule, why = &c.r.parallel, "too small to be run in parallel"
-		}
-		s.Smaller = Rejected{Size: smaller, Why: why, Cite: rule.In(c.e)}
-	}
 	if sets > 1 {
 		s.Cautions = append(s.Cautions, tables.Caution{Text: strconv.Itoa(sets) + " conductors in parallel for each phase: each set in a raceway of its own, all of one length, material, size, insulation and way of ending", Cite: c.r.parallel.In(c.e)})
 	}
 	c.r.afterwards(c.e, c.w, s)
+}
+
+// tellSmaller tells why the next size smaller than the chosen one fails.
+func (c *choice) tellSmaller(from tables.Size) {
+	s := &c.s
+	if smaller := s.Size.Smaller(); smaller >= from {
+		s.Smaller = Rejected{Size: smaller, Ampacity: c.usable(smaller, s.Sets), Why: "carries less than is asked for"}
+	} else if rule := &c.r.leastRule; smaller != 0 {
+		why := "below the smallest size allowed"
+		if s.Sets > 1 {
+			rule, why = &c.r.parallel, "too small to be run in parallel"
+		}
+		s.Smaller = Rejected{Size: smaller, Why: why, Cite: rule.In(c.e)}
+	}
 }
 
 func celsiusOf(f tables.Figure) int { return int(f.Value().IntPart()) }

@@ -12,6 +12,10 @@ type MotorEnd struct {
 	InsulationClass string       // A, B, F or H; "" is taken as B
 	NonVentilated   bool         // totally enclosed, non-ventilated motor
 	Power           tables.Power // tells a motor of 100 hp and more, from which the conductors end farther off
+
+	// Insulated is what the insulation of the conductors is rated, for
+	// [Wiring.RateMotorSupply]; not given is the rating of its designation.
+	Insulated tables.Temperature
 }
 
 var cecSupply = tables.Rule{Ref: "Rule 28-104", Mark: tables.MarkB}
@@ -22,12 +26,21 @@ var cecSupply = tables.Rule{Ref: "Rule 28-104", Mark: tables.MarkB}
 // insulation rated at least as Table 37 says, with what the ambient exceeds
 // 30 °C by added. The NEC does not treat them apart: use [Wiring.Select].
 func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selection, error) {
-	if err := w.check(e, l); err != nil {
+	c, err := w.supplyChoice(e, l, end)
+	if err != nil {
 		return Selection{}, err
+	}
+	return c.choose()
+}
+
+// supplyChoice begins the search for motor supply conductors.
+func (w Wiring) supplyChoice(e tables.Edition, l Load, end MotorEnd) (*choice, error) {
+	if err := w.check(e, l); err != nil {
+		return nil, err
 	}
 	ins, err := w.insulation(e)
 	if err != nil {
-		return Selection{}, err
+		return nil, err
 	}
 	class := strings.ToUpper(end.InsulationClass)
 	if class == "" {
@@ -35,7 +48,7 @@ func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selec
 	}
 	least, err := e.SupplyInsulation(class, end.NonVentilated)
 	if err != nil {
-		return Selection{}, err
+		return nil, err
 	}
 	r := rulesOf(e)
 	s := r.start(w, l, ins)
@@ -50,7 +63,9 @@ func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selec
 	if leastCelsius > 75 {
 		s.Cautions = append(s.Cautions, supplyRun(e, end))
 	}
-	if leastCelsius > ins.celsius {
+	if !end.Insulated.IsZero() {
+		ins.celsius = int(end.Insulated.Decimal().IntPart())
+	} else if leastCelsius > ins.celsius {
 		s.Cautions = append(s.Cautions, tables.Caution{Cite: cecSupply.In(e),
 			Text: ins.Type + " is not rated for the motor's terminal box: the motor supply conductors need insulation of " + least.String() + " or more, spliced to the branch conductors"})
 		ins.celsius, ins.Type = leastCelsius, least.String()+" insulation"
@@ -62,7 +77,7 @@ func (w Wiring) SelectMotorSupply(e tables.Edition, l Load, end MotorEnd) (Selec
 		column, note = 90, "90 °C conductors of a Class A motor"
 	}
 	s.Termination = tables.StatedFigure("ampacity column at the motor", e, &cecSupply, tables.Celsius, column, 0).WithNote(note)
-	return r.choose(e, w, l, ins, s, columns{int(column), 0})
+	return r.choice(e, w, l, ins, s, columns{int(column), 0})
 }
 
 // supplyRun tells how long the hotter conductors must be and how far from the

@@ -43,6 +43,11 @@ func SumOf(name string, e Edition, rule *Rule, terms ...Figure) Figure {
 	return newFigure(name, Sum, e, rule, sum, terms[0].unit, terms...)
 }
 
+// DifferenceOf returns whole less part, in their unit.
+func DifferenceOf(name string, e Edition, rule *Rule, whole, part Figure) Figure {
+	return newFigure(name, Difference, e, rule, whole.value.Add(part.value.Mul(exact.Int(-1))), whole.unit, whole, part)
+}
+
 // LargestOf returns the largest of the figures; absent ones are left out. It is
 // absent if all are.
 func LargestOf(name string, e Edition, rule *Rule, figures ...Figure) Figure {

@@ -22,6 +22,7 @@ const (
 	Taken                  // the operand, as the rule takes it for a purpose
 	Product                // of the operands; percents count as hundredths
 	Sum                    // of the operands
+	Difference             // first operand less the second
 	QuotientUp             // first operand ÷ the others, rounded up
 	QuotientDown           // first operand ÷ the others, rounded down
 	Largest                // of the operands
@@ -33,7 +34,7 @@ const (
 )
 
 var opTexts = [...]string{
-	"given", "assumed", "tabulated", "stated", "taken", "product", "sum", "quotient_rounded_up", "quotient_rounded_down",
+	"given", "assumed", "tabulated", "stated", "taken", "product", "sum", "difference", "quotient_rounded_up", "quotient_rounded_down",
 	"largest", "smallest", "next_standard_up", "next_standard_down", "at_least", "computed",
 }
 
@@ -176,6 +177,8 @@ func (f Figure) How() string {
 		list("", " × ", f.of)
 	case Sum:
 		list("", " + ", f.of)
+	case Difference:
+		list("", " − ", f.of)
 	case QuotientUp, QuotientDown:
 		list("", " ÷ ", f.of)
 	case Largest:

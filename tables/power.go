@@ -139,6 +139,20 @@ func (p Power) String() string {
 	return p.Text() + " " + p.Unit().String()
 }
 
+// Figure returns p as a figure of the given name, as the caller's input; absent if
+// p is not given. A fraction that is no decimal, such as 1/3, is rounded down to
+// six places, and a note says so.
+func (p Power) Figure(name string) Figure {
+	if p.den == 0 {
+		return Figure{}
+	}
+	f := newFigure(name, Given, 0, nil, exact.Int(p.num).DivDown(exact.Int(p.den), 6), p.Unit())
+	if 1_000_000%p.den != 0 {
+		f = f.WithNote(p.String() + ", rounded down to six places")
+	}
+	return f
+}
+
 // MarshalText is [Power.String].
 func (p Power) MarshalText() ([]byte, error) { return []byte(p.String()), nil }
 

@@ -113,6 +113,10 @@ func (q Quantity[U]) String() string {
 // figure.
 func CurrentOf(f Figure) Current { return Current{f.value, !f.IsZero()} }
 
+// TemperatureOf returns a figure in degrees Celsius as a quantity; not given for
+// an absent figure.
+func TemperatureOf(f Figure) Temperature { return Temperature{f.value, !f.IsZero()} }
+
 // Figure returns q as a figure of the given name, as the caller's input.
 func (q Quantity[U]) Figure(name string) Figure {
 	var u U
@@ -120,6 +124,16 @@ func (q Quantity[U]) Figure(name string) Figure {
 		return Figure{}
 	}
 	return Figure{value: q.n, unit: u.unit(), name: name, op: Given}
+}
+
+// PercentFigure returns a number of percent as a figure of the given name, as the
+// caller's input; absent if it is not given.
+func PercentFigure(name string, percent Ratio) Figure {
+	f := percent.Figure(name)
+	if !f.IsZero() {
+		f.unit = Percent
+	}
+	return f
 }
 
 // MarshalText is [Quantity.String].

@@ -141,6 +141,19 @@ func (s Size) Area() decimal.Decimal {
 	return decimal.Decimal{}
 }
 
+// Figure returns the cross-section of s as a figure of the given name: for AWG and
+// kcmil sizes that of NFPA 70, Chapter 9 Table 8. It is absent for the zero Size.
+func (s Size) Figure(name string) Figure {
+	switch {
+	case s.IsMetric():
+		n, _ := exact.Parse(s.Name())
+		return newFigure(name, Given, 0, nil, n, SquareMillimetre).WithNote(s.String())
+	case s.IsValid():
+		return newFigure(name, Tabulated, 0, &necTable8, sizeAreas()[s], SquareMillimetre).WithNote(s.String())
+	}
+	return Figure{}
+}
+
 // CircularMils returns the cross-section of an AWG or kcmil size in circular
 // mils, NFPA 70 Chapter 9 Table 8; 0 for other sizes.
 func (s Size) CircularMils() decimal.Decimal { return sizeMils()[s].Decimal() }

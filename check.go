@@ -1,0 +1,129 @@
+package motorcircuit
+
+import (
+	"errors"
+
+	"example.org/motorcircuit/protection"
+	"example.org/motorcircuit/tables"
+)
+
+// Check holds an installed circuit against the rules that [Size] designs by. The
+// circuit tells the motor, the code in force and how the circuit is run; where what
+// is installed has a kind of device, a type of raceway or a length of its own, that
+// holds. Least and Sets of its wiring are not used. Parts that are not given are
+// listed as not judged; where another part depends on one, as a bonding conductor
+// on the conductors, what Size would choose stands in.
+//
+// Errors are as of [Size], and [*tables.InputError] for what is installed, with the
+// path in [Installed] after "installed.". With an error comes the zero Report.
+func Check(c Circuit, in Installed) (Report, error) {
+	k := checker{judge: judge{edition: c.Edition}, in: in}
+	c = in.stands(c)
+	if err := errors.Join(c.Edition.Check(), in.validate(c)); err != nil {
+		return Report{}, errors.Join(err, c.Motor.Validate())
+	}
+	if c.Motor.Voltage > MaxVolts {
+		return Report{}, c.Validate()
+	}
+	d, err := c.Motor.Demand(c.Edition)
+	k.admit(&c)
+	if err := errors.Join(err, c.validateRest()); err != nil {
+		return Report{}, err
+	}
+	k.r = Result{Circuit: c, Demand: d}
+	k.report.Tag, k.report.Edition = c.Tag, c.Edition
+	for _, part := range []func() error{k.conductors, k.overload, k.device, k.switches, k.bonding, k.raceways, k.drop} {
+		if err := part(); err != nil {
+			return Report{}, err
+		}
+	}
+	return k.finish(k.r.cautions()), nil
+}
+
+// A checker is a check under way. Its result is the circuit as it stands.
+type checker struct {
+	judge
+	in Installed
+	r  Result
+
+	unfit bool // the kind of device may not protect the motor
+}
+
+// stands returns the circuit as it stands, as far as it is described by one.
+func (in *Installed) stands(c Circuit) Circuit {
+	w := &c.Wiring
+	w.Least, w.Sets = 0, 0
+	if in.Device.Kind != 0 {
+		c.Device = in.Device.Kind
+	}
+	if in.Raceway.Type != 0 {
+		w.Raceway = in.Raceway.Type
+	}
+	if in.Flexible.Type != 0 {
+		w.Flexible = in.Flexible.Type
+	}
+	if !in.Length.IsZero() {
+		w.Length = in.Length
+	}
+	return c
+}
+
+// admit finds a kind of device that may not protect the motor, and an insulation
+// that may not be used where it is. The circuit goes on without them.
+func (k *checker) admit(c *Circuit) {
+	var input *tables.InputError
+	if err := protection.ValidateDevice(c.Edition, c.device(), c.Motor.Kind); errors.As(err, &input) && !input.Cite.IsZero() {
+		k.say(DeviceKind, "device.kind", Violation, "the device is an "+c.device().Name()+", and the code asks for "+input.Want, input.Cite)
+		k.unfit, c.Device = true, protection.TimeDelayFuse
+	}
+	k.strip("branch.insulation", &c.Wiring)
+}
+
+// overload judges the overload protection of the motor and of its windings.
+func (k *checker) overload() (err error) {
+	o := &k.r.Overload
+	if *o, err = protection.SizeOverload(k.edition, k.r.Circuit.Motor, k.r.Demand); err != nil {
+		return err
+	}
+	in := k.in.Overload
+	given := !in.Setting.IsZero() || !in.Heater.IsZero() || in.Units > 0
+	if o.Limit.IsZero() { // 695.6: none may be
+		if given {
+			k.say(OverloadAbsent, "overload", Violation, "there is overload protection, and the motor must have none", o.Cautions[0].Cite)
+		}
+		return nil
+	}
+	if in.Units > 0 {
+		k.atLeast(claim{code: OverloadUnits, part: "overload.units", found: tables.Whole("number of overload units", tables.Plain, in.Units)}, o.Units, Violation)
+	} else {
+		k.skip("overload.units", "not given")
+	}
+	most := ceiling{limit: o.Limit, start: o.StartLimit, confirmed: k.in.HardStart, over: Violation}
+	if in.Share {
+		most = ceiling{limit: o.Share, over: Violation}
+	}
+	k.settings("overload", in, most)
+	for i, w := range o.Windings {
+		if i < len(k.in.Windings) {
+			k.settings(windingPart(i)+".overload", k.in.Windings[i].Overload, ceiling{limit: w.Limit, start: w.StartLimit, confirmed: k.in.HardStart, over: Violation})
+		} else {
+			k.skip(windingPart(i)+".overload", "not given")
+		}
+	}
+	return nil
+}
+
+// settings judges the setting and the heater of overload protection, of which one
+// is enough.
+func (k *checker) settings(part string, in InstalledOverload, most ceiling) {
+	if in.Setting.IsZero() && in.Heater.IsZero() {
+		k.skip(part+".setting_amps", "not given")
+		return
+	}
+	if !in.Setting.IsZero() {
+		k.atMost(claim{code: OverloadSetting, part: part + ".setting_amps", found: in.Setting.Figure("overload setting")}, most)
+	}
+	if !in.Heater.IsZero() {
+		k.atMost(claim{code: OverloadSetting, part: part + ".heater_amps", found: in.Heater.Figure("rated trip current of the heater")}, most)
+	}
+}
