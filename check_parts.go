@@ -186,7 +186,13 @@ func (k *judge) filled(part string, kind tables.Raceway, in InstalledRaceway, pu
 		k.skip(part, "the conductors in it cannot be judged or chosen")
 		return nil
 	}
-	f, err := conductor.RateRaceway(k.edition, kind, in.Trade, false, append(pulls, in.Others...)...)
+	for _, other := range in.Others {
+		if other.Insulation == "" {
+			other.Insulation = pulls[0].Insulation
+		}
+		pulls = append(pulls, other)
+	}
+	f, err := conductor.RateRaceway(k.edition, kind, in.Trade, false, pulls...)
 	var missing *tables.NotTabulatedError
 	switch {
 	case errors.As(err, &missing) && missing.Field != "trade_size": // an insulation that the tables have no area of

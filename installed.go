@@ -90,7 +90,7 @@ type BondingConductors struct {
 type InstalledRaceway struct {
 	Type   tables.Raceway   `json:"type,omitzero"`       // zero is the wiring's
 	Trade  string           `json:"trade_size,omitzero"` // in inches, "3/4", or the metric designator, "21"; "" leaves the raceway out
-	Others []conductor.Pull `json:"others,omitempty"`    // conductors of other circuits in it; those that carry current count in the wiring's Conductors too
+	Others []conductor.Pull `json:"others,omitempty"`    // conductors of other circuits in it, of the circuit's own insulation where none is named; those that carry current count in the wiring's Conductors too
 }
 
 // AsInstalled returns the circuit as it was designed, for [Check] to judge when

@@ -145,8 +145,5 @@ func (x *inspection) raceway(part string, in InstalledRaceway, kind tables.Racew
 			x.add(at+".count", itoa(p.Count), "1 to 1000 conductors")
 		}
 		x.insulation(at, p.Insulation)
-		if p.Insulation == "" {
-			x.add(at+".insulation", "", "the edition's designation; of a bare conductor that of the others")
-		}
 	}
 }

@@ -39,6 +39,11 @@ var (
 	mostXR     = motor.Factor("100")
 )
 
+// pumpRunning is what the run to a fire pump may lose while the motor runs.
+func pumpRunning(e tables.Edition) tables.Figure {
+	return tables.StatedFigure("voltage drop running of a fire pump", e, &pumpDrop, tables.Percent, 5, 0).WithNote("at 115 % of full-load current; 15 % while starting")
+}
+
 // pumpStart is what the controller of a fire pump may lose while the motor starts.
 func pumpStart(e tables.Edition) tables.Figure {
 	return tables.StatedFigure("voltage drop starting of a fire pump", e, &pumpDrop, tables.Percent, 15, 0)

@@ -100,7 +100,7 @@ func (r *Result) drops(c Circuit) (err error) {
 	d := &r.Drop
 	d.Limit = dropLimit(e)
 	if c.Motor.Use == motor.FirePump {
-		d.Limit = tables.StatedFigure("voltage drop running of a fire pump", e, &pumpDrop, tables.Percent, 5, 0).WithNote("at 115 % of full-load current; 15 % while starting")
+		d.Limit = pumpRunning(e)
 	}
 	if d.Running, err = c.Wiring.RunningDrop(e, r.Branch, l); err != nil {
 		return err

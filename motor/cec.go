@@ -47,7 +47,7 @@ func (d *Demand) cec(m Motor, e tables.Edition) error {
 	}
 	if m.Power.IsHP() {
 		d.Horsepower = m.Power
-	} else if p, err := e.PowerAtOrAbove(m.table(), m.Voltage, d.Design); err == nil && m.Kind != Torque {
+	} else if p, err := e.PowerAtOrAbove(m.Table(), m.Voltage, d.Design); err == nil && m.Kind != Torque {
 		d.Horsepower = p
 		d.caution(e, &cecGuide, "the motor is not marked in horsepower: that of the first table row to carry its amperes is taken for the disconnecting means")
 	}
@@ -79,7 +79,7 @@ func (d *Demand) cecDesign(m Motor, e tables.Edition) error {
 	case n.Multispeed || m.Use == ValveActuator || n.HighTorque || m.lowSpeed():
 		return needAmperes("the nameplate current of a motor of several speeds, of low speed or of high torque", &cecTorque, e)
 	}
-	table, err := e.FullLoadCurrent(m.table(), m.Power, m.Voltage)
+	table, err := e.FullLoadCurrent(m.Table(), m.Power, m.Voltage)
 	if err != nil {
 		return instead(err, "motor.nameplate.amperes, where given, sizes any motor")
 	}

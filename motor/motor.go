@@ -92,8 +92,9 @@ func (m Motor) PhaseCount() int {
 	return m.Kind.phases()
 }
 
-// table returns the table of full-load current that serves the motor.
-func (m Motor) table() tables.MotorTable {
+// Table returns the table of full-load current that serves the motor by its kind
+// and phases.
+func (m Motor) Table() tables.MotorTable {
 	switch {
 	case m.Kind == DirectCurrent:
 		return tables.DirectCurrentTable

@@ -131,10 +131,10 @@ func (m Motor) necByNameplate() (why string, rule *tables.Rule) {
 // necFromTable takes the table current; a motor larger than the table's column
 // goes by its nameplate.
 func (d *Demand) necFromTable(m Motor, e tables.Edition, marked tables.Figure) error {
-	table, err := e.FullLoadCurrent(m.table(), m.Power, m.Voltage)
+	table, err := e.FullLoadCurrent(m.Table(), m.Power, m.Voltage)
 	if err != nil {
-		largest, noColumn := e.LargestPower(m.table(), m.Voltage)
-		if noColumn != nil || m.Power.IsHP() && m.Power.Cmp(largest) <= 0 {
+		powers, noColumn := e.MotorPowers(m.Table(), m.Voltage)
+		if noColumn != nil || m.Power.IsHP() && m.Power.Cmp(powers[len(powers)-1]) <= 0 {
 			return err
 		}
 		if marked.IsZero() {
@@ -225,7 +225,7 @@ func (d *Demand) necHorsepower(m Motor, e tables.Edition) {
 	if m.Kind == Torque {
 		return
 	}
-	p, err := e.PowerAtOrAbove(m.table(), m.Voltage, d.Design)
+	p, err := e.PowerAtOrAbove(m.Table(), m.Voltage, d.Design)
 	if err == nil && m.Kind == Hermetic {
 		var rotor tables.Power
 		if rotor, err = e.PowerAtOrAboveLockedRotor(m.PhaseCount(), m.Voltage, d.LockedRotor.High); rotor.Cmp(p) > 0 {

@@ -21,6 +21,12 @@ func StatedFigure(name string, e Edition, rule *Rule, unit Unit, coef int64, pla
 	return newFigure(name, Stated, e, rule, exact.New(coef, places), unit)
 }
 
+// StepFigure returns coef × 10^-places of the unit, found by trying step by step
+// under what the rule names.
+func StepFigure(name string, e Edition, rule *Rule, unit Unit, coef int64, places int) Figure {
+	return newFigure(name, Tried, e, rule, exact.New(coef, places), unit)
+}
+
 // ProductOf returns the product of the factors, in the unit of the first.
 // Percents count as hundredths.
 func ProductOf(name string, e Edition, rule *Rule, factors ...Figure) Figure {

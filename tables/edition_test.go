@@ -93,7 +93,7 @@ func TestNoEdition(t *testing.T) {
 		assert.ErrorAs(t, err, new(*tables.InputError))
 		_, err = e.PowerAtOrAboveLockedRotor(3, 460, amps("65"))
 		assert.ErrorAs(t, err, new(*tables.InputError))
-		_, err = e.LargestPower(tables.InductionTable, 460)
+		_, err = e.MotorPowers(tables.InductionTable, 460)
 		assert.ErrorAs(t, err, new(*tables.InputError))
 		assert.Empty(t, e.Insulations())
 		assert.Empty(t, e.StartCeilings(tables.TimeDelayFuse, amps("65")))

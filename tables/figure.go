@@ -30,12 +30,13 @@ const (
 	NextUp                 // the first standard rating at or above the operand
 	NextDown               // the highest standard rating not above the operand
 	AtLeast                // the operand, raised to a least value that Note names
+	Tried                  // found step by step, as the last that stands
 	Computed               // by physics, in floating point; the note says how it is rounded
 )
 
 var opTexts = [...]string{
 	"given", "assumed", "tabulated", "stated", "taken", "product", "sum", "difference", "quotient_rounded_up", "quotient_rounded_down",
-	"largest", "smallest", "next_standard_up", "next_standard_down", "at_least", "computed",
+	"largest", "smallest", "next_standard_up", "next_standard_down", "at_least", "tried", "computed",
 }
 
 // String returns the stable text form.
@@ -191,6 +192,8 @@ func (f Figure) How() string {
 		list("the highest standard rating not above ", "", f.of[:1])
 	case AtLeast:
 		list("raised from ", ", ", f.of)
+	case Tried:
+		b.WriteString("found step by step")
 	case Computed:
 		list("computed from ", ", ", f.of)
 	}

@@ -2,6 +2,7 @@ package tables_test
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 	"testing"
 
@@ -66,16 +67,18 @@ func TestPowerAtOrAbove(t *testing.T) {
 	_, err = tables.CEC2024.PowerAtOrAboveLockedRotor(3, 460, amps("1"))
 	assert.ErrorAs(t, err, new(*tables.NotTabulatedError))
 	for _, tt := range []struct {
-		table tables.MotorTable
-		volts int
-		want  string
-	}{{tables.InductionTable, 460, "500 hp"}, {tables.InductionTable, 208, "200 hp"}, {tables.SinglePhaseTable, 230, "10 hp"}, {tables.DirectCurrentTable, 90, "1 hp"}} {
-		p, err = tables.NEC2023.LargestPower(tt.table, tt.volts)
+		table       tables.MotorTable
+		volts       int
+		first, last string
+	}{{tables.InductionTable, 460, "1/2 hp", "500 hp"}, {tables.InductionTable, 208, "1/2 hp", "200 hp"}, {tables.SinglePhaseTable, 230, "1/6 hp", "10 hp"}, {tables.DirectCurrentTable, 90, "1/4 hp", "1 hp"}} {
+		powers, err := tables.NEC2023.MotorPowers(tt.table, tt.volts)
 		require.NoError(t, err)
-		assert.Equal(t, tt.want, p.String())
+		assert.Equal(t, tt.first, powers[0].String())
+		assert.Equal(t, tt.last, powers[len(powers)-1].String())
+		assert.True(t, slices.IsSortedFunc(powers, tables.Power.Cmp))
 	}
 	for _, volts := range []int{0, 400} {
-		_, err = tables.NEC2023.LargestPower(tables.InductionTable, volts)
+		_, err = tables.NEC2023.MotorPowers(tables.InductionTable, volts)
 		assert.ErrorAs(t, err, new(*tables.NotTabulatedError))
 	}
 }

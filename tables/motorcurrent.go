@@ -91,18 +91,18 @@ func (m *motorTable) powerAtOrAbove(e Edition, volts int, current Figure) (Power
 	return Power{}, &NotTabulatedError{Field: "motor.nameplate.amperes", Table: m.rule.In(e), Row: "row at or above " + current.String(), Col: m.cols[col].label, Covers: m.covers(col)}
 }
 
-// LargestPower returns the largest power that the table prints at that voltage.
-func (e Edition) LargestPower(t MotorTable, volts int) (Power, error) {
+// MotorPowers returns the powers that the table prints at that voltage, smallest
+// first: the standard motors.
+func (e Edition) MotorPowers(t MotorTable, volts int) ([]Power, error) {
 	m, err := e.motorTable(t)
 	if err != nil {
-		return Power{}, err
+		return nil, err
 	}
 	col, err := m.column(e, volts, "row")
 	if err != nil {
-		return Power{}, err
+		return nil, err
 	}
-	_, last := m.span(col)
-	return last, nil
+	return m.printed(col), nil
 }
 
 func (e Edition) motorTable(t MotorTable) (*motorTable, error) {
@@ -253,30 +253,22 @@ func (m *motorTable) column(e Edition, volts int, row string) (int, error) {
 	return 0, &NotTabulatedError{Field: "motor.voltage", Table: m.rule.In(e), Row: row, Col: strconv.Itoa(volts) + " V", Covers: b.String() + " V"}
 }
 
-// span returns the first and the last power that a column prints.
-func (m *motorTable) span(col int) (first, last Power) {
+// printed returns the powers that a column prints.
+func (m *motorTable) printed(col int) (powers []Power) {
 	for row, p := range m.powers {
 		if m.cell(row, col) >= 0 {
-			if first.IsZero() {
-				first = p
-			}
-			last = p
+			powers = append(powers, p)
 		}
 	}
-	return first, last
+	return powers
 }
 
 func (m *motorTable) covers(col int) string {
-	var b strings.Builder
-	for row, p := range m.powers {
-		if m.cell(row, col) >= 0 {
-			if b.Len() > 0 {
-				b.WriteString(", ")
-			}
-			b.WriteString(p.Text())
-		}
+	var texts []string
+	for _, p := range m.printed(col) {
+		texts = append(texts, p.Text())
 	}
-	return b.String() + " hp"
+	return strings.Join(texts, ", ") + " hp"
 }
 
 func (m *motorTable) figure(name string, e Edition, p Power, volts int) (Figure, error) {
