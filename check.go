@@ -17,17 +17,18 @@ import (
 // Errors are as of [Size], and [*tables.InputError] for what is installed, with the
 // path in [Installed] after "installed.". With an error comes the zero Report.
 func Check(c Circuit, in Installed) (Report, error) {
-	k := checker{judge: judge{edition: c.Edition}, in: in}
-	c = in.stands(c)
-	if err := errors.Join(c.Edition.Check(), in.validate(c)); err != nil {
+	if err := c.Edition.Check(); err != nil {
 		return Report{}, errors.Join(err, c.Motor.Validate())
 	}
+	k := checker{judge: judge{edition: c.Edition}, in: in}
+	c = in.stands(c)
+	faults := in.validate(c)
 	if c.Motor.Voltage > MaxVolts {
-		return Report{}, c.Validate()
+		return Report{}, errors.Join(c.Validate(), faults)
 	}
 	d, err := c.Motor.Demand(c.Edition)
 	k.admit(&c)
-	if err := errors.Join(err, c.validateRest()); err != nil {
+	if err := errors.Join(err, c.validateRest(), faults); err != nil {
 		return Report{}, err
 	}
 	k.r = Result{Circuit: c, Demand: d}
@@ -53,7 +54,7 @@ type checker struct {
 func (in *Installed) stands(c Circuit) Circuit {
 	w := &c.Wiring
 	w.Least, w.Sets = 0, 0
-	if in.Device.Kind != 0 {
+	if in.Device.Kind.IsValid() {
 		c.Device = in.Device.Kind
 	}
 	if in.Raceway.Type != 0 {

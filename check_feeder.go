@@ -47,7 +47,7 @@ type feederChecker struct {
 func (in *InstalledFeeder) stands(f Feeder) Feeder {
 	w := &f.Wiring
 	w.Least, w.Sets = 0, 0
-	if in.Device.Kind != 0 {
+	if in.Device.Kind.IsValid() {
 		f.Device = in.Device.Kind
 	}
 	if in.Raceway.Type != 0 {

@@ -105,6 +105,9 @@ func (x *inspection) overload(part string, in InstalledOverload, shares bool) {
 }
 
 func (x *inspection) device(in InstalledDevice) {
+	if in.Kind != 0 && !in.Kind.IsValid() {
+		x.add("device.kind", itoa(int(in.Kind)), "a kind of fuse or breaker")
+	}
 	x.current("device.rating_amps", in.Rating)
 	x.current("device.instantaneous_amps", in.Instantaneous)
 	x.current("device.interrupting_amps", in.Interrupting)
