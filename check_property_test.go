@@ -344,7 +344,7 @@ var steps = []step{
 func TestCheckFindsOneStep(t *testing.T) {
 	count := 4_000
 	if testing.Short() {
-		count = 500
+		count = 1_500
 	}
 	taken := map[string]int{}
 	randomDesigns(t, 7, count, func(_ *rand.Rand, r motorcircuit.Result) {

@@ -3,8 +3,8 @@ package motorcircuit
 import (
 	"errors"
 	"fmt"
-	"strings"
 
+	"example.org/motorcircuit/internal/layout"
 	"example.org/motorcircuit/tables"
 )
 
@@ -139,25 +139,33 @@ func (d *Difference) differs() bool {
 }
 
 // String tells the differences, one value a line with its rule.
-func (x Comparison) String() string {
-	var b strings.Builder
+func (x Comparison) String() string { return x.Text(0) }
+
+// Text is [Comparison.String] in lines of at most so many characters, 40 at the
+// least; 0 leaves them as long as they are.
+func (x Comparison) Text(width int) string { return x.document().Text(width) }
+
+// Markdown returns the differences in Markdown, a table for each.
+func (x Comparison) Markdown() string { return x.document().Markdown() }
+
+func (x *Comparison) document() *layout.Doc {
+	d := &layout.Doc{Columns: [4]string{"Edition", "Value", "", "Rule"}}
 	if len(x.Results) > 0 {
-		fmt.Fprintf(&b, "%s: %s\n", oneLine(x.Results[0].Circuit.Tag), describe(&x.Results[0]))
+		d.Title = oneLine(x.Results[0].Circuit.Tag) + ": " + describe(&x.Results[0])
 	}
 	if len(x.Differences) == 0 {
-		b.WriteString("\nno figure differs between the editions\n")
+		d.Sections = append(d.Sections, layout.Section{Heading: "No figure differs between the editions"})
 	}
-	for _, d := range x.Differences {
-		fmt.Fprintf(&b, "\n%s, %s\n", d.Section, d.What)
+	for _, diff := range x.Differences {
+		s := layout.Section{Heading: diff.Section + ", " + diff.What}
 		for i, e := range x.Editions {
-			value, cite := d.Values[i], ""
-			if value == "" {
-				value = "-"
-			} else if !d.Cites[i].IsZero() {
-				cite = ref(d.Cites[i])
+			row := layout.Row{Value: e.String(), Name: diff.Values[i], Rule: refsOf(diff.Cites[i : i+1])}
+			if row.Name == "" {
+				row = layout.Row{Value: e.String(), Name: "-"}
 			}
-			fmt.Fprintf(&b, "  %-9s %s %s\n", e, value, cite)
+			s.Rows = append(s.Rows, row)
 		}
+		d.Sections = append(d.Sections, s)
 	}
-	return b.String()
+	return d
 }

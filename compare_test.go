@@ -35,7 +35,7 @@ func TestCompareEditions(t *testing.T) {
 	assert.Equal(t, []string{"15 A", "10 A"}, d.Values)
 	assert.Equal(t, "NFPA 70-2020 430.52(C)(1) Exception No. 1", d.Cites[0].String())
 	assert.Equal(t, "NFPA 70-2023 430.52(C)(1)(a)", d.Cites[1].String())
-	assert.Contains(t, x.String(), "  NEC-2020  15 A [430.52(C)(1) Exception No. 1]\n  NEC-2023  10 A [430.52(C)(1)(a)]\n")
+	assert.Contains(t, x.String(), "\n    NEC-2020  15 A [430.52(C)(1) Exception No. 1]\n    NEC-2023  10 A [430.52(C)(1)(a)]\n")
 }
 
 // NEC 430.32(C) has a second step for overload, the CEC none; the CEC does not
@@ -58,7 +58,7 @@ func TestCompareWithItself(t *testing.T) {
 		x, err := motorcircuit.Compare(c, e, e, e)
 		require.NoError(t, err)
 		assert.Empty(t, x.Differences)
-		assert.Contains(t, x.String(), "no figure differs")
+		assert.Contains(t, x.String(), "No figure differs")
 	}
 	c := pumpRun(0)
 	forth, err := motorcircuit.Compare(c, tables.NEC2017, tables.CEC2021)

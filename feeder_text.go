@@ -5,6 +5,7 @@ import (
 	"iter"
 	"strings"
 
+	"example.org/motorcircuit/internal/layout"
 	"example.org/motorcircuit/tables"
 )
 
@@ -43,50 +44,59 @@ func (r *FeederResult) disconnectFigures(list []*tables.Figure) []*tables.Figure
 
 // String returns the derivation as text: the motors with their part in the sum,
 // then each figure with how it came about and the rule behind it.
-func (r FeederResult) String() string {
-	var b strings.Builder
-	fmt.Fprintf(&b, "%s: feeder of %s, under %s\n\nLoads that size the conductors\n", oneLine(r.Feeder.Tag), motors(len(r.Circuits)), r.Feeder.Edition.Standard())
-	for _, t := range r.Terms {
-		writeFigure(&b, t.Figure)
+func (r FeederResult) String() string { return r.Text(0) }
+
+// Text is [FeederResult.String] in lines of at most so many characters, 40 at the
+// least; 0 leaves them as long as they are.
+func (r FeederResult) Text(width int) string { return r.document().Text(width) }
+
+// Markdown returns the derivation in Markdown, a table for each section.
+func (r FeederResult) Markdown() string { return r.document().Markdown() }
+
+func (r *FeederResult) document() *layout.Doc {
+	d := &layout.Doc{Title: fmt.Sprintf("%s: feeder of %s, under %s", oneLine(r.Feeder.Tag), motors(len(r.Circuits)), r.Feeder.Edition.Standard()), Columns: derivationColumns}
+	add := func(heading, chosen string, rows ...layout.Row) {
+		d.Sections = append(d.Sections, layout.Section{Heading: heading, Chosen: chosen, Rows: rows})
 	}
-	if r.Governs != "" {
-		fmt.Fprintf(&b, "%12s  %s governs the conductors\n", "", oneLine(r.Governs))
-	} else {
-		fmt.Fprintf(&b, "%12s  no motor counts 125 percent: none is of continuous duty, or one that is not counts as much by its duty\n", "")
-	}
-	if len(r.NotCounted) > 0 {
-		fmt.Fprintf(&b, "%12s  not counted: %s\n", "", oneLine(strings.Join(r.NotCounted, ", ")))
-	}
-	write := func(heading, chosen string, figures []*tables.Figure) {
-		fmt.Fprintf(&b, "\n%s: %s\n", heading, chosen)
-		for _, f := range figures {
-			if !f.IsZero() {
-				writeFigure(&b, *f)
-			}
-		}
-	}
-	write("Feeder conductors", wires(&r.Conductors), selectionFigures(nil, &r.Conductors))
-	b.WriteString(whySmallerFails(&r.Conductors))
-	write("Feeder short-circuit and ground-fault device", r.Rating.String()+" "+r.Device.Name(), r.deviceFigures(nil))
-	fmt.Fprintf(&b, "%12s  the device of %s governs\n", "", oneLine(r.Largest))
-	write("Disconnecting means of the group", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite), r.disconnectFigures(nil))
-	write("Bonding conductor", fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why), []*tables.Figure{&r.Bonding.Row})
+	remark := func(text string) layout.Row { return layout.Row{Name: text} }
+	add("Loads that size the conductors", "", r.termRows()...)
+	add("Feeder conductors", wires(&r.Conductors), append(figureRows(selectionFigures(nil, &r.Conductors)), whySmallerFails(&r.Conductors)...)...)
+	add("Feeder short-circuit and ground-fault device", r.Rating.String()+" "+r.Device.Name(), append(figureRows(r.deviceFigures(nil)), remark("the device of "+oneLine(r.Largest)+" governs"))...)
+	add("Disconnecting means of the group", rating(r.Disconnect.Amperes, r.Disconnect.Horsepower, r.Disconnect.Cite), figureRows(r.disconnectFigures(nil))...)
+	add("Bonding conductor", fmt.Sprintf("%v %v, %s", r.Bonding.Size, r.Bonding.Material, r.Bonding.Why), figureRow(r.Bonding.Row))
 	if !r.Raceway.IsZero() {
-		write("Raceway", r.Raceway.Name(r.Feeder.Edition), racewayFigures(nil, &r.Raceway))
+		add("Raceway", r.Raceway.Name(r.Feeder.Edition), figureRows(racewayFigures(nil, &r.Raceway))...)
 	}
 	if !r.Drop.Running.IsZero() {
-		write("Voltage drop", r.Drop.Running.String(), dropFigures(nil, &r.Drop))
+		rows := figureRows(dropFigures(nil, &r.Drop))
 		for i, total := range r.TotalDrop {
 			if !total.IsZero() {
-				writeFigure(&b, total.Renamed("feeder and branch circuit of "+oneLine(r.Circuits[i].Circuit.Tag)))
+				rows = append(rows, figureRow(total.Renamed("feeder and branch circuit of "+oneLine(r.Circuits[i].Circuit.Tag))))
 			}
 		}
+		add("Voltage drop", r.Drop.Running.String(), rows...)
 	}
-	if d := &r.FaultDuty; !d.AtMotor.IsZero() {
-		write("Fault duty", d.AtMotor.String()+" at the end of the feeder", []*tables.Figure{&d.Source, &d.AtMotor, &d.Withstand})
+	if f := &r.FaultDuty; !f.AtMotor.IsZero() {
+		add("Fault duty", f.AtMotor.String()+" at the end of the feeder", figureRows([]*tables.Figure{&f.Source, &f.AtMotor, &f.Withstand})...)
 	}
-	writeCautions(&b, r.Cautions)
-	return b.String()
+	d.Sections = append(d.Sections, cautionSection(r.Cautions))
+	return d
+}
+
+// termRows are the parts of the sum, and which motor counts more.
+func (r *FeederResult) termRows() (rows []layout.Row) {
+	for _, t := range r.Terms {
+		rows = append(rows, figureRow(t.Figure))
+	}
+	if r.Governs != "" {
+		rows = append(rows, layout.Row{Name: oneLine(r.Governs) + " governs the conductors"})
+	} else {
+		rows = append(rows, layout.Row{Name: "no motor counts 125 percent: none is of continuous duty, or one that is not counts as much by its duty"})
+	}
+	if len(r.NotCounted) > 0 {
+		rows = append(rows, layout.Row{Name: "not counted: " + oneLine(strings.Join(r.NotCounted, ", "))})
+	}
+	return rows
 }
 
 // The cautions that a feeder as such gives rise to.

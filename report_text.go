@@ -1,41 +1,51 @@
 package motorcircuit
 
-import (
-	"fmt"
-	"strings"
-
-	"example.org/motorcircuit/tables"
-)
+import "example.org/motorcircuit/internal/layout"
 
 // String tells the findings, gravest first, then what was not judged and what the
 // judgement rests on.
-func (r Report) String() string {
-	var b strings.Builder
-	fmt.Fprintf(&b, "%s: %s, under %s\n", oneLine(r.Tag), r.verdict(), r.Edition.Standard())
+func (r Report) String() string { return r.Text(0) }
+
+// Text is [Report.String] in lines of at most so many characters, 40 at the least;
+// 0 leaves them as long as they are.
+func (r Report) Text(width int) string { return r.document().Text(width) }
+
+// Markdown returns the report in Markdown.
+func (r Report) Markdown() string { return r.document().Markdown() }
+
+func (r *Report) document() *layout.Doc {
+	d := &layout.Doc{Title: oneLine(r.Tag) + ": " + r.verdict() + ", under " + r.Edition.Standard()}
+	list := func(heading string, items []string) {
+		if len(items) > 0 {
+			d.Sections = append(d.Sections, layout.Section{Heading: heading, List: items})
+		}
+	}
 	for _, group := range []struct {
 		severity Severity
 		heading  string
 	}{{Violation, "Violations"}, {Caution, "To be confirmed"}, {Note, "Requirements met"}} {
-		heading := group.heading
+		var items []string
 		for _, f := range r.Findings {
-			if f.Severity != group.severity {
-				continue
+			if f.Severity == group.severity {
+				items = append(items, f.Part+": "+f.Text+bracketed(refsOf(f.Cites)))
 			}
-			if heading != "" {
-				fmt.Fprintf(&b, "\n%s\n", heading)
-				heading = ""
-			}
-			fmt.Fprintf(&b, "  - %s: %s%s\n", f.Part, f.Text, refsOf(f.Cites))
 		}
+		list(group.heading, items)
 	}
-	if len(r.NotJudged) > 0 {
-		b.WriteString("\nNot judged\n")
-		for _, n := range r.NotJudged {
-			fmt.Fprintf(&b, "  - %s: %s\n", n.Part, oneLine(n.Why))
-		}
+	var items []string
+	for _, n := range r.NotJudged {
+		items = append(items, n.Part+": "+oneLine(n.Why))
 	}
-	writeCautions(&b, r.Cautions)
-	return b.String()
+	list("Not judged", items)
+	d.Sections = append(d.Sections, cautionSection(r.Cautions))
+	return d
+}
+
+func bracketed(rules string) string {
+	if rules == "" {
+		return ""
+	}
+	return " [" + rules + "]"
 }
 
 // verdict counts the findings in words.
@@ -56,17 +66,4 @@ func plural(n int, thing string) string {
 		return "1 " + thing
 	}
 	return itoa(n) + " " + thing + "s"
-}
-
-// refsOf prints citations without their edition, which the heading names.
-func refsOf(cites []tables.Citation) string {
-	texts := make([]string, len(cites))
-	for i, c := range cites {
-		c.Edition = 0
-		texts[i] = c.String()
-	}
-	if len(texts) == 0 {
-		return ""
-	}
-	return " [" + strings.Join(texts, "; ") + "]"
 }

@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/layout"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -178,4 +179,39 @@ func refusal(r Report, err error) (Finding, string) {
 		}
 	}
 	return Finding{}, ""
+}
+
+// String tells what else the circuit would do, and what binds.
+func (h Headroom) String() string { return h.Text(0) }
+
+// Text is [Headroom.String] in lines of at most so many characters, 40 at the
+// least; 0 leaves them as long as they are.
+func (h Headroom) Text(width int) string { return h.document().Text(width) }
+
+// Markdown returns the headroom in Markdown.
+func (h Headroom) Markdown() string { return h.document().Markdown() }
+
+func (h *Headroom) document() *layout.Doc {
+	return headroomDocument(h.Tag, h.Motor.row("largest motor", h.Power), h.Run.row("longest run", tables.Power{}),
+		h.Ambient.row("highest ambient", tables.Power{}), h.Conductors.row("conductors that may join", tables.Power{}))
+}
+
+func headroomDocument(tag string, rows ...layout.Row) *layout.Doc {
+	return &layout.Doc{Title: oneLine(tag) + ": headroom, each thing alone", Columns: [4]string{"Edge", "What", "One step further", "Rule"},
+		Sections: []layout.Section{{Heading: "What else it would carry", Rows: rows}, cautionSection([]tables.Caution{standing})}}
+}
+
+// row sets an edge. A power is written as the trade does.
+func (x *Edge) row(name string, p tables.Power) layout.Row {
+	row := layout.Row{Value: x.Value.String(), Name: name, How: x.Why}
+	switch {
+	case !p.IsZero():
+		row.Value = p.String()
+	case x.Value.IsZero():
+		row.Value = "-"
+	}
+	if x.Binds.Code != 0 {
+		row.How, row.Rule = "one step further, "+x.Binds.Part+": "+x.Binds.Text, refsOf(x.Binds.Cites)
+	}
+	return row
 }

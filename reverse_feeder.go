@@ -6,6 +6,7 @@ import (
 
 	"github.com/shopspring/decimal"
 
+	"example.org/motorcircuit/internal/layout"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
@@ -69,4 +70,18 @@ func largestAdded(f Feeder, in InstalledFeeder) (tables.Power, Edge) {
 		f.Circuits = append(slices.Clone(f.Circuits), FeederCircuit{Circuit: Circuit{Tag: "motor added", Edition: f.Edition, Motor: m, Device: f.Device}})
 		return CheckFeeder(f, in)
 	})
+}
+
+// String tells what else the feeder would carry, and what binds.
+func (h FeederHeadroom) String() string { return h.Text(0) }
+
+// Text is [FeederHeadroom.String] in lines of at most so many characters, 40 at the
+// least; 0 leaves them as long as they are.
+func (h FeederHeadroom) Text(width int) string { return h.document().Text(width) }
+
+// Markdown returns the headroom in Markdown.
+func (h FeederHeadroom) Markdown() string { return h.document().Markdown() }
+
+func (h *FeederHeadroom) document() *layout.Doc {
+	return headroomDocument(h.Tag, h.Spare.row("spare amperes", tables.Power{}), h.Motor.row("largest motor", h.Power))
 }

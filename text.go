@@ -7,17 +7,21 @@ import (
 	"strings"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/internal/layout"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
 )
 
 // String returns the derivation as text: what was asked, each figure with how
 // it came about and the rule behind it, the choices made, and the cautions.
-func (r Result) String() string {
-	var b strings.Builder
-	r.write(&b)
-	return b.String()
-}
+func (r Result) String() string { return r.Text(0) }
+
+// Text is [Result.String] in lines of at most so many characters, 40 at the least;
+// 0 leaves them as long as they are.
+func (r Result) Text(width int) string { return r.document().Text(width) }
+
+// Markdown returns the derivation in Markdown, a table for each section.
+func (r Result) Markdown() string { return r.document().Markdown() }
 
 // WriteTo writes the text of [Result.String].
 func (r Result) WriteTo(w io.Writer) (int64, error) {
@@ -25,47 +29,49 @@ func (r Result) WriteTo(w io.Writer) (int64, error) {
 	return int64(n), err
 }
 
-func (r *Result) write(b *strings.Builder) {
+// derivationColumns head the rows of a derivation.
+var derivationColumns = [4]string{"Value", "What", "How", "Rule"}
+
+func (r *Result) document() *layout.Doc {
 	c := &r.Circuit
-	fmt.Fprintf(b, "%s: %s, under %s\n", oneLine(c.Tag), describe(r), c.Edition.Standard())
+	d := &layout.Doc{Title: fmt.Sprintf("%s: %s, under %s", oneLine(c.Tag), describe(r), c.Edition.Standard()), Columns: derivationColumns}
 	for s := range sectionCount {
-		lines := r.section(nil, s)
+		rows := figureRows(r.section(nil, s))
 		chosen := r.chosen(s)
-		if !slices.ContainsFunc(lines, func(f *tables.Figure) bool { return !f.IsZero() }) && chosen == "" {
+		if len(rows) == 0 && chosen == "" {
 			continue
 		}
-		fmt.Fprintf(b, "\n%s", s)
-		if chosen != "" {
-			fmt.Fprintf(b, ": %s", chosen)
-		}
-		b.WriteByte('\n')
-		for _, f := range lines {
-			if !f.IsZero() {
-				writeFigure(b, *f)
-			}
-		}
 		for _, x := range r.selections(s) {
-			b.WriteString(whySmallerFails(x))
+			rows = append(rows, whySmallerFails(x)...)
 		}
+		d.Sections = append(d.Sections, layout.Section{Heading: s.String(), Chosen: chosen, Rows: rows})
 	}
-	writeCautions(b, r.Cautions)
+	d.Sections = append(d.Sections, cautionSection(r.Cautions))
+	return d
 }
 
-// writeFigure writes one line of a derivation: the value, what it is, how it
-// came about and the rules behind it.
-func writeFigure(b *strings.Builder, f tables.Figure) {
-	fmt.Fprintf(b, "%12s  %s: %s%s\n", f, oneLine(f.Name()), f.How(), refs(f))
+// figureRows sets the figures that are present, one a row.
+func figureRows(figures []*tables.Figure) (rows []layout.Row) {
+	for _, f := range figures {
+		if !f.IsZero() {
+			rows = append(rows, figureRow(*f))
+		}
+	}
+	return rows
 }
 
-func writeCautions(b *strings.Builder, cautions []tables.Caution) {
-	b.WriteString("\nCautions\n")
-	for _, caution := range cautions {
-		fmt.Fprintf(b, "  - %s", caution.Text)
-		if cite := ref(caution.Cite); cite != "" {
-			b.WriteString(" " + cite)
-		}
-		b.WriteByte('\n')
+// figureRow sets a figure: the value, what it is, how it came about and the rules
+// behind it.
+func figureRow(f tables.Figure) layout.Row {
+	return layout.Row{Value: f.String(), Name: oneLine(f.Name()), How: f.How(), Rule: refs(f)}
+}
+
+func cautionSection(cautions []tables.Caution) layout.Section {
+	s := layout.Section{Heading: "Cautions"}
+	for _, c := range cautions {
+		s.List = append(s.List, strings.TrimSpace(c.Text+" "+ref(c.Cite)))
 	}
+	return s
 }
 
 // ref prints a citation without its edition, which the heading names.
@@ -86,6 +92,11 @@ func refs(f tables.Figure) string {
 			cites = append(cites, c)
 		}
 	}
+	return refsOf(cites)
+}
+
+// refsOf prints citations without their edition.
+func refsOf(cites []tables.Citation) string {
 	var texts []string
 	for _, c := range cites {
 		if !c.IsZero() {
@@ -93,10 +104,7 @@ func refs(f tables.Figure) string {
 			texts = append(texts, c.String())
 		}
 	}
-	if len(texts) == 0 {
-		return ""
-	}
-	return " [" + strings.Join(texts, "; ") + "]"
+	return strings.Join(texts, "; ")
 }
 
 func describe(r *Result) string {
@@ -194,15 +202,18 @@ func wires(s *conductor.Selection) string {
 }
 
 // whySmallerFails says why the next smaller size does not do.
-func whySmallerFails(x *conductor.Selection) string {
-	switch small := x.Smaller; {
-	case small.Size == 0:
-		return ""
-	case small.Ampacity.IsZero():
-		return fmt.Sprintf("%12s  next smaller size, fails: %s %s\n", small.Size, small.Why, ref(small.Cite))
-	default:
-		return fmt.Sprintf("%12s  next smaller size, fails: carries %v, %s\n", small.Size, small.Ampacity, small.Ampacity.How())
+func whySmallerFails(x *conductor.Selection) []layout.Row {
+	small := x.Smaller
+	if small.Size == 0 {
+		return nil
 	}
+	row := layout.Row{Value: small.Size.String(), Name: "next smaller size, fails"}
+	if small.Ampacity.IsZero() {
+		row.How, row.Rule = small.Why, refsOf([]tables.Citation{small.Cite})
+	} else {
+		row.How = "carries " + small.Ampacity.String() + ", " + small.Ampacity.How()
+	}
+	return []layout.Row{row}
 }
 
 // oneLine returns a caller's text on one line, "-" if there is none.
