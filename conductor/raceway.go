@@ -103,7 +103,7 @@ func RateRaceway(e tables.Edition, r tables.Raceway, trade string, nipple bool, 
 		}
 		names[i] = s.Trade + " (" + strconv.Itoa(s.Metric) + ")"
 	}
-	return Filled{}, &tables.NotTabulatedError{Field: "trade_size", Table: sizes[0].Area.Citation(), Row: r.Name() + " of trade size " + strconv.Quote(trade), Covers: strings.Join(names, ", ")}
+	return Filled{}, &tables.NotTabulatedError{Field: "trade_size", Table: sizes[0].Area.Citation(), Row: r.Name() + " of trade size " + strconv.Quote(trade[:min(len(trade), 40)]), Covers: strings.Join(names, ", ")}
 }
 
 // A pulling is what is pulled into a raceway of some size.

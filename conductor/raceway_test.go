@@ -1,6 +1,7 @@
 package conductor_test
 
 import (
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -174,6 +175,13 @@ func TestJamming(t *testing.T) {
 		require.NoError(t, err)
 		assert.Equal(t, jams, testkit.Cautioned(f.Cautions, "Chapter 9 Table 1", "jam"), awg)
 	}
+}
+
+// A trade size that no table has is told shortened.
+func TestLongTradeSize(t *testing.T) {
+	_, err := conductor.RateRaceway(tables.NEC2023, conductor.EMT, strings.Repeat("9", 1<<20), false, pull("THWN", "8", 3))
+	require.ErrorAs(t, err, new(*tables.NotTabulatedError))
+	assert.Less(t, len(err.Error()), 500)
 }
 
 // A bare bonding conductor takes its own area, NEC Chapter 9 Table 8 note 8: 6
