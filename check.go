@@ -72,12 +72,19 @@ func (in *Installed) stands(c Circuit) Circuit {
 // admit finds a kind of device that may not protect the motor, and an insulation
 // that may not be used where it is. The circuit goes on without them.
 func (k *checker) admit(c *Circuit) {
-	var input *tables.InputError
-	if err := protection.ValidateDevice(c.Edition, c.device(), c.Motor.Kind); errors.As(err, &input) && !input.Cite.IsZero() {
-		k.say(DeviceKind, "device.kind", Violation, "the device is an "+c.device().Name()+", and the code asks for "+input.Want, input.Cite)
-		k.unfit, c.Device = true, protection.TimeDelayFuse
-	}
+	k.unsuited(c, protection.ValidateDevice(c.Edition, c.device(), c.Motor.Kind))
 	k.strip("branch.insulation", &c.Wiring)
+}
+
+// unsuited reports an error that is of the kind of device, and takes the kind away.
+func (k *checker) unsuited(c *Circuit, err error) bool {
+	var input *tables.InputError
+	if !errors.As(err, &input) || input.Field != "device" || input.Cite.IsZero() {
+		return false
+	}
+	k.say(DeviceKind, "device.kind", Violation, "the device is an "+c.device().Name()+", and the code asks for "+input.Want, input.Cite)
+	k.unfit, c.Device = true, protection.TimeDelayFuse
+	return true
 }
 
 // overload judges the overload protection of the motor and of its windings.

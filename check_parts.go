@@ -18,7 +18,11 @@ var (
 // device judges the short-circuit device.
 func (k *checker) device() (err error) {
 	c, in, x := &k.r.Circuit, k.in.Device, &k.r.ShortCircuit
-	if *x, err = protection.SizeShortCircuit(k.edition, c.device(), c.Motor, k.r.Demand); err != nil {
+	*x, err = protection.SizeShortCircuit(k.edition, c.device(), c.Motor, k.r.Demand)
+	if k.unsuited(c, err) { // by a use of the motor, which its kind does not tell
+		*x, err = protection.SizeShortCircuit(k.edition, c.device(), c.Motor, k.r.Demand)
+	}
+	if err != nil {
 		return err
 	}
 	rating := claim{code: DeviceRating, part: "device.rating_amps", found: in.Rating.Figure("rating of the device")}

@@ -120,8 +120,12 @@ func (k *judge) strip(part string, w *conductor.Wiring) {
 	}
 }
 
-// barred reports an insulation that may not be used where a wiring is.
+// barred reports an insulation that may not be used where a wiring is. One that the
+// edition does not know is left to the errors.
 func (k *judge) barred(part string, w conductor.Wiring) bool {
+	if _, err := k.edition.Insulation(w.Insulation); err != nil {
+		return false
+	}
 	for _, fault := range tables.Faults(w.Validate(k.edition)) {
 		var input *tables.InputError
 		if errors.As(fault, &input) && input.Field == "wiring.insulation" && !input.Cite.IsZero() {

@@ -106,7 +106,7 @@ func bondingBase(e tables.Edition, w conductor.Wiring, s conductor.Selection, lo
 	}
 	w.Ambient, w.Conductors, w.Rooftop, w.Least, w.Sets = tables.Temperature{}, 0, false, 0, s.Sets
 	load.Count = 1
-	s, err := w.Select(e, load)
+	s, err := chosen(w.Select(e, load)) // none: nothing is larger than it need be
 	return s.Size, err
 }
 
@@ -244,7 +244,7 @@ func (r *Result) dropCautions() (list []tables.Caution) {
 	if !r.FaultDuty.Source.IsZero() {
 		list = append(list, tables.Caution{Text: "fault duty is for bolted faults: compare the withstand time with the device's own clearing curve, and its interrupting rating with the fault current at the source and what motors add"})
 	}
-	if r.BySize != r.Branch.Size && r.BySize != 0 {
+	if r.Branch.Size.Cmp(r.BySize) > 0 && r.BySize != 0 {
 		list = append(list, tables.Caution{Text: "the branch-circuit conductors are larger than the " + r.BySize.String() + " that ampacity asks for, on account of voltage drop or a least size"})
 	}
 	return list

@@ -103,7 +103,7 @@ func RateRaceway(e tables.Edition, r tables.Raceway, trade string, nipple bool, 
 		}
 		names[i] = s.Trade + " (" + strconv.Itoa(s.Metric) + ")"
 	}
-	return Filled{}, &tables.NotTabulatedError{Field: "trade_size", Table: sizes[0].Area.Citation(), Row: r.Name() + " of trade size " + strconv.Quote(trade), Covers: strings.Join(names, ", ")}
+	return Filled{}, &tables.NotTabulatedError{Field: "trade_size", Table: sizes[0].Area.Citation(), Row: r.Name() + " of trade size " + strconv.Quote(trade[:min(len(trade), 40)]), Covers: strings.Join(names, ", ")}
 }
 
 // A pulling is what is pulled into a raceway of some size.
@@ -111,7 +111,7 @@ type pulling struct {
 	Filled
 	e        tables.Edition
 	rule     *tables.Rule
-	diameter tables.Figure // of one of three insulated conductors
+	diameter tables.Figure // of one of three insulated conductors that are alike; absent for others
 	nipple   bool
 }
 
@@ -126,7 +126,8 @@ func pulled(e tables.Edition, r tables.Raceway, nipple bool, pulls []Pull) (pull
 		p.rule = &cecFill
 	}
 	var areas []tables.Figure
-	for _, c := range pulls {
+	alike := true
+	for i, c := range pulls {
 		d, area, err := e.ConductorDimensions(c.Insulation, c.Size)
 		if bare := e.BareArea(c.Size); c.Bare && !bare.IsZero() {
 			area, err = bare, nil
@@ -136,9 +137,11 @@ func pulled(e tables.Edition, r tables.Raceway, nipple bool, pulls []Pull) (pull
 		}
 		areas = append(areas, tables.ProductOf(strconv.Itoa(c.Count)+" of "+c.Size.String(), e, p.rule, area, tables.Whole("conductors", tables.Plain, c.Count)))
 		p.Conductors += c.Count
-		if c.Count == 3 && !c.Bare {
-			p.diameter = d
-		}
+		alike = alike && !c.Bare && (i == 0 || d.Cmp(p.diameter) == 0)
+		p.diameter = d
+	}
+	if !alike || p.Conductors != 3 {
+		p.diameter = tables.Figure{}
 	}
 	if p.Conductors == 0 {
 		return pulling{}, nil, &tables.InputError{Field: "wiring.raceway", Want: "at least one conductor to pull into it"}
@@ -161,7 +164,7 @@ func (p *pulling) in(s tables.RacewaySize) Filled {
 	f.Trade, f.Metric, f.Limit = s.Trade, s.Metric, p.limit(s)
 	f.Percent = tables.PercentOf("fill", p.e, p.rule, f.Area, s.Area)
 	if !p.diameter.IsZero() {
-		if ratio := s.Diameter.Float() / p.diameter.Float(); ratio >= 2.8 && ratio <= 3.2 && p.e.Code() == tables.NEC && f.Conductors == 3 {
+		if ratio := s.Diameter.Float() / p.diameter.Float(); ratio >= 2.8 && ratio <= 3.2 && p.e.Code() == tables.NEC {
 			f.Cautions = append(f.Cautions, tables.Caution{Text: "three conductors of this size may jam in this raceway while they are pulled", Cite: necJam.In(p.e)})
 		}
 	}

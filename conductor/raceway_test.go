@@ -1,6 +1,7 @@
 package conductor_test
 
 import (
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -167,6 +168,20 @@ func TestJamming(t *testing.T) {
 	f, err := conductor.SelectRaceway(tables.NEC2023, conductor.EMT, false, pull("THWN", "4/0", 4))
 	require.NoError(t, err)
 	assert.Empty(t, f.Cautions)
+	// Two lines and a third conductor jam if it is as thick as they are: 0.622 in
+	// over 0.216 in is 2.88.
+	for awg, jams := range map[string]bool{"8": true, "10": false} {
+		f, err := conductor.RateRaceway(tables.NEC2023, conductor.EMT, "1/2", false, pull("THWN", "8", 2), pull("THWN", awg, 1))
+		require.NoError(t, err)
+		assert.Equal(t, jams, testkit.Cautioned(f.Cautions, "Chapter 9 Table 1", "jam"), awg)
+	}
+}
+
+// A trade size that no table has is told shortened.
+func TestLongTradeSize(t *testing.T) {
+	_, err := conductor.RateRaceway(tables.NEC2023, conductor.EMT, strings.Repeat("9", 1<<20), false, pull("THWN", "8", 3))
+	require.ErrorAs(t, err, new(*tables.NotTabulatedError))
+	assert.Less(t, len(err.Error()), 500)
 }
 
 // A bare bonding conductor takes its own area, NEC Chapter 9 Table 8 note 8: 6

@@ -2,9 +2,9 @@ package schedule
 
 import (
 	"errors"
-	"io"
 
 	mc "example.org/motorcircuit"
+	"example.org/motorcircuit/tables"
 )
 
 // A tally counts answers.
@@ -38,23 +38,16 @@ func answerMotors(s *sheet[motorRow], feeders *feederList, out output, p progres
 		return 0, nil, err
 	}
 	var n tally
-	for broken == nil {
-		var r *row[motorRow]
-		if r, broken = s.next(); r == nil {
-			break
-		}
+	broken, err = s.each(p, func(r *row[motorRow], whole bool) error {
 		a := sizeMotor(r)
 		n.count(a.faults)
-		if feeders != nil && broken == nil {
+		if feeders != nil && whole {
 			feeders.note(r, len(a.faults) == 0)
 		}
-		if err := out.row(a); err != nil {
-			return n.failed, broken, err
-		}
-		p.report(n.sized + n.failed)
-	}
-	if broken == io.EOF {
-		broken = nil
+		return out.row(a)
+	})
+	if err != nil {
+		return n.failed, broken, err
 	}
 	if feeders != nil && broken != nil {
 		feeders.breakOff(broken)
@@ -80,12 +73,20 @@ func answerFeeders(feeders *feederList, out output) (failed int, err error) {
 
 // sizeMotor answers a row of the schedule.
 func sizeMotor(r *row[motorRow]) *answer[mc.Result] {
-	a := &answer[mc.Result]{entry: r.entry}
+	return answerTo(r, func(m *motorRow) (mc.Result, tables.Edition, error) {
+		result, err := mc.Size(m.Circuit)
+		return result, m.Edition, err
+	})
+}
+
+// answerTo answers a row by what the library makes of it.
+func answerTo[T, R any](r *row[T], ask func(*T) (R, tables.Edition, error)) *answer[R] {
+	a := &answer[R]{entry: r.entry}
 	if !r.broken {
-		result, err := mc.Size(r.value.Circuit)
+		result, code, err := ask(&r.value)
 		r.faults.judge(err)
 		if len(r.faults.list) == 0 {
-			a.result, a.code = result, r.value.Edition.String()
+			a.result, a.code = result, code.String()
 		}
 	}
 	a.faults = r.faults.texts()

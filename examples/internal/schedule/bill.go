@@ -22,7 +22,7 @@ func RunTakeoff(prices string, args []string, stdin io.Reader, stdout, stderr io
 	return program{name: "takeoff", formats: billFormats, prices: prices}.run(args, stdin, stdout, stderr)
 }
 
-var billFormats = []format{
+var billFormats = []format[newOutput]{
 	{"text", func(w io.Writer, s settings) output { return &bill{w: w, settings: s, write: (*bill).text} }},
 	{"csv", func(w io.Writer, s settings) output { return &bill{w: w, settings: s, write: (*bill).csv} }},
 }

@@ -3,9 +3,12 @@ package schedule
 import (
 	"encoding"
 	"errors"
+	"regexp"
 	"slices"
 	"strconv"
 	"strings"
+
+	"github.com/shopspring/decimal"
 
 	"example.org/motorcircuit/conductor"
 	"example.org/motorcircuit/tables"
@@ -21,6 +24,20 @@ type column[T any] struct {
 
 	field string // the library's name for it, in errors; "" if it has none
 	needs string // columns whose faults leave this one undecided
+
+	// said turns what the library says of a value into the words of the column;
+	// nil where they are the same.
+	said func(text string) string
+}
+
+// lift makes columns of a part into columns of the whole.
+func lift[T, U any](columns []column[T], part func(*U) *T) []column[U] {
+	lifted := make([]column[U], len(columns))
+	for i, c := range columns {
+		set := c.set
+		lifted[i] = column[U]{c.name, c.must, func(v *U, text string) error { return set(part(v), text) }, c.field, c.needs, c.said}
+	}
+	return lifted
 }
 
 // A layout is the columns that the program knows of one kind of input.
@@ -48,14 +65,24 @@ func (l *layout[T]) named(name string) int {
 	return slices.IndexFunc(l.columns, func(c column[T]) bool { return c.name == name })
 }
 
-// of returns the column that the library's field stands in, -1 if none does. A
-// wiring that no size suits is told at the conductor.
+// elsewhere are fields of the library that are told at the column of another.
+var elsewhere = map[string]string{
+	"wiring":                  "conductor", // that no size suits
+	"installed.raceway.type":  "raceway",
+	"installed.flexible.type": "flexible",
+}
+
+// of returns the column that the library's field stands in, -1 if none does. The
+// wiring of an installed run is that of the circuit.
 func (l *layout[T]) of(field string) int {
-	switch field {
-	case "":
+	if field == "" {
 		return -1
-	case "wiring":
-		return l.named("conductor")
+	}
+	if name, ok := elsewhere[field]; ok {
+		return l.named(name)
+	}
+	if _, rest, ok := strings.Cut(field, ".wiring."); ok {
+		field = "wiring." + rest
 	}
 	return slices.IndexFunc(l.columns, func(c column[T]) bool { return c.field == field })
 }
@@ -118,13 +145,43 @@ func kiloamperes[T any](field func(*T) *tables.Current) func(*T, string) error {
 			return nil
 		}
 		ka, err := tables.ParseRatio(text)
-		if err != nil {
-			return err
+		if err == nil {
+			*field(v), err = tables.ParseCurrent(ka.Decimal().Shift(3).String())
 		}
-		*field(v), err = tables.ParseCurrent(ka.Decimal().Shift(3).String())
-		return err
+		if err != nil {
+			return &tables.InputError{Value: clip(text), Want: "a plain decimal in kiloamperes, below a million"}
+		}
+		return nil
 	}
 }
+
+var amperes = regexp.MustCompile(`[0-9]+(\.[0-9]+)? A\b`)
+
+// saidInKiloamperes turns amperes into kiloamperes.
+func saidInKiloamperes(text string) string {
+	return amperes.ReplaceAllStringFunc(text, func(amps string) string {
+		n, _ := decimal.NewFromString(strings.TrimSuffix(amps, " A"))
+		return n.Shift(-3).String() + " kA"
+	})
+}
+
+// yes sets a field that the column answers with yes or no.
+func yes[T any](field func(*T) *bool) func(*T, string) error {
+	return func(v *T, text string) error {
+		switch strings.ToLower(text) {
+		case "yes":
+			*field(v) = true
+		case "no", "":
+			*field(v) = false
+		default:
+			return &tables.InputError{Value: clip(text), Want: "yes or no"}
+		}
+		return nil
+	}
+}
+
+// saidYes turns truth values into yes and no.
+var saidYes = strings.NewReplacer("true", "yes", "false", "no").Replace
 
 type textReader = encoding.TextUnmarshaler
 

@@ -37,7 +37,7 @@ func (f *faults[T]) add(err error, column int) {
 		text = e.Error()
 	case errors.As(err, &missing):
 		e := *missing
-		e.Field = name
+		e.Field, e.Instead = name, f.of.words.Replace(e.Instead)
 		text = e.Error()
 	case errors.As(err, &noSize):
 		e := *noSize
@@ -68,11 +68,23 @@ func (f *faults[T]) judge(err error) {
 	unread := slices.Clone(f.list)
 	for _, e := range tables.Faults(err) {
 		column := f.of.of(tables.FieldOf(e))
+		e = f.of.said(e, column)
 		told := func(x fault) bool { return x.column == column || column >= 0 && f.rests(column, x.column) }
 		if !slices.ContainsFunc(unread, told) {
 			f.add(e, column)
 		}
 	}
+}
+
+// said words what the library says of the value of a column as the column does.
+func (l *layout[T]) said(err error, column int) error {
+	var input *tables.InputError
+	if column < 0 || l.columns[column].said == nil || !errors.As(err, &input) {
+		return err
+	}
+	e := *input
+	e.Value, e.Want = l.columns[column].said(e.Value), l.columns[column].said(e.Want)
+	return &e
 }
 
 // rests reports whether the verdict on a column rests on another.

@@ -130,6 +130,25 @@ func (s *sheet[T]) next() (*row[T], error) {
 	return r, nil
 }
 
+// each visits row by row, and reports how far it has come. What breaks the reading
+// off is returned by itself; the row that broke it is visited as not whole.
+func (s *sheet[T]) each(p progress, visit func(r *row[T], whole bool) error) (broken, err error) {
+	for rows := 1; broken == nil; rows++ {
+		var r *row[T]
+		if r, broken = s.next(); r == nil {
+			break
+		}
+		if err := visit(r, broken == nil); err != nil {
+			return broken, err
+		}
+		p.report(rows)
+	}
+	if broken == io.EOF {
+		broken = nil
+	}
+	return broken, nil
+}
+
 // fill reads the cells of a record. In a record that is not shaped as the header
 // they are read as far as they go, and their faults are not told.
 func (s *sheet[T]) fill(r *row[T], record []string) {

@@ -143,12 +143,17 @@ func TestBadCells(t *testing.T) {
 
 // scheduleWith is a schedule of one good row but for the given cells.
 func scheduleWith(cells map[string]string) string {
+	return fileWith(motors, cells)
+}
+
+// fileWith is a file of one good row but for the given cells.
+func fileWith[T any](of *layout[T], cells map[string]string) string {
 	row := map[string]string{"tag": "P-1", "code": "NEC-2023", "kind": "squirrel_cage", "power": "5 hp", "volts": "460"}
 	for name, cell := range cells {
 		row[name] = cell
 	}
 	var names, values []string
-	for _, c := range motors.columns {
+	for _, c := range of.columns {
 		if c.must || row[c.name] != "" {
 			names = append(names, c.name)
 			values = append(values, `"`+row[c.name]+`"`)

@@ -12,9 +12,8 @@ import (
 // for a row that was sized, the tag and the error for one that was not. With
 // feeders it writes an object of two such arrays.
 type jsonOutput struct {
-	w       io.Writer
+	jsonArray
 	feeders bool
-	rows    int // of the array
 }
 
 func (o *jsonOutput) begin([]string) error {
@@ -63,7 +62,13 @@ func (o *jsonOutput) feeder(a *answer[mc.FeederResult]) error {
 
 func (o *jsonOutput) endFeeders(_, _ int) error { return o.write("\n]}\n") }
 
-func (o *jsonOutput) element(v any) error {
+// A jsonArray writes an array, one element a line.
+type jsonArray struct {
+	w    io.Writer
+	rows int
+}
+
+func (o *jsonArray) element(v any) error {
 	text, err := json.Marshal(v)
 	if err != nil {
 		return err
@@ -75,7 +80,7 @@ func (o *jsonOutput) element(v any) error {
 	return o.write(separator + string(text))
 }
 
-func (o *jsonOutput) write(text string) error {
+func (o *jsonArray) write(text string) error {
 	_, err := io.WriteString(o.w, text)
 	return err
 }

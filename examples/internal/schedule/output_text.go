@@ -13,7 +13,10 @@ var rule = "\n" + strings.Repeat("-", 72) + "\n\n"
 
 // A textOutput writes the derivation of each row and a summary, then the same
 // of the feeders under a heading.
-type textOutput struct{ w io.Writer }
+type textOutput struct {
+	w   io.Writer
+	bad string // what a row with faults is called
+}
 
 func (o *textOutput) begin([]string) error { return nil }
 
@@ -39,7 +42,7 @@ func writeText[R fmt.Stringer](o *textOutput, a *answer[R]) error {
 	if a.line > 0 {
 		line = fmt.Sprintf(", line %d", a.line)
 	}
-	return o.write(fmt.Sprintf("%s: not sized%s\n  - %s\n", nameOf(a.tag), line, strings.Join(a.faults, "\n  - ")) + rule)
+	return o.write(fmt.Sprintf("%s: %s%s\n  - %s\n", nameOf(a.tag), o.bad, line, strings.Join(a.faults, "\n  - ")) + rule)
 }
 
 func (o *textOutput) write(text string) error {

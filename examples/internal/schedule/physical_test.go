@@ -35,8 +35,11 @@ func TestPhysicalFaults(t *testing.T) {
 		{map[string]string{"raceway": "hose"}, `raceway "hose": want one of emt`},
 		{map[string]string{"max_drop_percent": "3"}, `max_drop_percent "3": want none without a length`},
 		{map[string]string{"max_drop_percent": "300", "length_m": "40"}, `max_drop_percent "300"`},
-		{map[string]string{"fault_ka": "-1"}, `fault_ka`},
-		{map[string]string{"fault_ka": "400"}, `fault_ka "400000 A"`},
+		{map[string]string{"fault_ka": "-1"}, `fault_ka "-1": want a plain decimal in kiloamperes`},
+		{map[string]string{"fault_ka": "14 A"}, `fault_ka "14 A": want a plain decimal in kiloamperes`},
+		{map[string]string{"fault_ka": "1000000"}, `fault_ka "1000000": want a plain decimal in kiloamperes, below a million`},
+		{map[string]string{"fault_ka": "0"}, `fault_ka "0 kA": want 0.001 kA to 300 kA`},
+		{map[string]string{"fault_ka": "400"}, `fault_ka "400 kA": want 0.001 kA to 300 kA`},
 	} {
 		status, rows := records(t, scheduleWith(tt.cells))
 		assert.Equal(t, 1, status)

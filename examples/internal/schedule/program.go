@@ -1,6 +1,6 @@
-// Package schedule is what the example programs schedule and takeoff share: it
-// reads motor schedules and feeders files, sizes their rows one by one, and
-// writes the answers or a bill of quantities.
+// Package schedule is what the example programs schedule, takeoff and check share:
+// it reads motor schedules, feeders files and installed circuits, sizes or judges
+// their rows one by one, and writes the answers or a bill of quantities.
 package schedule
 
 import (
@@ -26,7 +26,7 @@ var (
 
 // The exit statuses.
 const (
-	allSized  = 0
+	allGood   = 0
 	someBad   = 1
 	cannotRun = 2
 )
@@ -43,11 +43,13 @@ type output interface {
 	endFeeders(sized, failed int) error
 }
 
-// A format is a format of -format.
-type format struct {
+// A format is a format of -format, which a function of type M makes an output of.
+type format[M any] struct {
 	name string
-	make func(w io.Writer, s settings) output
+	make M
 }
+
+type newOutput = func(w io.Writer, s settings) output
 
 // settings are what an output may want to know.
 type settings struct {
@@ -58,16 +60,18 @@ type settings struct {
 }
 
 // formats are the formats of the program schedule.
-var formats = []format{
-	{"text", func(w io.Writer, _ settings) output { return &textOutput{w: w} }},
+var formats = []format[newOutput]{
+	{"text", func(w io.Writer, _ settings) output { return &textOutput{w, "not sized"} }},
 	{"csv", func(w io.Writer, _ settings) output { return newCSVOutput(w) }},
-	{"json", func(w io.Writer, s settings) output { return &jsonOutput{w: w, feeders: s.feeders} }},
+	{"json", func(w io.Writer, s settings) output {
+		return &jsonOutput{jsonArray: jsonArray{w: w}, feeders: s.feeders}
+	}},
 }
 
 // A program is one of the programs that read a schedule.
 type program struct {
 	name    string
-	formats []format
+	formats []format[newOutput]
 	prices  string // sample of unit prices; "" for a program without prices
 }
 
@@ -78,22 +82,12 @@ func Run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
 
 // run is the whole program; it returns the exit status.
 func (p program) run(args []string, stdin io.Reader, stdout, stderr io.Writer) int {
-	complain := func(err error) int {
-		fmt.Fprintf(stderr, "%s: %v\n", p.name, err)
-		return cannotRun
+	complain := complaints(p.name, stderr)
+	usage := "[-feeders feeders.csv] [schedule.csv]"
+	if p.prices != "" {
+		usage = "[-feeders feeders.csv] [-prices prices.csv] [schedule.csv]"
 	}
-	names := strings.Join(formatNames(p.formats), "|")
-	flags := flag.NewFlagSet(p.name, flag.ContinueOnError)
-	flags.SetOutput(stderr)
-	flags.Usage = func() {
-		prices := ""
-		if p.prices != "" {
-			prices = " [-prices prices.csv]"
-		}
-		fmt.Fprintf(stderr, "usage: %s [-format %s] [-feeders feeders.csv]%s [schedule.csv]\n", p.name, names, prices)
-		flags.PrintDefaults()
-	}
-	format := flags.String("format", "text", "`format` of the answers: "+strings.Join(formatNames(p.formats), ", "))
+	flags, format := flagsOf(p.name, usage, p.formats, stderr)
 	pricesName := ""
 	if p.prices != "" {
 		flags.StringVar(&pricesName, "prices", "", "`file` of unit prices")
@@ -106,15 +100,15 @@ func (p program) run(args []string, stdin io.Reader, stdout, stderr io.Writer) i
 		return nil
 	})
 	if err := flags.Parse(args); errors.Is(err, flag.ErrHelp) {
-		return allSized
+		return allGood
 	} else if err != nil {
 		return cannotRun // flags has said why
 	}
-	newOutput, err := pick(p.formats, *format)
+	makeOutput, err := pick(p.formats, *format)
 	if err != nil {
 		return complain(err)
 	}
-	in, closeInput, err := open(flags.Args(), stdin)
+	in, closeInput, err := open(flags.Args(), sample, stdin)
 	if err != nil {
 		return complain(err)
 	}
@@ -143,17 +137,42 @@ func (p program) run(args []string, stdin io.Reader, stdout, stderr io.Writer) i
 		return complain(err)
 	}
 	buffered := bufio.NewWriterSize(stdout, 64<<10)
-	failed, err := answerAll(s, feeders, newOutput(buffered, settings{feeders: feeders != nil, prices: prices, sample: pricesName == "", stderr: stderr}), newProgress(stderr))
+	out := makeOutput(buffered, settings{feeders: feeders != nil, prices: prices, sample: pricesName == "", stderr: stderr})
+	failed, err := answerAll(s, feeders, out, newProgress(p.name, stderr))
 	if err := errors.Join(err, buffered.Flush()); err != nil {
 		return complain(err)
 	}
-	if failed > 0 {
-		return someBad
-	}
-	return allSized
+	return statusOf(failed)
 }
 
-func formatNames(formats []format) []string {
+// complaints returns what tells that the program cannot run.
+func complaints(name string, stderr io.Writer) func(error) int {
+	return func(err error) int {
+		fmt.Fprintf(stderr, "%s: %v\n", name, err)
+		return cannotRun
+	}
+}
+
+// flagsOf returns the flags of a program, of which -format is the first.
+func flagsOf[M any](name, usage string, formats []format[M], stderr io.Writer) (flags *flag.FlagSet, format *string) {
+	names := formatNames(formats)
+	flags = flag.NewFlagSet(name, flag.ContinueOnError)
+	flags.SetOutput(stderr)
+	flags.Usage = func() {
+		fmt.Fprintf(stderr, "usage: %s [-format %s] %s\n", name, strings.Join(names, "|"), usage)
+		flags.PrintDefaults()
+	}
+	return flags, flags.String("format", "text", "`format` of the answers: "+strings.Join(names, ", "))
+}
+
+func statusOf(bad int) int {
+	if bad > 0 {
+		return someBad
+	}
+	return allGood
+}
+
+func formatNames[M any](formats []format[M]) []string {
 	names := make([]string, len(formats))
 	for i, f := range formats {
 		names[i] = f.name
@@ -161,17 +180,17 @@ func formatNames(formats []format) []string {
 	return names
 }
 
-func pick(formats []format, name string) (func(io.Writer, settings) output, error) {
+func pick[M any](formats []format[M], name string) (makeOutput M, err error) {
 	for _, f := range formats {
 		if f.name == name {
 			return f.make, nil
 		}
 	}
-	return nil, fmt.Errorf("unknown -format %q: want one of %s", clip(name), strings.Join(formatNames(formats), ", "))
+	return makeOutput, fmt.Errorf("unknown -format %q: want one of %s", clip(name), strings.Join(formatNames(formats), ", "))
 }
 
-// open opens the schedule that the arguments name, or the sample.
-func open(args []string, stdin io.Reader) (r io.Reader, closeInput func(), err error) {
+// open opens the file that the arguments name, or the sample.
+func open(args []string, sample string, stdin io.Reader) (r io.Reader, closeInput func(), err error) {
 	switch len(args) {
 	case 0:
 		return strings.NewReader(sample), func() {}, nil

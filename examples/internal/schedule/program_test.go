@@ -37,7 +37,7 @@ func records(t *testing.T, schedule string) (status int, rows []map[string]strin
 	return status, byName(t, out)
 }
 
-func byName(t *testing.T, text string) []map[string]string {
+func byName(t testing.TB, text string) []map[string]string {
 	t.Helper()
 	all, err := csv.NewReader(strings.NewReader(text)).ReadAll()
 	require.NoError(t, err)
@@ -129,7 +129,7 @@ func TestColumns(t *testing.T) {
 		"device_start_rating_a,instantaneous_max_a,disconnect_min_a,disconnect_min_hp,bonding_conductor,raceway,raceway_fill_percent," +
 		"drop_running_percent,drop_starting_percent,fault_at_motor_ka,cautions"
 	const known = "tag,code,kind,power,volts,phases,nameplate_amps,service_factor,temperature_rise_c,power_factor,efficiency,speed_rpm," +
-		"code_letter,design_letter,locked_rotor_amps,secondary_amps,branch_selection_amps,duty,duty_minutes,starting,drive_input_amps," +
+		"code_letter,design_letter,locked_rotor_amps,secondary_amps,branch_selection_amps,duty,duty_minutes,starting,drive_input_amps,resistor_duty,use," +
 		"device,conductor,insulation,termination_c,ambient_c,conductors_in_raceway,raceway,length_m,length_ft,max_drop_percent,fault_ka,feeder"
 	status, out, complaint := ran(t, "zone,"+known+",Note\n", "-format", "csv")
 	assert.Equal(t, 0, status)

@@ -9,14 +9,18 @@ import (
 // progressEvery is how many rows go by between two reports.
 const progressEvery = 10_000
 
-// A progress reports how far a long schedule has come. The zero progress is silent.
-type progress struct{ w io.Writer }
+// A progress reports how far a program has come with a long file. The zero progress
+// is silent.
+type progress struct {
+	name string
+	w    io.Writer
+}
 
 // newProgress reports to w if that is a terminal.
-func newProgress(w io.Writer) progress {
+func newProgress(name string, w io.Writer) progress {
 	if f, ok := w.(*os.File); ok {
 		if info, err := f.Stat(); err == nil && info.Mode()&os.ModeCharDevice != 0 {
-			return progress{w}
+			return progress{name, w}
 		}
 	}
 	return progress{}
@@ -24,6 +28,6 @@ func newProgress(w io.Writer) progress {
 
 func (p progress) report(rows int) {
 	if p.w != nil && rows%progressEvery == 0 {
-		fmt.Fprintf(p.w, "schedule: %d rows\n", rows)
+		fmt.Fprintf(p.w, "%s: %d rows\n", p.name, rows)
 	}
 }
