@@ -125,13 +125,13 @@ func (k *checker) overload() (err error) {
 // is enough.
 func (k *checker) settings(part string, in InstalledOverload, most ceiling) {
 	if in.Setting.IsZero() && in.Heater.IsZero() {
-		k.skip(part+".setting_amps", "not given")
+		k.skip(part+".setting_amperes", "not given")
 		return
 	}
 	if !in.Setting.IsZero() {
-		k.atMost(claim{code: OverloadSetting, part: part + ".setting_amps", found: in.Setting.Figure("overload setting")}, most)
+		k.atMost(claim{code: OverloadSetting, part: part + ".setting_amperes", found: in.Setting.Figure("overload setting")}, most)
 	}
 	if !in.Heater.IsZero() {
-		k.atMost(claim{code: OverloadSetting, part: part + ".heater_amps", found: in.Heater.Figure("rated trip current of the heater")}, most)
+		k.atMost(claim{code: OverloadSetting, part: part + ".heater_amperes", found: in.Heater.Figure("rated trip current of the heater")}, most)
 	}
 }

@@ -80,12 +80,12 @@ func (k *feederChecker) device() error {
 	if err := r.device(&k.g); err != nil {
 		return err
 	}
-	rating := claim{code: DeviceRating, part: "device.rating_amps", found: in.Rating.Figure("rating of the device")}
+	rating := claim{code: DeviceRating, part: "device.rating_amperes", found: in.Rating.Figure("rating of the device")}
 	k.atMost(rating, ceiling{limit: greater(r.Limit, r.Rating), start: greater(r.StartLimit, r.StartRating), confirmed: true, over: Violation})
 	if rating.code = DeviceCarries; !rating.found.IsZero() {
 		k.atLeast(rating, r.lineLoad(&k.g).Current, Caution)
 	}
-	k.atMost(claim{code: InstantaneousSetting, part: "device.instantaneous_amps", found: in.Instantaneous.Figure("instantaneous-trip setting")}, ceiling{})
+	k.atMost(claim{code: InstantaneousSetting, part: "device.instantaneous_amperes", found: in.Instantaneous.Figure("instantaneous-trip setting")}, ceiling{})
 	k.interrupts(in.Interrupting, r.Feeder.Fault)
 	r.Disconnect = k.g.disconnect()
 	x := &r.Disconnect

@@ -25,11 +25,11 @@ func (k *checker) device() (err error) {
 	if err != nil {
 		return err
 	}
-	rating := claim{code: DeviceRating, part: "device.rating_amps", found: in.Rating.Figure("rating of the device")}
-	setting := claim{code: InstantaneousSetting, part: "device.instantaneous_amps", found: in.Instantaneous.Figure("instantaneous-trip setting")}
+	rating := claim{code: DeviceRating, part: "device.rating_amperes", found: in.Rating.Figure("rating of the device")}
+	setting := claim{code: InstantaneousSetting, part: "device.instantaneous_amperes", found: in.Instantaneous.Figure("instantaneous-trip setting")}
 	switch most := (ceiling{limit: x.Limit, start: x.StartLimit, confirmed: k.in.HardStart, over: Violation}); {
 	case k.unfit:
-		k.skip("device.rating_amps", "a device of its kind may not protect the motor")
+		k.skip("device.rating_amperes", "a device of its kind may not protect the motor")
 	case x.Device == protection.InstantaneousBreaker:
 		k.atMost(setting, most)
 	default:
@@ -81,7 +81,7 @@ func (k *judge) interrupts(rating, fault tables.Current) {
 	if k.edition.Code() == tables.CEC {
 		rule = &cecInterrupting
 	}
-	c := claim{code: InterruptingRating, part: "device.interrupting_amps", found: rating.Figure("interrupting rating")}
+	c := claim{code: InterruptingRating, part: "device.interrupting_amperes", found: rating.Figure("interrupting rating")}
 	if fault.IsZero() && !rating.IsZero() {
 		k.skip(c.part, "no fault current is given")
 		return

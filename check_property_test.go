@@ -244,19 +244,19 @@ func smallerTrade(e tables.Edition, f conductor.Filled) string {
 }
 
 var steps = []step{
-	{motorcircuit.OverloadSetting, "overload.setting_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.OverloadSetting, "overload.setting_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Overload.Setting = more(last(r.Overload.Limit, r.Overload.StartLimit))
 		return !r.Overload.Limit.IsZero()
 	}},
-	{motorcircuit.OverloadSetting, "overload.heater_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.OverloadSetting, "overload.heater_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Overload.Heater = more(last(r.Overload.Limit, r.Overload.StartLimit))
 		return !r.Overload.Limit.IsZero()
 	}},
-	{motorcircuit.OverloadSetting, "overload.setting_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.OverloadSetting, "overload.setting_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Overload.Setting, in.Overload.Share = more(r.Overload.Share), true
 		return !r.Overload.Share.IsZero()
 	}},
-	{motorcircuit.OverloadSetting, "windings[1].overload.setting_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.OverloadSetting, "windings[1].overload.setting_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		if len(in.Windings) < 2 {
 			return false
 		}
@@ -272,15 +272,15 @@ var steps = []step{
 		in.Overload.Units = 3
 		return r.Overload.Limit.IsZero()
 	}},
-	{motorcircuit.DeviceRating, "device.rating_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.DeviceRating, "device.rating_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Device.Rating = nextRating(r)
 		return !r.ShortCircuit.Rating.IsZero() && !in.Device.Rating.IsZero()
 	}},
-	{motorcircuit.DeviceCarries, "device.rating_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.DeviceCarries, "device.rating_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Device.Rating = less(r.ShortCircuit.Limit)
 		return r.Circuit.Motor.Use == motor.FirePump
 	}},
-	{motorcircuit.InstantaneousSetting, "device.instantaneous_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.InstantaneousSetting, "device.instantaneous_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		x := &r.ShortCircuit
 		most := x.Instantaneous
 		if x.Device == protection.InstantaneousBreaker {
@@ -289,7 +289,7 @@ var steps = []step{
 		in.Device.Instantaneous = more(most)
 		return !most.IsZero()
 	}},
-	{motorcircuit.InterruptingRating, "device.interrupting_amps", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
+	{motorcircuit.InterruptingRating, "device.interrupting_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Device.Interrupting = less(r.FaultDuty.Source)
 		return !r.FaultDuty.Source.IsZero()
 	}},

@@ -17,11 +17,11 @@ type Feeder struct {
 	Tag        string           `json:"tag,omitzero"`                  // the caller's name for the feeder, carried through
 	Edition    tables.Edition   `json:"edition"`                       // the code in force; every circuit is under it
 	Circuits   []FeederCircuit  `json:"circuits"`                      // the motors, in any order
-	Continuous tables.Current   `json:"continuous_load_amps,omitzero"` // other load that is continuous
-	Other      tables.Current   `json:"other_load_amps,omitzero"`      // other load that is not continuous
+	Continuous tables.Current   `json:"continuous_load_amperes,omitzero"` // other load that is continuous
+	Other      tables.Current   `json:"other_load_amperes,omitzero"`      // other load that is not continuous
 	Demand     tables.Ratio     `json:"demand_factor,omitzero"`        // share of the motor load that the loading justifies, with the authority's leave; zero is 1
 	Device     tables.Device    `json:"device,omitzero"`               // short-circuit device of the feeder; zero takes a time-delay fuse
-	Fault      tables.Current   `json:"fault_amps,omitzero"`           // fault current available at the beginning of the feeder; zero leaves fault duty out
+	Fault      tables.Current   `json:"fault_amperes,omitzero"`           // fault current available at the beginning of the feeder; zero leaves fault duty out
 	FaultXR    tables.Ratio     `json:"fault_xr,omitzero"`             // its ratio of reactance to resistance; zero takes reactance alone
 	MaxDrop    tables.Ratio     `json:"max_drop_percent,omitzero"`     // greatest voltage drop running, in percent: larger conductors are taken to keep it; zero asks for none
 	Wiring     conductor.Wiring `json:"wiring,omitzero"`               // how the feeder is run
@@ -169,7 +169,7 @@ func (f Feeder) validate() error {
 	for _, load := range []struct {
 		field string
 		amps  tables.Current
-	}{{"continuous_load_amps", f.Continuous}, {"other_load_amps", f.Other}} {
+	}{{"continuous_load_amperes", f.Continuous}, {"other_load_amperes", f.Other}} {
 		if load.amps.Cmp(mostLoad) > 0 {
 			add(load.field, load.amps.String(), "at most 100000 A")
 		}

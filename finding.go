@@ -16,7 +16,7 @@ type Report struct {
 // the place of an earlier one.
 type Finding struct {
 	Code     FindingCode       `json:"code"`
-	Part     string            `json:"part"`              // what is judged, as a path in [Installed] or [InstalledFeeder]: "branch", "windings[1].overload.setting_amps"
+	Part     string            `json:"part"`              // what is judged, as a path in [Installed] or [InstalledFeeder]: "branch", "windings[1].overload.setting_amperes"
 	Severity Severity          `json:"severity"`          // a note tells of a requirement that is met
 	Required tables.Figure     `json:"required,omitzero"` // the least or the greatest that the code allows
 	Found    tables.Figure     `json:"found,omitzero"`    // what stands

@@ -11,7 +11,7 @@ type Group struct {
 	Tag        string           `json:"tag,omitzero"`
 	Edition    tables.Edition   `json:"edition"`
 	Circuits   []Circuit        `json:"circuits"`                 // the motors; their device is the group's
-	Other      tables.Current   `json:"other_load_amps,omitzero"` // other load on the circuit
+	Other      tables.Current   `json:"other_load_amperes,omitzero"` // other load on the circuit
 	Device     tables.Device    `json:"device,omitzero"`          // zero takes a time-delay fuse
 	Wiring     conductor.Wiring `json:"wiring,omitzero"`          // how the branch circuit is run
 	Listed     bool             `json:"listed,omitzero"`          // controllers and overload devices listed for group installation (NEC 430.53(C))

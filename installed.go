@@ -57,8 +57,8 @@ type InstalledWinding struct {
 
 // An InstalledOverload is overload protection as it is set.
 type InstalledOverload struct {
-	Setting tables.Current `json:"setting_amps,omitzero"` // current at which it is set to trip
-	Heater  tables.Current `json:"heater_amps,omitzero"`  // rated trip current of its heater
+	Setting tables.Current `json:"setting_amperes,omitzero"` // current at which it is set to trip
+	Heater  tables.Current `json:"heater_amperes,omitzero"`  // rated trip current of its heater
 	Units   int            `json:"units,omitzero"`        // number of units
 	Share   bool           `json:"share,omitzero"`        // stands inside the delta, or in half of a part winding, and carries its share only
 }
@@ -66,9 +66,9 @@ type InstalledOverload struct {
 // An InstalledDevice is a short-circuit and ground-fault device.
 type InstalledDevice struct {
 	Kind          tables.Device  `json:"kind,omitzero"`               // zero is the circuit's
-	Rating        tables.Current `json:"rating_amps,omitzero"`        // ampere rating; for an adjustable breaker its setting
-	Instantaneous tables.Current `json:"instantaneous_amps,omitzero"` // setting of the instantaneous trip
-	Interrupting  tables.Current `json:"interrupting_amps,omitzero"`  // interrupting rating
+	Rating        tables.Current `json:"rating_amperes,omitzero"`        // ampere rating; for an adjustable breaker its setting
+	Instantaneous tables.Current `json:"instantaneous_amperes,omitzero"` // setting of the instantaneous trip
+	Interrupting  tables.Current `json:"interrupting_amperes,omitzero"`  // interrupting rating
 }
 
 // A Switch is a disconnecting means or a controller: what it is rated.

@@ -94,8 +94,8 @@ func (x *inspection) insulation(part, designation string) {
 }
 
 func (x *inspection) overload(part string, in InstalledOverload, shares bool) {
-	x.current(part+".setting_amps", in.Setting)
-	x.current(part+".heater_amps", in.Heater)
+	x.current(part+".setting_amperes", in.Setting)
+	x.current(part+".heater_amperes", in.Heater)
 	if in.Units < 0 || in.Units > 9 {
 		x.add(part+".units", itoa(in.Units), "1 to 9, or 0 for not given")
 	}
@@ -108,9 +108,9 @@ func (x *inspection) device(in InstalledDevice) {
 	if in.Kind != 0 && !in.Kind.IsValid() {
 		x.add("device.kind", itoa(int(in.Kind)), "a kind of fuse or breaker")
 	}
-	x.current("device.rating_amps", in.Rating)
-	x.current("device.instantaneous_amps", in.Instantaneous)
-	x.current("device.interrupting_amps", in.Interrupting)
+	x.current("device.rating_amperes", in.Rating)
+	x.current("device.instantaneous_amperes", in.Instantaneous)
+	x.current("device.interrupting_amperes", in.Interrupting)
 }
 
 func (x *inspection) rated(part string, in Switch) {

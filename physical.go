@@ -63,7 +63,7 @@ func checkPhysical(w conductor.Wiring, drop tables.Ratio, fault tables.Current, 
 		add("max_drop_percent", drop.String(), "none without a length of the run")
 	}
 	if !fault.IsZero() && (fault.Cmp(leastFault) < 0 || fault.Cmp(mostFault) > 0) {
-		add("fault_amps", fault.String(), "1 A to 300000 A")
+		add("fault_amperes", fault.String(), "1 A to 300000 A")
 	}
 	switch {
 	case xr.IsZero():

@@ -85,7 +85,7 @@ func TestNothingPhysicalIsIgnored(t *testing.T) {
 			c.MaxDrop, c.Wiring.Length = motor.Factor("3"), tables.Length{}
 		},
 		"fault_xr":   func(c *motorcircuit.Circuit) { c.FaultXR = motor.Factor("5") },
-		"fault_amps": func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("0.5") },
+		"fault_amperes": func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("0.5") },
 	} {
 		c := pumpRun(tables.NEC2023)
 		change(&c)

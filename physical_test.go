@@ -240,8 +240,8 @@ func TestPhysicalRefusals(t *testing.T) {
 	}{
 		{"drop too small", func(c *motorcircuit.Circuit) { c.MaxDrop = motor.Factor("0.09") }, "max_drop_percent"},
 		{"drop too large", func(c *motorcircuit.Circuit) { c.MaxDrop = motor.Factor("50.1") }, "max_drop_percent"},
-		{"fault too small", func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("0.9") }, "fault_amps"},
-		{"fault too large", func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("300000.1") }, "fault_amps"},
+		{"fault too small", func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("0.9") }, "fault_amperes"},
+		{"fault too large", func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("300000.1") }, "fault_amperes"},
 		{"too far", func(c *motorcircuit.Circuit) { c.Wiring.Length = conductor.Metres("10000.1") }, "wiring.length"},
 		{"no such raceway", func(c *motorcircuit.Circuit) { c.Wiring.Raceway = 99 }, "wiring.raceway"},
 		{"a raceway in free air", func(c *motorcircuit.Circuit) { c.Wiring.Run = tables.InFreeAir }, "wiring.raceway"},

@@ -118,9 +118,5 @@ func (e Edition) Gap() string { return e.info().gap }
 // MarshalText returns the text form.
 func (e Edition) MarshalText() ([]byte, error) { return []byte(e.String()), nil }
 
-// UnmarshalText is [ParseEdition].
-func (e *Edition) UnmarshalText(text []byte) error {
-	p, err := ParseEdition(string(text))
-	*e = p
-	return err
-}
+// UnmarshalText is [ParseEdition]; no text is "not given".
+func (e *Edition) UnmarshalText(text []byte) error { return readOr(e, text, ParseEdition) }

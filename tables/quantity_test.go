@@ -170,9 +170,9 @@ func TestJSONRoundTrip(t *testing.T) {
 	}
 	full := jsonValues{Amperes: tables.Must(tables.ParseCurrent("1")), Ambient: tables.Must(tables.ParseTemperature("1")),
 		Factor: tables.Must(tables.ParseRatio("1")), Power: tables.Must(tables.ParseHP("1")), Size: tables.Sizes()[0]}
-	require.NoError(t, json.Unmarshal([]byte(`{"amperes":"","ambient":"","factor":"","power":"","size":""}`), &full))
+	require.NoError(t, json.Unmarshal([]byte(`{"amperes":"","ambient":"","factor":"","power":"","size":"","edition":""}`), &full))
 	assert.Equal(t, jsonValues{}, full, "no text is not given")
-	for field, bad := range map[string]string{"amperes": "x", "ambient": "x", "factor": "x", "power": "7", "size": "17", "edition": "", "device": "relay", "duty": "always"} {
+	for field, bad := range map[string]string{"amperes": "x", "ambient": "x", "factor": "x", "power": "7", "size": "17", "edition": "NEC-1999", "device": "relay", "duty": "always"} {
 		v := jsonValues{Power: tables.Must(tables.ParseHP("1")), Edition: tables.NEC2017}
 		err := json.Unmarshal([]byte(`{"`+field+`":"`+bad+`"}`), &v)
 		assert.ErrorAs(t, err, new(*tables.InputError), field)

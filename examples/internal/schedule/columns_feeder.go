@@ -14,7 +14,7 @@ var feederColumns = newLayout("feeders file", "feeder",
 	},
 	runColumns(func(f *mc.Feeder) *tables.Device { return &f.Device }, func(f *mc.Feeder) *conductor.Wiring { return &f.Wiring }),
 	[]column[mc.Feeder]{
-		{name: "continuous_load_amps", set: read(func(f *mc.Feeder) textReader { return &f.Continuous }), field: "continuous_load_amps"},
-		{name: "other_load_amps", set: read(func(f *mc.Feeder) textReader { return &f.Other }), field: "other_load_amps"},
+		{name: "continuous_load_amps", set: read(func(f *mc.Feeder) textReader { return &f.Continuous }), field: "continuous_load_amperes"},
+		{name: "other_load_amps", set: read(func(f *mc.Feeder) textReader { return &f.Other }), field: "other_load_amperes"},
 	},
 )

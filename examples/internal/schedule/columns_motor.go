@@ -45,7 +45,7 @@ var circuitColumns = slices.Concat(
 	runColumns(func(c *mc.Circuit) *tables.Device { return &c.Device }, func(c *mc.Circuit) *conductor.Wiring { return &c.Wiring }),
 	[]column[mc.Circuit]{
 		{name: "max_drop_percent", set: read(func(c *mc.Circuit) textReader { return &c.MaxDrop }), field: "max_drop_percent", needs: "length_m length_ft"},
-		{name: "fault_ka", set: kiloamperes(func(c *mc.Circuit) *tables.Current { return &c.Fault }), field: "fault_amps", said: saidInKiloamperes},
+		{name: "fault_ka", set: kiloamperes(func(c *mc.Circuit) *tables.Current { return &c.Fault }), field: "fault_amperes", said: saidInKiloamperes},
 	},
 )
 

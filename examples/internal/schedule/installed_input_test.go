@@ -140,11 +140,11 @@ func TestInstalledFlags(t *testing.T) {
 	}
 	// Table current 7.6 A; × 1.15 = 8.74 A, to × 1.3 = 9.88 A if the motor will not start (430.32).
 	setting := map[string]string{"overload_setting_a": "9", "service_factor": "1"}
-	assert.Equal(t, "caution", severities(setting)["overload.setting_amps overload_setting"])
+	assert.Equal(t, "caution", severities(setting)["overload.setting_amperes overload_setting"])
 	setting["hard_start"] = "yes"
-	assert.Equal(t, "note", severities(setting)["overload.setting_amps overload_setting"])
+	assert.Equal(t, "note", severities(setting)["overload.setting_amperes overload_setting"])
 	setting["starting"], setting["overload_share"] = "wye_delta", "yes" // 58 percent of 8.74 A
-	assert.Equal(t, "violation", severities(setting)["overload.setting_amps overload_setting"])
+	assert.Equal(t, "violation", severities(setting)["overload.setting_amperes overload_setting"])
 	// 430.110(A) Exception: a listed unfused switch of the motor's horsepower.
 	unfused := map[string]string{"disconnect_a": "5", "disconnect_power": "5 hp"}
 	assert.Equal(t, "violation", severities(unfused)["disconnecting_means.amperes switch_amperes"])
