@@ -20,7 +20,7 @@ type Circuit struct {
 	Device  tables.Device    `json:"device,omitzero"`           // short-circuit device; zero takes a time-delay fuse, which has the lowest ceilings
 	Wiring  conductor.Wiring `json:"wiring,omitzero"`           // how the circuit is run
 	MaxDrop tables.Ratio     `json:"max_drop_percent,omitzero"` // greatest voltage drop running, in percent: larger conductors are taken to keep it; zero asks for none
-	Fault   tables.Current   `json:"fault_amperes,omitzero"`       // fault current available at the beginning of the run; zero leaves fault duty out
+	Fault   tables.Current   `json:"fault_amperes,omitzero"`    // fault current available at the beginning of the run; zero leaves fault duty out
 	FaultXR tables.Ratio     `json:"fault_xr,omitzero"`         // its ratio of reactance to resistance; zero takes reactance alone, which gives the most
 }
 

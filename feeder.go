@@ -14,17 +14,17 @@ import (
 // A Feeder supplies the branch circuits of several motors, and other loads.
 // Edition and at least one circuit are required.
 type Feeder struct {
-	Tag        string           `json:"tag,omitzero"`                  // the caller's name for the feeder, carried through
-	Edition    tables.Edition   `json:"edition"`                       // the code in force; every circuit is under it
-	Circuits   []FeederCircuit  `json:"circuits"`                      // the motors, in any order
+	Tag        string           `json:"tag,omitzero"`                     // the caller's name for the feeder, carried through
+	Edition    tables.Edition   `json:"edition"`                          // the code in force; every circuit is under it
+	Circuits   []FeederCircuit  `json:"circuits"`                         // the motors, in any order
 	Continuous tables.Current   `json:"continuous_load_amperes,omitzero"` // other load that is continuous
 	Other      tables.Current   `json:"other_load_amperes,omitzero"`      // other load that is not continuous
-	Demand     tables.Ratio     `json:"demand_factor,omitzero"`        // share of the motor load that the loading justifies, with the authority's leave; zero is 1
-	Device     tables.Device    `json:"device,omitzero"`               // short-circuit device of the feeder; zero takes a time-delay fuse
+	Demand     tables.Ratio     `json:"demand_factor,omitzero"`           // share of the motor load that the loading justifies, with the authority's leave; zero is 1
+	Device     tables.Device    `json:"device,omitzero"`                  // short-circuit device of the feeder; zero takes a time-delay fuse
 	Fault      tables.Current   `json:"fault_amperes,omitzero"`           // fault current available at the beginning of the feeder; zero leaves fault duty out
-	FaultXR    tables.Ratio     `json:"fault_xr,omitzero"`             // its ratio of reactance to resistance; zero takes reactance alone
-	MaxDrop    tables.Ratio     `json:"max_drop_percent,omitzero"`     // greatest voltage drop running, in percent: larger conductors are taken to keep it; zero asks for none
-	Wiring     conductor.Wiring `json:"wiring,omitzero"`               // how the feeder is run
+	FaultXR    tables.Ratio     `json:"fault_xr,omitzero"`                // its ratio of reactance to resistance; zero takes reactance alone
+	MaxDrop    tables.Ratio     `json:"max_drop_percent,omitzero"`        // greatest voltage drop running, in percent: larger conductors are taken to keep it; zero asks for none
+	Wiring     conductor.Wiring `json:"wiring,omitzero"`                  // how the feeder is run
 }
 
 // A FeederCircuit is a branch circuit as the feeder sees it.

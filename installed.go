@@ -59,13 +59,13 @@ type InstalledWinding struct {
 type InstalledOverload struct {
 	Setting tables.Current `json:"setting_amperes,omitzero"` // current at which it is set to trip
 	Heater  tables.Current `json:"heater_amperes,omitzero"`  // rated trip current of its heater
-	Units   int            `json:"units,omitzero"`        // number of units
-	Share   bool           `json:"share,omitzero"`        // stands inside the delta, or in half of a part winding, and carries its share only
+	Units   int            `json:"units,omitzero"`           // number of units
+	Share   bool           `json:"share,omitzero"`           // stands inside the delta, or in half of a part winding, and carries its share only
 }
 
 // An InstalledDevice is a short-circuit and ground-fault device.
 type InstalledDevice struct {
-	Kind          tables.Device  `json:"kind,omitzero"`               // zero is the circuit's
+	Kind          tables.Device  `json:"kind,omitzero"`                  // zero is the circuit's
 	Rating        tables.Current `json:"rating_amperes,omitzero"`        // ampere rating; for an adjustable breaker its setting
 	Instantaneous tables.Current `json:"instantaneous_amperes,omitzero"` // setting of the instantaneous trip
 	Interrupting  tables.Current `json:"interrupting_amperes,omitzero"`  // interrupting rating

@@ -84,7 +84,7 @@ func TestNothingPhysicalIsIgnored(t *testing.T) {
 		"max_drop_percent": func(c *motorcircuit.Circuit) {
 			c.MaxDrop, c.Wiring.Length = motor.Factor("3"), tables.Length{}
 		},
-		"fault_xr":   func(c *motorcircuit.Circuit) { c.FaultXR = motor.Factor("5") },
+		"fault_xr":      func(c *motorcircuit.Circuit) { c.FaultXR = motor.Factor("5") },
 		"fault_amperes": func(c *motorcircuit.Circuit) { c.Fault = motor.Amps("0.5") },
 	} {
 		c := pumpRun(tables.NEC2023)

@@ -59,16 +59,16 @@ func TestCheckSampleByHand(t *testing.T) {
 		// 50 hp 460 V: 65 A × 1.25 = 81.25 A; 6 AWG THWN at 75 °C carries 65 A (430.22, Tables 430.250, 310.16).
 		{"DH-11", "conductor_ampacity", "branch", "violation"},
 		{"DH-11", "interrupting_rating", "device.interrupting_amperes", "violation"}, // 10 kA at 22 kA (110.9)
-		{"WH-11", "conductor_least_size", "branch", "violation"},                  // 16 AWG; copper from 14 AWG (310.3(A))
-		{"ML-11", "conductor_parallel_size", "branch", "violation"},               // two of 1 AWG; in parallel from 1/0 AWG (310.10(G))
-		{"NB-11", "conductor_insulation", "branch.insulation", "violation"},       // AC90 is no type for a raceway (CEC Table 19)
+		{"WH-11", "conductor_least_size", "branch", "violation"},                     // 16 AWG; copper from 14 AWG (310.3(A))
+		{"ML-11", "conductor_parallel_size", "branch", "violation"},                  // two of 1 AWG; in parallel from 1/0 AWG (310.10(G))
+		{"NB-11", "conductor_insulation", "branch.insulation", "violation"},          // AC90 is no type for a raceway (CEC Table 19)
 		// 50 A × 1.25 = 62.5 A; 6 AWG rated 75 °C at 45 °C: 65 A × 0.82 = 53.3 A (CEC 28-106, Tables 2, 5A).
 		{"NB-12", "conductor_ampacity", "motor_supply", "violation"},
 		// Class B asks for 75 °C, and 15 °C more at 45 °C (CEC 28-104, Table 37).
 		{"NB-12", "conductor_insulation", "motor_supply.insulation", "violation"},
 		{"NB-12", "instantaneous_setting", "device.instantaneous_amperes", "violation"}, // 700 A; 50 A × 13 = 650 A (CEC 28-210)
-		{"NB-12", "switch_horsepower", "controller.horsepower", "violation"},         // 40 hp for 50 hp (CEC 28-500)
-		{"LP-12", "overload_absent", "overload", "violation"},                        // a fire pump has none (695.6(C))
+		{"NB-12", "switch_horsepower", "controller.horsepower", "violation"},            // 40 hp for 50 hp (CEC 28-500)
+		{"LP-12", "overload_absent", "overload", "violation"},                           // a fire pump has none (695.6(C))
 		{"LP-12", "device_carries", "device.rating_amperes", "violation"},               // 150 A; 40 hp 460 V with its rotor locked 290 A (695.4(B)(2)(a), Table 430.251(B))
 		// 210 m of 6 AWG in steel: 0.338 Ω and 0.044 Ω (Chapter 9 Table 9). Running at 52 A × 1.15 and 0.9:
 		// 1.732 × 59.8 A × (0.338 × 0.9 + 0.044 × 0.436) Ω = 33.5 V of 460 V, 7.3 %; 5 % is the most (695.7).
@@ -79,16 +79,16 @@ func TestCheckSampleByHand(t *testing.T) {
 		{"CS-11", "device_kind", "device.kind", "violation"},                                      // an instantaneous trip ahead of a compressor (440.22)
 		{"CS-11", "switch_locked_rotor", "disconnecting_means.locked_rotor_amperes", "violation"}, // 120 A; 140 A marked (440.12(A))
 		{"WH-12", "overload_units", "overload.units", "violation"},                                // two of three phases (Table 430.37)
-		{"WH-12", "overload_setting", "overload.setting_amperes", "violation"},                       // 48 A; 33 A × 1.25 = 41.25 A, and × 1.4 = 46.2 A (430.32)
-		{"WH-12", "device_rating", "device.rating_amperes", "violation"},                             // 150 A; 34 A × 2.5 = 85 A, so 90 A, and × 4 = 136 A (430.52, 240.6(A))
+		{"WH-12", "overload_setting", "overload.setting_amperes", "violation"},                    // 48 A; 33 A × 1.25 = 41.25 A, and × 1.4 = 46.2 A (430.32)
+		{"WH-12", "device_rating", "device.rating_amperes", "violation"},                          // 150 A; 34 A × 2.5 = 85 A, so 90 A, and × 4 = 136 A (430.52, 240.6(A))
 		{"WH-12", "switch_amperes", "disconnecting_means.amperes", "violation"},                   // 30 A; 34 A × 1.15 = 39.1 A (430.110(A))
 		{"WH-12", "switch_horsepower", "disconnecting_means.horsepower", "violation"},             // 20 hp for 25 hp (430.109)
 		{"WH-12", "switch_locked_rotor", "disconnecting_means.locked_rotor_amperes", "violation"}, // 160 A; 183 A (Table 430.251(B))
 		{"WH-12", "bonding_size", "bonding", "violation"},                                         // 12 AWG; 8 AWG for 90 A (Table 250.122)
-		{"WH-13", "instantaneous_setting", "device.instantaneous_amperes", "violation"},              // 250 A; 16.7 A × 8 = 133.6 A, and × 13 = 217.1 A (430.52(C)(3))
+		{"WH-13", "instantaneous_setting", "device.instantaneous_amperes", "violation"},           // 250 A; 16.7 A × 8 = 133.6 A, and × 13 = 217.1 A (430.52(C)(3))
 		{"WH-14", "raceway_jam", "raceway", "caution"},                                            // 0.622 in over 0.216 in is 2.88 (Chapter 9 Tables 1, 4, 5)
-		{"LP-13", "overload_setting", "overload.setting_amperes", "caution"},                         // 48 A; 39.5 A × 1.15 = 45.425 A, to × 1.3 = 51.35 A if it will not start (430.32)
-		{"WH-15", "overload_setting", "overload.setting_amperes", "violation"},                       // 68 A; half of 98 A × 1.25 is 61.25 A (430.32(A)(1), part winding)
+		{"LP-13", "overload_setting", "overload.setting_amperes", "caution"},                      // 48 A; 39.5 A × 1.15 = 45.425 A, to × 1.3 = 51.35 A if it will not start (430.32)
+		{"WH-15", "overload_setting", "overload.setting_amperes", "violation"},                    // 68 A; half of 98 A × 1.25 is 61.25 A (430.32(A)(1), part winding)
 		{"LP-14", "drop_running", "length", "violation"},                                          // 656 ft × 2 Ω/1000 ft × 0.83 × 1.732 × 11 A = 21 V, 4.5 % and the reactance; 3 % is the owner's
 		{"NB-15", "raceway_fill", "raceway", "violation"},                                         // 142 mm²; 40 % of 330 mm² (CEC Tables 6, 8, 9)
 		{"NB-14", "", "", ""}, // the bad row
