@@ -1,5 +1,5 @@
 // Package motorcircuit sizes electric-motor circuits under the electrical code
-// in force, and shows the reason for every number.
+// in force, checks those that are installed, and shows the reason for every number.
 //
 // Fill a [Circuit] and call [Size]. The [Result] holds the design currents, the
 // conductors, the overload setting, the short-circuit device, the
@@ -12,6 +12,11 @@
 // [SizeFeeder] sizes the feeder of several circuits, [SizeGroup] judges several
 // motors on one branch circuit, [SizeShared] sizes several circuits in one
 // raceway, and [Compare] sizes one circuit under several editions.
+//
+// [Check] and [CheckFeeder] hold what is installed against the same rules and
+// return findings with their margins; [Reverse] and [ReverseFeeder] tell what else
+// it would carry. Every input reads itself from JSON and every result writes
+// itself as JSON, text and Markdown.
 //
 // Editions covered: NFPA 70 (NEC) of 2017, 2020 and 2023; CSA C22.1 (CEC, Part
 // I) of 2021 and 2024. What a code does not tabulate is refused, never guessed.
