@@ -70,7 +70,7 @@ func SizeGroup(gr Group) (GroupResult, error) {
 		return GroupResult{}, err
 	}
 	fr.ampacity(&g)
-	r := GroupResult{Group: gr, Circuits: fr.Circuits, Terms: fr.Terms, Ampacity: fr.Ampacity}
+	r := GroupResult{Group: gr, Circuits: fr.Circuits, Terms: fr.Terms, Ampacity: fr.Ampacity.Renamed("least ampacity of the branch-circuit conductors")}
 	_, carrying := g.conductors()
 	if r.Conductors, err = gr.Wiring.Select(gr.Edition, conductor.Load{Ampacity: r.Ampacity, Count: carrying}); err != nil {
 		return GroupResult{}, err
@@ -133,6 +133,7 @@ func (r *GroupResult) waysNEC(g *group, d tables.Device) []GroupWay {
 	if extra := g.loadTerms(); len(extra) > 0 {
 		listed = tables.SumOf(feederLimitName, e, &necGroupListed, append([]tables.Figure{listed.Renamed("motors")}, extra...)...)
 	}
+	listed = listed.Renamed("greatest device of the group")
 	ways := []GroupWay{
 		way(&necGroupSmall, g.smallMotors(), "each motor of 1 hp and 6 A at the most", tables.StatedFigure("greatest device of small motors", e, &necGroupSmall, tables.Ampere, small, 0)),
 		way(&necGroupSmallest, true, "the device does not open in normal service", g.smallestMotor().device.As("greatest device, of the smallest motor "+g.smallestMotor().tag, e, &necGroupSmallest)),

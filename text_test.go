@@ -9,6 +9,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/conductor"
 	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/tables"
@@ -41,7 +42,16 @@ func documents(t *testing.T) map[string]document {
 	require.NoError(t, err)
 	fh, err := motorcircuit.ReverseFeeder(f, motorcircuit.InstalledFeeder{Conductors: motorcircuit.Conductors{Size: tables.Must(tables.ParseSize("6"))}})
 	require.NoError(t, err)
-	return map[string]document{"result": r, "feeder": fr, "comparison": x, "report": report, "headroom": h, "feeder_headroom": fh}
+	small := func(tag, hp string) motorcircuit.Circuit {
+		c := cage(tag, hp, 460).Circuit
+		c.Edition, c.Wiring.Termination = tables.NEC2023, 75
+		return c
+	}
+	group, err := motorcircuit.SizeGroup(motorcircuit.Group{Tag: c.Tag, Edition: tables.NEC2023, Circuits: []motorcircuit.Circuit{small(c.Tag, "1/2"), small("b", "5")}, Listed: true})
+	require.NoError(t, err)
+	shared, err := motorcircuit.SizeShared(conductor.EMT, []motorcircuit.Circuit{small(c.Tag, "15"), small("b", "10")})
+	require.NoError(t, err)
+	return map[string]document{"group": group, "shared": shared, "result": r, "feeder": fr, "comparison": x, "report": report, "headroom": h, "feeder_headroom": fh}
 }
 
 // Every document wraps to a width without losing a word, is the same each time, and
