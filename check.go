@@ -47,7 +47,7 @@ type checker struct {
 	in Installed
 	r  Result
 
-	unfit bool // the kind of device may not protect the motor
+	misplaced bool // the kind of device may not protect the motor
 }
 
 // stands returns the circuit as it stands, as far as it is described by one.
@@ -73,7 +73,7 @@ func (in *Installed) stands(c Circuit) Circuit {
 // that may not be used where it is. The circuit goes on without them.
 func (k *checker) admit(c *Circuit) {
 	k.unsuited(c, protection.ValidateDevice(c.Edition, c.device(), c.Motor.Kind))
-	k.strip("branch.insulation", &c.Wiring)
+	k.strip("branch", k.in.Branch, &c.Wiring)
 }
 
 // unsuited reports an error that is of the kind of device, and takes the kind away.
@@ -83,7 +83,7 @@ func (k *checker) unsuited(c *Circuit, err error) bool {
 		return false
 	}
 	k.say(DeviceKind, "device.kind", Violation, "the device is an "+c.device().Name()+", and the code asks for "+input.Want, input.Cite)
-	k.unfit, c.Device = true, protection.TimeDelayFuse
+	k.misplaced, c.Device = true, protection.TimeDelayFuse
 	return true
 }
 

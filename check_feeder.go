@@ -4,6 +4,7 @@ import (
 	"errors"
 
 	"example.org/motorcircuit/conductor"
+	"example.org/motorcircuit/tables"
 )
 
 // CheckFeeder holds an installed feeder against the rules that [SizeFeeder] designs
@@ -16,7 +17,7 @@ func CheckFeeder(f Feeder, in InstalledFeeder) (Report, error) {
 	if err := f.Edition.Check(); err != nil {
 		return Report{}, err
 	}
-	k.strip("conductors.insulation", &f.Wiring)
+	k.strip("conductors", in.Conductors, &f.Wiring)
 	r, members, err := f.begin()
 	if err := errors.Join(err, in.validate(f)); err != nil {
 		return Report{}, err
@@ -82,7 +83,7 @@ func (k *feederChecker) device() error {
 	}
 	rating := claim{code: DeviceRating, part: "device.rating_amperes", found: in.Rating.Figure("rating of the device")}
 	k.atMost(rating, ceiling{limit: greater(r.Limit, r.Rating), start: greater(r.StartLimit, r.StartRating), confirmed: true, over: Violation})
-	if rating.code = DeviceCarries; !rating.found.IsZero() {
+	if rating.code, rating.cites = DeviceCarries, []tables.Citation{carriesLoad.In(k.edition)}; !rating.found.IsZero() {
 		k.atLeast(rating, r.lineLoad(&k.g).Current, Caution)
 	}
 	k.atMost(claim{code: InstantaneousSetting, part: "device.instantaneous_amperes", found: in.Instantaneous.Figure("instantaneous-trip setting")}, ceiling{})

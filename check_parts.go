@@ -12,6 +12,7 @@ import (
 var (
 	necInterrupting = tables.Rule{Ref: "110.9", Mark: tables.MarkC}
 	cecInterrupting = tables.Rule{Ref: "Rule 14-012", Mark: tables.MarkC}
+	carriesLoad     = tables.Rule{Outside: true, Ref: "common practice", Mark: tables.MarkC, Note: "a device carries the current of its load"}
 	necCarries      = tables.Rule{Ref: "430.52(B)", Mark: tables.MarkC, Note: "it must carry the starting current, and so the full-load current at the least"}
 )
 
@@ -28,7 +29,7 @@ func (k *checker) device() (err error) {
 	rating := claim{code: DeviceRating, part: "device.rating_amperes", found: in.Rating.Figure("rating of the device")}
 	setting := claim{code: InstantaneousSetting, part: "device.instantaneous_amperes", found: in.Instantaneous.Figure("instantaneous-trip setting")}
 	switch most := (ceiling{limit: x.Limit, start: x.StartLimit, confirmed: k.in.HardStart, over: Violation}); {
-	case k.unfit:
+	case k.misplaced:
 		k.skip("device.rating_amperes", "a device of its kind may not protect the motor")
 	case x.Device == protection.InstantaneousBreaker:
 		k.atMost(setting, most)
@@ -68,9 +69,11 @@ func (k *checker) carries(rating claim) {
 		if !d.Input.IsZero() {
 			current = d.Input
 		}
+		rule := &carriesLoad
 		if k.edition.Code() == tables.NEC {
-			rating.cites = []tables.Citation{necCarries.In(k.edition)}
+			rule = &necCarries
 		}
+		rating.cites = []tables.Citation{rule.In(k.edition)}
 		k.atLeast(rating, current, Caution)
 	}
 }
@@ -124,7 +127,7 @@ func (k *checker) bonding() error {
 	}
 	x := &k.r.ShortCircuit
 	rating := x.Rating
-	if !rating.IsZero() && !k.unfit { // an instantaneous trip has none
+	if !rating.IsZero() && !k.misplaced { // an instantaneous trip has none
 		rating = k.counted(k.in.Device.Rating, rating, x.StartRating)
 	}
 	material := k.r.Branch.Material

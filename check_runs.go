@@ -70,10 +70,10 @@ func (k *checker) winding(i int) InstalledWinding {
 // run judges the conductors of one run, and returns what they come to; nothing of
 // conductors that are not given or whose insulation may not be used there.
 func (k *judge) run(part string, w conductor.Wiring, given Conductors, load conductor.Load, end *conductor.MotorEnd) (conductor.Selection, error) {
-	barred := k.bare
-	if given.Insulation != "" && given.Size != 0 && !load.Ampacity.IsZero() {
+	unfit := k.unfit
+	if given.Insulation != "" {
 		w.Insulation = given.Insulation
-		barred = k.barred(part+".insulation", w)
+		unfit = k.unfitIn(w)
 	}
 	why := ""
 	switch {
@@ -83,7 +83,8 @@ func (k *judge) run(part string, w conductor.Wiring, given Conductors, load cond
 		why = "the code does not treat such a run apart here"
 	case given.Size == 0:
 		why = "not given"
-	case barred:
+	case unfit != nil:
+		k.tellUnfit(part, unfit)
 		why = "its insulation may not be used where it is"
 	}
 	if why != "" {
@@ -113,27 +114,35 @@ func (k *judge) run(part string, w conductor.Wiring, given Conductors, load cond
 	return s, nil
 }
 
-// strip takes an insulation away from a wiring that it may not be used in.
-func (k *judge) strip(part string, w *conductor.Wiring) {
-	if k.barred(part, *w) {
-		k.bare, w.Insulation = true, ""
+// strip takes an insulation away from a wiring that it may not be used in. It is told
+// of the runs that have it; where none is given, of the part named.
+func (k *judge) strip(part string, given Conductors, w *conductor.Wiring) {
+	if k.unfit = k.unfitIn(*w); k.unfit == nil {
+		return
+	}
+	w.Insulation = ""
+	if given.Size == 0 {
+		k.tellUnfit(part, k.unfit)
 	}
 }
 
-// barred reports an insulation that may not be used where a wiring is. One that the
-// edition does not know is left to the errors.
-func (k *judge) barred(part string, w conductor.Wiring) bool {
+// unfitIn returns why an insulation may not be used where a wiring is, nil if it
+// may. One that the edition does not know is left to the errors.
+func (k *judge) unfitIn(w conductor.Wiring) *tables.InputError {
 	if _, err := k.edition.Insulation(w.Insulation); err != nil {
-		return false
+		return nil
 	}
 	for _, fault := range tables.Faults(w.Validate(k.edition)) {
 		var input *tables.InputError
 		if errors.As(fault, &input) && input.Field == "wiring.insulation" && !input.Cite.IsZero() {
-			k.say(ConductorInsulation, part, Violation, "the insulation is "+input.Value+", and the code asks for "+input.Want, input.Cite)
-			return true
+			return input
 		}
 	}
-	return false
+	return nil
+}
+
+func (k *judge) tellUnfit(part string, why *tables.InputError) {
+	k.say(ConductorInsulation, part+".insulation", Violation, "the insulation is "+why.Value+", and the code asks for "+why.Want, why.Cite)
 }
 
 // sized judges the size and the ampacity of conductors.

@@ -127,23 +127,63 @@ func FuzzCircuitJSON(f *testing.F) {
 			require.NoError(t, json.Unmarshal(circuit, &c))
 			require.NoError(t, json.Unmarshal(installed, &in))
 			report, err := motorcircuit.Check(c, in)
-			if err != nil {
-				requireNamed(t, err)
-				require.Equal(t, motorcircuit.Report{}, report)
+			soundReport(t, report, err)
+			again, _ := motorcircuit.Check(c, in)
+			require.Equal(t, report, again)
+			if h, err := motorcircuit.Reverse(c, in); err == nil {
+				require.NotEmpty(t, h.String())
 			}
 		}
 	})
 }
 
+// soundReport holds what must be of every report: with an error it is empty; each
+// finding has its words and rules, its own code and part, and a margin that goes
+// with its severity.
+func soundReport(t *testing.T, report motorcircuit.Report, err error) {
+	t.Helper()
+	if err != nil {
+		requireNamed(t, err)
+		require.Equal(t, motorcircuit.Report{}, report)
+		return
+	}
+	require.NotEmpty(t, report.Cautions)
+	seen := map[string]bool{}
+	for _, f := range report.Findings {
+		require.True(t, f.Code.String() != "" && f.Part != "" && f.Text != "" && len(f.Cites) > 0, "%+v", f)
+		require.False(t, seen[f.Code.String()+f.Part], "%+v", f)
+		seen[f.Code.String()+f.Part] = true
+		if f.Margin.IsZero() {
+			require.NotEqual(t, motorcircuit.Note, f.Severity, "%+v", f)
+			continue
+		}
+		require.Equal(t, f.Margin.Value().Sign() >= 0, f.Severity == motorcircuit.Note, "%+v", f)
+		require.Equal(t, f.Required.Unit(), f.Found.Unit(), "%+v", f)
+		require.True(t, f.Margin.Value().Abs().Equal(f.Found.Value().Sub(f.Required.Value()).Abs()), "%+v", f)
+	}
+	for _, n := range report.NotJudged {
+		require.True(t, n.Part != "" && n.Why != "")
+	}
+	_, err = json.Marshal(report)
+	require.NoError(t, err)
+	require.NotEmpty(t, report.Text(40))
+}
+
 // FuzzFeederJSON reads arbitrary text as a feeder, as a group and as what is
-// installed of one.
+// installed of one, and checks it.
 func FuzzFeederJSON(f *testing.F) {
-	f.Add([]byte(`{"edition":"NEC-2023","circuits":[{"circuit":` + circuitJSON + `,"lines":"AB"}],"other_load_amperes":"5"}`))
-	f.Add([]byte(`{"conductors":{"size":"4","sets":2},"bonding":{"material":"aluminum"}}`))
-	f.Add([]byte(`{"edition":"CEC-2024","circuits":[{},null],"listed":true}`))
-	f.Fuzz(func(t *testing.T, text []byte) {
-		readJSON(t, text, motorcircuit.Feeder{})
-		readJSON(t, text, motorcircuit.Group{})
-		readJSON(t, text, motorcircuit.InstalledFeeder{})
+	f.Add([]byte(`{"edition":"NEC-2023","circuits":[{"circuit":`+circuitJSON+`}],"other_load_amperes":"5"}`), []byte(`{"conductors":{"size":"4","sets":2},"bonding":{"size":"8","material":"aluminum"},"device":{"rating_amperes":"40"}}`))
+	f.Add([]byte(`{"edition":"CEC-2024","circuits":[{},null],"listed":true}`), []byte(`{"length":"5 m","disconnecting_means":{"horsepower":"5 kW"}}`))
+	f.Add([]byte(`{"edition":"CEC-2021","demand_factor":0.8,"fault_amperes":5000,"circuits":[{"starts_with":"s","circuit":{"edition":"CEC-2021","motor":{"kind":"squirrel_cage","power":"50 hp","voltage":575}}},{"starts_with":"s","circuit":{"edition":"CEC-2021","motor":{"kind":"squirrel_cage","power":"40 hp","voltage":575}}}]}`), []byte(`{"conductors":{"size":"1/0"},"raceway":{"type":"emt","trade_size":"53"},"device":{"interrupting_amperes":4000}}`))
+	f.Fuzz(func(t *testing.T, feeder, installed []byte) {
+		readJSON(t, feeder, motorcircuit.Group{})
+		var x motorcircuit.Feeder
+		var in motorcircuit.InstalledFeeder
+		if readJSON(t, feeder, x) && readJSON(t, installed, in) {
+			require.NoError(t, json.Unmarshal(feeder, &x))
+			require.NoError(t, json.Unmarshal(installed, &in))
+			report, err := motorcircuit.CheckFeeder(x, in)
+			soundReport(t, report, err)
+		}
 	})
 }

@@ -12,7 +12,7 @@ type judge struct {
 	edition  tables.Edition
 	report   Report
 	cautions cautionList
-	bare     bool // the wiring's insulation may not be used where it is
+	unfit    *tables.InputError // why the wiring's insulation may not be used where it is
 }
 
 // A claim is one thing to judge.

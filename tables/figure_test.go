@@ -240,3 +240,44 @@ func TestFigureJSON(t *testing.T) {
 	require.NoError(t, err)
 	assert.Equal(t, `{"name":"power factor","value":"0.9","op":"given","how":"as given"}`, string(text), "no unit, no citation")
 }
+
+// A difference is exact, of one unit, below zero too.
+func TestDifferenceOf(t *testing.T) {
+	for _, tt := range []struct{ whole, part, want string }{{"81.25", "65", "16.25 A"}, {"65", "81.25", "-16.25 A"}, {"7.6", "7.6", "0 A"}, {"0.000001", "0.000002", "-0.000001 A"}} {
+		f := tables.DifferenceOf("margin", 0, nil, amps(tt.whole), amps(tt.part))
+		assert.Equal(t, tt.want, f.String())
+		assert.Equal(t, tables.Difference, f.Op())
+		assert.Contains(t, f.How(), tt.whole+" A − ")
+		assert.Len(t, f.Operands(), 2)
+	}
+}
+
+// Found step by step; and a number of percent that a caller gives.
+func TestStepAndPercentFigures(t *testing.T) {
+	rule := tables.Rule{Ref: "trial", Outside: true}
+	f := tables.StepFigure("longest run", tables.NEC2023, &rule, tables.Metre, 1532, 1)
+	assert.Equal(t, "153.2 m found step by step [trial]", f.String()+" "+f.How()+" ["+f.Citation().String()+"]")
+	assert.Equal(t, "2.5 %", tables.PercentFigure("limit", tables.Must(tables.ParseRatio("2.5"))).String())
+	assert.True(t, tables.PercentFigure("limit", tables.Ratio{}).IsZero())
+}
+
+// Quantities of figures, and figures of sizes and powers: a third has no decimal
+// and is told to be rounded. Areas by NFPA 70 Chapter 9 Table 8.
+func TestFiguresOfInputs(t *testing.T) {
+	assert.Equal(t, "81.25 A", tables.CurrentOf(amps("81.25")).String())
+	assert.True(t, tables.CurrentOf(tables.Figure{}).IsZero())
+	assert.Equal(t, "110 °C", tables.TemperatureOf(tables.Whole("rating", tables.Celsius, 110)).String())
+	assert.True(t, tables.TemperatureOf(tables.Figure{}).IsZero())
+	for text, want := range map[string]string{"6 AWG": "13.3 mm²", "1/0": "53.49 mm²", "500": "253 mm²", "16 mm²": "16 mm²"} {
+		f := tables.Must(tables.ParseSize(text)).Figure("conductor")
+		assert.Equal(t, want, f.String())
+		assert.Equal(t, text == "16 mm²", f.Citation().IsZero())
+	}
+	assert.True(t, tables.Size(0).Figure("conductor").IsZero())
+	for text, want := range map[string]string{"7-1/2 hp": "7.5 hp", "30 kW": "30 kW", "1/3 hp": "0.333333 hp", "1/6 hp": "0.166666 hp"} {
+		f := tables.Must(tables.ParsePower(text)).Figure("rating")
+		assert.Equal(t, want, f.String())
+		assert.Equal(t, want[:2] == "0.", f.Note() != "")
+	}
+	assert.True(t, tables.Power{}.Figure("rating").IsZero())
+}
