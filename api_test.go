@@ -17,6 +17,20 @@ import (
 	"example.org/motorcircuit/internal/testkit"
 )
 
+// TestVersion holds the newest release of the change log to the one whose names the
+// list promises.
+func TestVersion(t *testing.T) {
+	text, err := os.ReadFile("CHANGELOG.md")
+	require.NoError(t, err)
+	for line := range strings.Lines(string(text)) {
+		if released, ok := strings.CutPrefix(line, "## v"); ok {
+			require.Equal(t, version, "v"+strings.Fields(released)[0])
+			return
+		}
+	}
+	t.Fatal("no release")
+}
+
 // TestAPI compares the exported names of every public package with the list in
 // internal/testdata/api.txt. A line that vanishes is a broken user; one that
 // appears is reviewed as a promise. `go test -run TestAPI -update` rewrites it.
@@ -26,8 +40,12 @@ func TestAPI(t *testing.T) {
 		lines = append(lines, exported(t, dir)...)
 	}
 	slices.Sort(lines)
-	testkit.Golden(t, "internal/testdata/api.txt", strings.Join(slices.Compact(lines), "\n")+"\n")
+	lines = append([]string{"# " + version}, slices.Compact(lines)...)
+	testkit.Golden(t, "internal/testdata/api.txt", strings.Join(lines, "\n")+"\n")
 }
+
+// version is the release whose names are promised.
+const version = "v0.1.0"
 
 func exported(t *testing.T, dir string) (lines []string) {
 	t.Helper()

@@ -3,6 +3,7 @@ package motorcircuit
 import (
 	"errors"
 
+	"example.org/motorcircuit/conductor"
 	"example.org/motorcircuit/protection"
 	"example.org/motorcircuit/tables"
 )
@@ -52,21 +53,26 @@ type checker struct {
 
 // stands returns the circuit as it stands, as far as it is described by one.
 func (in *Installed) stands(c Circuit) Circuit {
-	w := &c.Wiring
-	w.Least, w.Sets = 0, 0
 	if in.Device.Kind.IsValid() {
 		c.Device = in.Device.Kind
 	}
-	if in.Raceway.Type != 0 {
-		w.Raceway = in.Raceway.Type
-	}
 	if in.Flexible.Type != 0 {
-		w.Flexible = in.Flexible.Type
+		c.Wiring.Flexible = in.Flexible.Type
 	}
-	if !in.Length.IsZero() {
-		w.Length = in.Length
-	}
+	c.Wiring = in.Raceway.stands(c.Wiring, in.Length)
 	return c
+}
+
+// stands returns the wiring of a run as it stands, without what says how to choose.
+func (in *InstalledRaceway) stands(w conductor.Wiring, length tables.Length) conductor.Wiring {
+	w.Least, w.Sets = 0, 0
+	if in.Type != 0 {
+		w.Raceway = in.Type
+	}
+	if !length.IsZero() {
+		w.Length = length
+	}
+	return w
 }
 
 // admit finds a kind of device that may not protect the motor, and an insulation

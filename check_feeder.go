@@ -46,17 +46,10 @@ type feederChecker struct {
 
 // stands returns the feeder as it stands, as far as it is described by one.
 func (in *InstalledFeeder) stands(f Feeder) Feeder {
-	w := &f.Wiring
-	w.Least, w.Sets = 0, 0
 	if in.Device.Kind.IsValid() {
 		f.Device = in.Device.Kind
 	}
-	if in.Raceway.Type != 0 {
-		w.Raceway = in.Raceway.Type
-	}
-	if !in.Length.IsZero() {
-		w.Length = in.Length
-	}
+	f.Wiring = in.Raceway.stands(f.Wiring, in.Length)
 	return f
 }
 

@@ -51,7 +51,10 @@ func (s SharedResult) Text(width int) string { return s.document().Text(width) }
 func (s SharedResult) Markdown() string { return s.document().Markdown() }
 
 func (s *SharedResult) document() *layout.Doc {
-	e := s.Circuits[0].Circuit.Edition
+	var e tables.Edition
+	if len(s.Circuits) > 0 {
+		e = s.Circuits[0].Circuit.Edition
+	}
 	d := &layout.Doc{Title: fmt.Sprintf("%d circuits in one raceway, %d conductors that carry current, under %s", len(s.Circuits), s.Count, e.Standard()), Columns: derivationColumns}
 	circuits := layout.Section{Heading: "Circuits"}
 	for i := range s.Circuits {

@@ -71,6 +71,9 @@ func (r FeederResult) Quantities() []Quantity {
 // of each, and the raceway and bonding conductor of all once, as long as the
 // longest run. The quantities of the single results count those again.
 func (s SharedResult) Quantities() []Quantity {
+	if len(s.Circuits) == 0 {
+		return nil
+	}
 	var list []Quantity
 	longest := &s.Circuits[0]
 	for i := range s.Circuits {

@@ -77,3 +77,16 @@ func TestDocuments(t *testing.T) {
 		})
 	}
 }
+
+// Nothing has been worked out: there is little to tell, and nothing fails.
+func TestEmptyDocuments(t *testing.T) {
+	for _, d := range []document{motorcircuit.Result{}, motorcircuit.FeederResult{}, motorcircuit.GroupResult{}, motorcircuit.SharedResult{},
+		motorcircuit.Comparison{}, motorcircuit.Report{}, motorcircuit.Headroom{}, motorcircuit.FeederHeadroom{}} {
+		assert.NotEmpty(t, d.Text(60), "%T", d)
+		assert.NotEmpty(t, d.Markdown(), "%T", d)
+	}
+	assert.Empty(t, motorcircuit.SharedResult{}.Quantities())
+	assert.Empty(t, motorcircuit.Report{}.Violations())
+	assert.Equal(t, motorcircuit.Installed{}, motorcircuit.Result{}.AsInstalled())
+	assert.Equal(t, motorcircuit.InstalledFeeder{}, motorcircuit.FeederResult{}.AsInstalled())
+}
