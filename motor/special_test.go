@@ -201,3 +201,47 @@ func TestFirePumpDemand(t *testing.T) {
 		assert.Equal(t, "motor.use", tables.FieldOf(err))
 	}
 }
+
+// The largest winding stands for the motor wherever it is in the order: 28 A; of two
+// that are alike either does.
+func TestLargestWindingStands(t *testing.T) {
+	for _, amps := range [][]string{{"28", "12", "20"}, {"12", "28", "20"}, {"12", "20", "28"}, {"28", "28", "12"}} {
+		m := motor.Motor{Kind: motor.SquirrelCage, Voltage: 460}
+		for _, a := range amps {
+			m.Nameplate.Windings = append(m.Nameplate.Windings, motor.Winding{Amperes: motor.Amps(a)})
+		}
+		for _, e := range allEditions {
+			d := demand(t, m, e)
+			assert.Equal(t, "28 A", d.Design.String(), amps)
+			assert.Equal(t, "28 A", d.Overload.String(), amps)
+			assert.Len(t, d.Windings, 3)
+		}
+	}
+}
+
+// What is special of a motor adds up: resistors beside several speeds, and beside
+// intermittent duty, NEC 430.29, 430.22(B) and 430.23.
+func TestSpecialsTogether(t *testing.T) {
+	d := dc()
+	d.Resistor = tables.LightStarting
+	d.Nameplate.Windings = []motor.Winding{{Amperes: motor.Amps("38")}, {Amperes: motor.Amps("20")}}
+	w := wound()
+	w.Resistor, w.Duty = tables.LightStarting, motor.Duty{Kind: motor.Intermittent, Minutes: 15}
+	for _, e := range necEditions {
+		got := demand(t, d, e)
+		assert.Equal(t, "13.3 A", got.Resistor.String())
+		assert.Len(t, got.Windings, 2)
+		got = demand(t, w, e)
+		assert.Equal(t, "55.25 A", got.Secondary.String(), "65 × 85 %, Table 430.22(E)")
+		assert.Equal(t, "22.75 A", got.Resistor.String())
+	}
+}
+
+// A compressor that is marked with a power too goes by its amperes: 30 A at 230 V is
+// 15 hp by Table 430.250, and 5 hp draws 15.2 A (NEC 440.12(A)).
+func TestCompressorPowerIsNotItsRating(t *testing.T) {
+	m := motor.Motor{Kind: motor.Hermetic, Power: motor.HP("5"), Phases: 3, Voltage: 230, Nameplate: motor.Nameplate{Amperes: motor.Amps("30"), LockedRotor: motor.Amps("100")}}
+	for _, e := range necEditions {
+		assert.Equal(t, "15 hp", demand(t, m, e).Horsepower.String(), "10 hp draws 28 A, 15 hp 42 A")
+	}
+}

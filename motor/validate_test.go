@@ -21,6 +21,11 @@ func TestValidateFields(t *testing.T) {
 	}{
 		{"motor.kind", "none", func(m *motor.Motor) { m.Kind = 0 }},
 		{"motor.kind", "unknown", func(m *motor.Motor) { m.Kind = 99 }},
+		{"motor.kind", "the first unknown", func(m *motor.Motor) { m.Kind = motor.Hermetic + 1 }},
+		{n + "efficiency_class", "the first unknown", func(m *motor.Motor) { m.Nameplate.EfficiencyClass = motor.PremiumEfficiency + 1 }},
+		{n + "windings[1].amperes", "0 A", func(m *motor.Motor) {
+			m.Nameplate.Amperes, m.Nameplate.Windings = tables.Current{}, []motor.Winding{{Amperes: motor.Amps("100000")}, {Amperes: motor.Amps("0")}}
+		}},
 		{"motor.phases", "single-phase cage", func(m *motor.Motor) { m.Phases = 1 }},
 		{"motor.phases", "four", func(m *motor.Motor) { m.Phases = 4 }},
 		{"motor.phases", "negative", func(m *motor.Motor) { m.Phases = -1 }},
@@ -192,4 +197,12 @@ func TestDemandNeedsAnEdition(t *testing.T) {
 		assert.Equal(t, "edition", tables.FieldOf(err))
 		assert.Equal(t, motor.Demand{}, d)
 	}
+}
+
+// What is not given says so.
+func TestNotGivenIsToldSo(t *testing.T) {
+	err := motor.Motor{}.Validate()
+	assert.ErrorContains(t, err, "motor.kind is not given")
+	assert.ErrorContains(t, err, "motor.voltage is not given")
+	assert.ErrorContains(t, motor.Motor{Kind: 99, Voltage: -1}.Validate(), `motor.kind "99"`)
 }

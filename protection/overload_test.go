@@ -48,6 +48,7 @@ func TestOverload(t *testing.T) {
 			assert.Equal(t, "430.32(A)(1)", ref(o.Limit))
 			assert.Equal(t, tt.start, o.StartLimit.String(), "%+v %v", tt, e)
 			assert.Equal(t, "430.32(C)", ref(o.StartLimit))
+			assert.Contains(t, o.Limit.How(), map[bool]string{true: "40 °C or less", false: "service factor"}[tt.rise != "" && tt.limit == "76.25 A" && tt.factor != "1.15"], "%+v", tt)
 			assert.True(t, testkit.Rests(o.Limit, "430.6(A)(2)"))
 			assert.True(t, o.Protector.IsZero())
 		}

@@ -234,3 +234,55 @@ func TestValveActuatorDevice(t *testing.T) {
 		assert.Equal(t, "46 A", overload(t, e, m).Limit.String())
 	}
 }
+
+// The rules that say why: CEC Rule 28-708 for the device of a compressor, NEC
+// 440.12(A) for its horsepower and 430.130(A)(4) for an instantaneous trip before a
+// drive.
+func TestRulesThatSayWhy(t *testing.T) {
+	for _, e := range tables.Editions() {
+		err := protection.ValidateDevice(e, magnetic, motor.Hermetic)
+		var input *tables.InputError
+		require.ErrorAs(t, err, &input)
+		assert.Equal(t, map[tables.Code]string{tables.NEC: "430.52(D), 440.22", tables.CEC: "Rule 28-708"}[e.Code()], input.Cite.Ref)
+	}
+	drive := cage50()
+	drive.Starting, drive.Nameplate.DriveInput = motor.Drive, motor.Amps("60")
+	for _, e := range necEditions {
+		assert.True(t, testkit.Cautioned(device(t, e, magnetic, drive).Cautions, "430.130(A)(4)", "listed with the drive"))
+		assert.False(t, testkit.Cautioned(device(t, e, magnetic, cage50()).Cautions, "430.130(A)(4)", ""))
+		m := compressor("38", "", "")
+		d, err := m.Demand(e)
+		require.NoError(t, err)
+		assert.Equal(t, "440.12(A)", protection.SizeDisconnect(e, m, d).Cite.Ref)
+		d, err = cage50().Demand(e)
+		require.NoError(t, err)
+		assert.Equal(t, "430.109", protection.SizeDisconnect(e, cage50(), d).Cite.Ref)
+	}
+}
+
+// A fire pump's device may be as large as what is marked and must not be larger
+// (NEC 695.4(B)(2)(a), 430.52(C)(2)): 363 A asks for 400 A.
+func TestFirePumpAtItsMarking(t *testing.T) {
+	m := pump()
+	for _, e := range necEditions {
+		m.Nameplate.MaximumDevice = motor.Amps("400")
+		assert.Equal(t, "400 A", device(t, e, timeDelay, m).Rating.String())
+		m.Nameplate.MaximumDevice = motor.Amps("399.9")
+		d, err := m.Demand(e)
+		require.NoError(t, err)
+		_, err = protection.SizeShortCircuit(e, timeDelay, m, d)
+		require.ErrorAs(t, err, new(*tables.NoSizeError))
+	}
+}
+
+// The higher ceiling that reaches just the ordinary rating gives no more, and is not
+// told to be passed: 20 A × 225 % = 45 A beside 20 × 175 % = 35 A; 8 A × 175 % = 14 A,
+// 15 A, and 8 × 225 % = 18 A, 15 A again (NEC 430.52(C)(1), 240.6(A)).
+func TestStartRatingThatIsTheOrdinary(t *testing.T) {
+	for _, e := range necEditions {
+		s := device(t, e, timeDelay, drawing("8"))
+		assert.Equal(t, "15 A 15 A", s.Rating.String()+" "+s.StartRating.String())
+		assert.Equal(t, tables.NextDown, s.StartRating.Op())
+		assert.False(t, testkit.Cautioned(s.Cautions, ref(s.StartLimit), "already stands"))
+	}
+}
