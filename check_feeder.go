@@ -122,6 +122,8 @@ func (k *feederChecker) drop() (err error) {
 		return nil
 	}
 	r.Drop.Limit = dropLimit(k.edition)
-	r.Drop.Running, err = f.Wiring.RunningDrop(k.edition, r.Conductors, r.lineLoad(&k.g))
+	if r.Drop.Running, err = f.Wiring.RunningDrop(k.edition, r.Conductors, r.lineLoad(&k.g)); err == nil {
+		r.totalDrops()
+	}
 	return k.dropped(r.Drop.Running, r.Drop.Limit, f.MaxDrop, err)
 }

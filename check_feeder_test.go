@@ -1,6 +1,7 @@
 package motorcircuit_test
 
 import (
+	"fmt"
 	"math/rand/v2"
 	"testing"
 
@@ -53,6 +54,8 @@ func TestCheckFeederByHand(t *testing.T) {
 			assert.Equal(t, want, got[key], key)
 		}
 		assert.Contains(t, got["drop_running length"], "caution 3 %")
+		f.Circuits[1].Circuit.Wiring.Length = conductor.Metres("30")
+		assert.Contains(t, fmt.Sprint(checkedFeeder(t, f, in).Cautions), "feeder and branch circuit of b together drop")
 	}
 }
 

@@ -48,6 +48,13 @@ func (r *FeederResult) physical(g *group) error {
 	if r.Drop.LongestRun, err = f.Wiring.LongestRun(e, r.Conductors, line, r.Drop.Limit); err != nil {
 		return err
 	}
+	r.totalDrops()
+	return nil
+}
+
+// totalDrops adds the feeder's running drop to that of each circuit that has one.
+func (r *FeederResult) totalDrops() {
+	e := r.Feeder.Edition
 	rule := &necTotalDrop
 	if e.Code() == tables.CEC {
 		rule = &cecDropLimit
@@ -59,7 +66,6 @@ func (r *FeederResult) physical(g *group) error {
 		}
 		r.TotalDrop = append(r.TotalDrop, total)
 	}
-	return nil
 }
 
 // lineLoad is the greatest set that runs together as a load of the feeder.
