@@ -198,3 +198,16 @@ func TestCheckFeederErrors(t *testing.T) {
 	assert.Equal(t, motorcircuit.ConductorInsulation, report.Violations()[0].Code)
 	assert.NotEmpty(t, found(report, motorcircuit.BondingSize))
 }
+
+// Bonding conductors are judged by their own metal, and fill the raceway as they are:
+// beside aluminum of 71 A a copper one of 6 AWG to 200 A (NEC Table 250.122); 3 × 2
+// AWG of 0.1158 in² and 6 AWG of 0.0507 in² (Chapter 9 Table 5), or 4 AWG of 0.0824.
+func TestCheckFeederBonding(t *testing.T) {
+	f := feeder(tables.NEC2023, cage("a", "30", 460), cage("b", "15", 460))
+	f.Device, f.Wiring.Termination, f.Wiring.Material, f.Wiring.Raceway = protection.InverseTimeBreaker, 75, conductor.Aluminum, conductor.EMT
+	for size, fill := range map[string]string{"6": "0.3981 in²", "4": "0.4298 in²"} {
+		report := checkedFeeder(t, f, motorcircuit.InstalledFeeder{Conductors: wire("2"), Bonding: motorcircuit.BondingConductors{Size: sizeOf(size)}, Raceway: motorcircuit.InstalledRaceway{Trade: "1-1/4"}})
+		assert.Equal(t, "13.3 mm²", found(report, motorcircuit.BondingSize)[0].Required.String())
+		assert.Equal(t, fill, found(report, motorcircuit.RacewayFilled)[0].Found.String())
+	}
+}

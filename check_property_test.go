@@ -98,6 +98,7 @@ func TestCheckFindsSmallerConductors(t *testing.T) {
 		"secondary":              func(in *motorcircuit.Installed) *motorcircuit.Conductors { return &in.Secondary },
 		"resistor":               func(in *motorcircuit.Installed) *motorcircuit.Conductors { return &in.Resistor },
 		"windings[0].conductors": func(in *motorcircuit.Installed) *motorcircuit.Conductors { return &in.Windings[0].Conductors },
+		"windings[1].conductors": func(in *motorcircuit.Installed) *motorcircuit.Conductors { return &in.Windings[1].Conductors },
 	}
 	taken := map[string]int{}
 	randomDesigns(t, 9, count, func(_ *rand.Rand, r motorcircuit.Result) {

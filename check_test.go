@@ -107,6 +107,9 @@ var checkCases = []checkCase{
 		map[string]string{"raceway_fill raceway": "violation 0.346 in² 0.3511 in²"}, "0.2979 + 4 × 0.0133"},
 	{"a caller's own limit of drop", necEditions, pump("50", 460, protection.InverseTimeBreaker, func(c *motorcircuit.Circuit) { c.MaxDrop = motor.Factor("1") }),
 		motorcircuit.Installed{Branch: wire("4"), Length: conductor.Metres("100")}, map[string]string{"drop_running length": "violation 1 % 2.38 %"}, "Chapter 9 Table 9: 328 ft of 0.31 + j0.06 Ω/kft, 65 A at 0.86; the limit is the caller's"},
+	{"a fire pump's drop", necEditions, pump("50", 460, protection.TimeDelayFuse, func(c *motorcircuit.Circuit) { c.Motor.Use = motor.FirePump }),
+		motorcircuit.Installed{Branch: wire("4"), Length: conductor.Metres("400"), Device: motorcircuit.InstalledDevice{Rating: motor.Amps("350")}},
+		map[string]string{"drop_starting length": "caution 15 % 27.87 %", "drop_running length": "caution 5 % 10.99 %", "device_carries device.rating_amperes": "violation 363 A 350 A"}, "695.7, 695.4(B)(2)(a); 115 % of 65 A and 363 A over 0.407 + j0.079 Ω"},
 	{"the code's figure of drop", everyone, pump("50", 460, protection.InverseTimeBreaker),
 		motorcircuit.Installed{Branch: wire("4"), Length: conductor.Metres("300")}, map[string]string{"drop_running length": "caution 3 % 7.15 %"}, "210.19 note, 8-102: 3 %; three times the run"},
 }
@@ -177,4 +180,26 @@ func trimmed(raw string) string {
 		return raw[1 : len(raw)-1]
 	}
 	return raw
+}
+
+// The words and the rules of findings, by code.
+func TestCheckWords(t *testing.T) {
+	for _, e := range everyone {
+		c := pump("200", 460, protection.InverseTimeBreaker, func(c *motorcircuit.Circuit) { c.Edition, c.Fault = e, motor.Amps("22000") })
+		report := checked(t, c, motorcircuit.Installed{Branch: motorcircuit.Conductors{Size: sizeOf("1/0"), Sets: 2}, Device: motorcircuit.InstalledDevice{Rating: motor.Amps("200"), Interrupting: motor.Amps("25000")}})
+		assert.Contains(t, found(report, motorcircuit.ConductorAmpacity)[0].Text, "ampacity of 2 × 1/0 AWG copper ")
+		nec := e.Code() == tables.NEC
+		assert.Equal(t, map[bool]string{true: "430.52(B)", false: "common practice"}[nec], found(report, motorcircuit.DeviceCarries)[0].Cites[0].Ref)
+		assert.Equal(t, map[bool]string{true: "110.9", false: "Rule 14-012"}[nec], found(report, motorcircuit.InterruptingRating)[0].Cites[0].Ref)
+		report = checked(t, c, motorcircuit.Installed{Branch: wire("1/0")})
+		assert.Contains(t, found(report, motorcircuit.ConductorAmpacity)[0].Text, "ampacity of 1/0 AWG copper ")
+	}
+}
+
+// The ends of what may be given are allowed: 1000 V, 12 sets, 9 units, 1000000 A.
+func TestCheckEdges(t *testing.T) {
+	c := motorcircuit.Circuit{Edition: tables.NEC2023, Motor: motor.Motor{Kind: motor.Torque, Voltage: motorcircuit.MaxVolts, Nameplate: motor.Nameplate{Amperes: motor.Amps("12")}}}
+	report := checked(t, c, motorcircuit.Installed{Branch: motorcircuit.Conductors{Size: sizeOf("1/0"), Sets: conductor.MaxSets}, Overload: motorcircuit.InstalledOverload{Units: 9}, Device: motorcircuit.InstalledDevice{Rating: motor.Amps("1000000")}})
+	assert.NotEmpty(t, found(report, motorcircuit.ConductorParallel))
+	assert.Equal(t, motorcircuit.Violation, found(report, motorcircuit.DeviceRating)[0].Severity)
 }
