@@ -103,7 +103,7 @@ func TestTransformerFault(t *testing.T) {
 	single, err := conductor.Transformer{KVA: tables.Must(tables.ParseRatio("25")), Percent: tables.Must(tables.ParseRatio("2"))}.Fault(tables.NEC2023, 240, 1)
 	require.NoError(t, err)
 	assert.Equal(t, "5209 A", single.String()) // 104.17 A × 50, rounded up
-	for _, bad := range []conductor.Transformer{{}, {KVA: x.KVA}, {Percent: x.Percent}} {
+	for _, bad := range []conductor.Transformer{{}, {KVA: x.KVA}, {Percent: x.Percent}, {KVA: tables.Must(tables.ParseRatio("0")), Percent: x.Percent}} {
 		_, err := bad.Fault(tables.NEC2023, 480, 3)
 		assert.Contains(t, tables.FieldOf(err), "transformer.")
 	}
@@ -125,4 +125,37 @@ func TestTableD3InParallel(t *testing.T) {
 	require.NoError(t, err)
 	assert.Equal(t, "1.52 %", one.String())
 	assert.Equal(t, "0.76 %", half.String()) // 1.515 ÷ 2
+}
+
+// Two sets carry half each, so that the run is twice as long and the drop half; a
+// cable has a factor of its own (CSA C22.1:24 Table D3); nothing without volts.
+func TestTableD3SetsAndCable(t *testing.T) {
+	limit := tables.StatedFigure("limit", tables.CEC2024, &tables.Rule{Ref: "a rule"}, tables.Percent, 3, 0)
+	w, s := run(t, tables.CEC2024, conductor.Copper, "1/0", "100 m", 0)
+	w.DropMethod = conductor.ByTableD3
+	figures := func(s conductor.Selection) (drop, far float64) {
+		f, err := w.RunningDrop(tables.CEC2024, s, line("120", "0.85"))
+		require.NoError(t, err)
+		g, err := w.LongestRun(tables.CEC2024, s, line("120", "0.85"), limit)
+		require.NoError(t, err)
+		return f.Float(), g.Float()
+	}
+	drop, far := figures(s)
+	two := s
+	two.Sets = 2
+	half, twice := figures(two)
+	assert.InDelta(t, drop/2, half, 0.011)
+	assert.InDelta(t, far*2, twice, 0.21)
+	cable := s
+	cable.Run = tables.InCable
+	other, _ := figures(cable)
+	raceway, err := tables.CEC2024.DropFactor(conductor.Copper, s.Size, false, plain("0.85"))
+	require.NoError(t, err)
+	inCable, err := tables.CEC2024.DropFactor(conductor.Copper, s.Size, true, plain("0.85"))
+	require.NoError(t, err)
+	assert.NotZero(t, raceway.Cmp(inCable))
+	assert.InEpsilon(t, drop*inCable.Float()/raceway.Float(), other, 0.01)
+	f, err := w.RunningDrop(tables.CEC2024, s, conductor.LineLoad{Phases: 3, Current: amps("5"), PowerFactor: plain("0.85")})
+	require.NoError(t, err)
+	assert.True(t, f.IsZero())
 }

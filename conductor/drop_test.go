@@ -167,8 +167,11 @@ func TestDropAbsent(t *testing.T) {
 		require.NoError(t, err)
 		assert.True(t, f.IsZero())
 	}
+	f, err := w.FaultAtEnd(tables.NEC2023, s, 0, 3, amps("20000"), tables.Figure{})
+	require.NoError(t, err)
+	assert.True(t, f.IsZero())
 	w.Length = tables.Length{}
-	f, err := w.RunningDrop(tables.NEC2023, s, line("65", "0.85"))
+	f, err = w.RunningDrop(tables.NEC2023, s, line("65", "0.85"))
 	require.NoError(t, err)
 	assert.True(t, f.IsZero())
 	f, err = w.FaultAtEnd(tables.NEC2023, s, 480, 3, amps("20000"), tables.Figure{})

@@ -2,6 +2,7 @@ package conductor_test
 
 import (
 	"math"
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -95,4 +96,14 @@ func TestWithstandScales(t *testing.T) {
 	assert.True(t, conductor.Withstand(tables.NEC2023, s, tables.Figure{}).IsZero())
 	s.Insulation = "none"
 	assert.True(t, conductor.Withstand(tables.NEC2023, s, kiloamps(4)).IsZero())
+}
+
+// The method is meant for 0.1 to 5 s: beyond that the figure says so. 4 AWG of 41740
+// circular mils stands 1 kA for more, and 42 kA for less.
+func TestWithstandOutsideOfItsRange(t *testing.T) {
+	s := chosen(t, conductor.Wiring{Termination: 75, Least: size("4")}, tables.NEC2023, load("1"))
+	for kiloamps, outside := range map[float64]bool{0.5: true, 2: false, 42: true} {
+		fault := tables.ComputedFigure("fault", tables.NEC2023, &tables.Rule{Ref: "a rule"}, tables.Kiloampere, kiloamps, 6, true, "")
+		assert.Equal(t, outside, strings.Contains(conductor.Withstand(tables.NEC2023, s, fault).Note(), "outside"), kiloamps)
+	}
 }

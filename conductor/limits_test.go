@@ -42,6 +42,10 @@ func TestNextSmaller(t *testing.T) {
 		assert.Contains(t, s.Smaller.Why, "less than is asked for")
 		assert.Equal(t, "81.25 A", s.Required.String())
 		assert.Equal(t, "81.25 A", s.Need.String(), "nothing to correct")
+		s = chosen(t, conductor.Wiring{Termination: 75}, e, load("22"))
+		assert.Equal(t, "12 AWG 14 AWG 20 A", s.Size.String()+" "+s.Smaller.Size.String()+" "+s.Smaller.Ampacity.String(), "the smallest of all fails by its ampacity")
+		_, err := conductor.Wiring{}.Select(e, load("0"))
+		assert.Equal(t, "load.ampacity", tables.FieldOf(err))
 	}
 }
 

@@ -52,6 +52,7 @@ func TestRate(t *testing.T) {
 		{tables.NEC2023, conductor.Wiring{Insulation: "THWN-2", Termination: 75}, "6", 0, "65 A", "75 °C column"},
 		{tables.NEC2023, conductor.Wiring{Insulation: "THWN-2", Termination: 75, Ambient: celsius("50")}, "6", 1, "61.5 A", "75 × 0.82 of the 90 °C column"},
 		{tables.NEC2023, conductor.Wiring{Insulation: "THWN-2", Termination: 75}, "2/0", 3, "525 A", "3 × 175"},
+		{tables.NEC2023, conductor.Wiring{Insulation: "THWN-2", Termination: 75}, "1/0", conductor.MaxSets, "1800 A", "12 × 150"},
 		{tables.NEC2023, conductor.Wiring{Termination: 75, Least: size("1/0"), Sets: 5}, "12", 1, "25 A", "Least and Sets do not count"},
 		{tables.NEC2023, conductor.Wiring{Termination: 75}, "16", 1, "", "no entry in the 75 °C column"},
 		{tables.NEC2023, conductor.Wiring{Insulation: "THHN", Termination: 75}, "16", 1, "", "90 °C has one, the terminals' column none"},
@@ -143,6 +144,7 @@ func TestRateRaceway(t *testing.T) {
 	pulls := []conductor.Pull{{Insulation: "RW90", Size: size("4"), Count: 3}, {Insulation: "RW90", Size: size("8"), Count: 1}}
 	want, err := conductor.SelectRaceway(tables.CEC2024, conductor.EMT, false, pulls...)
 	require.NoError(t, err)
+	assert.Equal(t, "Rule 12-910 and Table 8", want.Area.Citation().Ref)
 	for _, trade := range []string{want.Trade, motor.HP(want.Trade).Text()} {
 		got, err := conductor.RateRaceway(tables.CEC2024, conductor.EMT, trade, false, pulls...)
 		require.NoError(t, err)

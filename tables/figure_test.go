@@ -281,3 +281,18 @@ func TestFiguresOfInputs(t *testing.T) {
 	}
 	assert.True(t, tables.Power{}.Figure("rating").IsZero())
 }
+
+// A share in percent is rounded up: 2 ÷ 3 is 66.67 %. A figure of another name is
+// the same otherwise, and none stays none.
+func TestPercentOfAndRenamed(t *testing.T) {
+	rule := tables.Rule{Ref: "a rule"}
+	f := tables.PercentOf("fill", tables.NEC2023, &rule, amps("2"), amps("3"))
+	assert.Equal(t, "66.67 %", f.String())
+	assert.Equal(t, tables.QuotientUp, f.Op())
+	g := f.Renamed("share")
+	assert.Equal(t, "share", g.Name())
+	assert.Equal(t, f.How()+f.Citation().String(), g.How()+g.Citation().String())
+	assert.True(t, tables.Figure{}.Renamed("share").IsZero())
+	assert.Contains(t, tables.FromMemory(f.Citation()).String(), "[NFPA 70-2023 a rule]")
+	assert.Contains(t, tables.FromMemory(f.Citation()).Text, "from memory")
+}

@@ -83,3 +83,21 @@ func TestSizeOrder(t *testing.T) {
 	all[0] = 0
 	assert.Equal(t, "18 AWG", tables.Sizes()[0].String(), "a copy is handed out")
 }
+
+// The series both ways, and circular mils: NFPA 70 Chapter 9 Table 8.
+func TestSeriesOfSizes(t *testing.T) {
+	for _, list := range [][]tables.Size{tables.Sizes(), {tables.Must(tables.ParseSize("1.5 mm²")), tables.Must(tables.ParseSize("2.5 mm²")), tables.Must(tables.ParseSize("4 mm²"))}} {
+		for i, s := range list[1:] {
+			assert.Equal(t, s, list[i].Larger())
+			assert.Equal(t, list[i], s.Smaller())
+		}
+	}
+	for _, last := range []string{"2000", "1000 mm²"} {
+		assert.Zero(t, tables.Must(tables.ParseSize(last)).Larger())
+	}
+	assert.Zero(t, tables.Size(0).Larger())
+	for size, mils := range map[string]string{"18": "1620", "14": "4110", "4/0": "211600", "250": "250000", "2000": "2000000"} {
+		assert.Equal(t, mils, tables.Must(tables.ParseSize(size)).CircularMils().String(), size)
+	}
+	assert.True(t, tables.Must(tables.ParseSize("16 mm²")).CircularMils().IsZero())
+}
