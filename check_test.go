@@ -57,6 +57,8 @@ var checkCases = []checkCase{
 		map[string]string{"device_rating device.rating_amperes": "violation 175 A 300 A"}, "400 % to 100 A: 65 × 400 % = 260 A"},
 	{"hard start confirmed", necEditions, pump("50", 460, protection.InverseTimeBreaker), motorcircuit.Installed{HardStart: true, Device: motorcircuit.InstalledDevice{Rating: motor.Amps("250")}},
 		map[string]string{"device_rating device.rating_amperes": "note 260 A 250 A"}, "430.52(C)(1), exception: 260 A"},
+	{"hard start that is not needed", necEditions, pump("50", 460, protection.InverseTimeBreaker), motorcircuit.Installed{HardStart: true, Device: motorcircuit.InstalledDevice{Rating: motor.Amps("175")}},
+		map[string]string{"device_rating device.rating_amperes": "note 175 A 175 A"}, "430.52(C)(1): the ordinary rating stands by itself"},
 	{"10 A breaker since 2023", from2023, pump("2", 460, protection.InverseTimeBreaker), motorcircuit.Installed{Device: motorcircuit.InstalledDevice{Rating: motor.Amps("15")}},
 		map[string]string{"device_rating device.rating_amperes": "violation 10 A 15 A"}, "3.4 × 250 % = 8.5 A, 10 A by 240.6(A) of 2023; × 400 % = 13.6 A if it will not start"},
 	{"15 A before 2023", to2020, pump("2", 460, protection.InverseTimeBreaker), motorcircuit.Installed{Device: motorcircuit.InstalledDevice{Rating: motor.Amps("15")}},

@@ -64,6 +64,12 @@ func TestReverseByHand(t *testing.T) {
 	assert.Equal(t, "30 hp", h.Power.String())
 	assert.Equal(t, motorcircuit.SwitchHorsepower, h.Motor.Binds.Code)
 
+	in.Disconnect.Horsepower = motor.HP("1/2") // the smallest of the table
+	h, err = motorcircuit.Reverse(c, in)
+	require.NoError(t, err)
+	assert.Equal(t, "1/2 hp", h.Power.String())
+	assert.Equal(t, motorcircuit.SwitchHorsepower, h.Motor.Binds.Code)
+
 	in.Branch.Size = tables.Must(tables.ParseSize("1000"))
 	in.Disconnect, in.Bonding = motorcircuit.Switch{}, motorcircuit.BondingConductors{}
 	h, err = motorcircuit.Reverse(c, in)
@@ -85,6 +91,20 @@ func TestReverseLongestRun(t *testing.T) {
 	half, err := motorcircuit.Reverse(c, in)
 	require.NoError(t, err)
 	assert.InDelta(t, h.Run.Value.Float()/2, half.Run.Value.Float(), 0.2)
+}
+
+// Where nothing binds, the search ends where what may be given does: 1 hp of 1.8 A on
+// 1/0 AWG, of which 35 percent of 150 A is left (NFPA 70-2023 Table 310.15(C)(1)).
+func TestReverseWithoutABound(t *testing.T) {
+	c, in := installedRun()
+	c.Motor.Power, c.Motor.Nameplate = motor.HP("1"), motor.Nameplate{}
+	in.Branch.Size, in.Bonding, in.Raceway = sizeOf("1/0"), motorcircuit.BondingConductors{}, motorcircuit.InstalledRaceway{}
+	h, err := motorcircuit.Reverse(c, in)
+	require.NoError(t, err)
+	assert.Equal(t, "997", h.Conductors.Value.String())
+	assert.Contains(t, h.Conductors.Why, "nothing binds")
+	assert.Zero(t, h.Conductors.Binds.Code)
+	assert.Contains(t, h.Ambient.Why, "covers ambients up to")
 }
 
 // What cannot be told is told why.
