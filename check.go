@@ -21,7 +21,7 @@ func Check(c Circuit, in Installed) (Report, error) {
 	if err := c.Edition.Check(); err != nil {
 		return Report{}, errors.Join(err, c.Motor.Validate())
 	}
-	k := checker{judge: judge{edition: c.Edition}, in: in}
+	k := checker{judge: newJudge(c.Tag, c.Edition), in: in}
 	c = in.stands(c)
 	faults := in.validate(c)
 	if c.Motor.Voltage > MaxVolts {
@@ -33,7 +33,6 @@ func Check(c Circuit, in Installed) (Report, error) {
 		return Report{}, err
 	}
 	k.r = Result{Circuit: c, Demand: d}
-	k.report.Tag, k.report.Edition = c.Tag, c.Edition
 	for _, part := range []func() error{k.conductors, k.overload, k.device, k.switches, k.bonding, k.raceways, k.drop} {
 		if err := part(); err != nil {
 			return Report{}, err

@@ -12,7 +12,7 @@ import (
 // listed as not judged. Errors are as of [SizeFeeder], and [*tables.InputError] for
 // what is installed, with the path in [InstalledFeeder] after "installed.".
 func CheckFeeder(f Feeder, in InstalledFeeder) (Report, error) {
-	k := feederChecker{judge: judge{edition: f.Edition}, in: in}
+	k := feederChecker{judge: newJudge(f.Tag, f.Edition), in: in}
 	f = in.stands(f)
 	if err := f.Edition.Check(); err != nil {
 		return Report{}, err
@@ -26,7 +26,6 @@ func CheckFeeder(f Feeder, in InstalledFeeder) (Report, error) {
 	if err := k.g.plan(); err != nil {
 		return Report{}, err
 	}
-	k.report.Tag, k.report.Edition = f.Tag, f.Edition
 	for _, part := range []func() error{k.conductors, k.device, k.bonding, k.raceway, k.drop} {
 		if err := part(); err != nil {
 			return Report{}, err

@@ -43,7 +43,7 @@ func Compare(c Circuit, editions ...tables.Edition) (Comparison, error) {
 	if len(editions) < 2 {
 		return Comparison{}, &tables.InputError{Field: "editions", Value: itoa(len(editions)), Want: "two editions at the least"}
 	}
-	x := Comparison{Editions: editions}
+	x := Comparison{Editions: editions, Differences: []Difference{}}
 	var faults []error
 	for _, e := range editions {
 		c.Edition = e

@@ -159,7 +159,11 @@ func soundReport(t *testing.T, report motorcircuit.Report, err error) {
 		}
 		require.Equal(t, f.Margin.Value().Sign() >= 0, f.Severity == motorcircuit.Note, "%+v", f)
 		require.Equal(t, f.Required.Unit(), f.Found.Unit(), "%+v", f)
-		require.True(t, f.Margin.Value().Abs().Equal(f.Found.Value().Sub(f.Required.Value()).Abs()), "%+v", f)
+		margin := f.Found.Value().Sub(f.Required.Value())
+		if f.Ceiling {
+			margin = margin.Neg()
+		}
+		require.True(t, f.Margin.Value().Equal(margin), "%+v", f)
 	}
 	for _, n := range report.NotJudged {
 		require.True(t, n.Part != "" && n.Why != "")

@@ -19,6 +19,7 @@ type Finding struct {
 	Part     string            `json:"part"`              // what is judged, as a path in [Installed] or [InstalledFeeder]: "branch", "windings[1].overload.setting_amperes"
 	Severity Severity          `json:"severity"`          // a note tells of a requirement that is met
 	Required tables.Figure     `json:"required,omitzero"` // the least or the greatest that the code allows
+	Ceiling  bool              `json:"ceiling,omitzero"`  // required is the greatest that is allowed, otherwise the least
 	Found    tables.Figure     `json:"found,omitzero"`    // what stands
 	Margin   tables.Figure     `json:"margin,omitzero"`   // how far found is on the right side of required, in its unit; below zero it is on the wrong one
 	Cites    []tables.Citation `json:"cites"`             // the rules and tables behind it

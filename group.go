@@ -10,13 +10,13 @@ import (
 type Group struct {
 	Tag        string           `json:"tag,omitzero"`
 	Edition    tables.Edition   `json:"edition"`
-	Circuits   []Circuit        `json:"circuits"`                    // the motors; their device is the group's
-	Other      tables.Current   `json:"other_load_amperes,omitzero"` // other load on the circuit
-	Device     tables.Device    `json:"device,omitzero"`             // zero takes a time-delay fuse
-	Wiring     conductor.Wiring `json:"wiring,omitzero"`             // how the branch circuit is run
-	Listed     bool             `json:"listed,omitzero"`             // controllers and overload devices listed for group installation (NEC 430.53(C))
-	Machine    bool             `json:"machine,omitzero"`            // machine tool or woodworking machine in robust enclosures (CEC Rule 28-206(c))
-	MarkedMost tables.Current   `json:"marked_maximum,omitzero"`     // device marked on the control equipment of the smallest motor (CEC Rule 28-206(b))
+	Circuits   []Circuit        `json:"circuits"`                        // the motors; their device is the group's
+	Other      tables.Current   `json:"other_load_amperes,omitzero"`     // other load on the circuit
+	Device     tables.Device    `json:"device,omitzero"`                 // zero takes a time-delay fuse
+	Wiring     conductor.Wiring `json:"wiring,omitzero"`                 // how the branch circuit is run
+	Listed     bool             `json:"listed,omitzero"`                 // controllers and overload devices listed for group installation (NEC 430.53(C))
+	Machine    bool             `json:"machine,omitzero"`                // machine tool or woodworking machine in robust enclosures (CEC Rule 28-206(c))
+	MarkedMost tables.Current   `json:"marked_maximum_amperes,omitzero"` // device marked on the control equipment of the smallest motor (CEC Rule 28-206(b))
 }
 
 // A GroupResult is a group sized by [SizeGroup].

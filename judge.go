@@ -15,6 +15,10 @@ type judge struct {
 	unfit    *tables.InputError // why the wiring's insulation may not be used where it is
 }
 
+func newJudge(tag string, e tables.Edition) judge {
+	return judge{edition: e, report: Report{Tag: tag, Edition: e, Findings: []Finding{}}}
+}
+
 // A claim is one thing to judge.
 type claim struct {
 	code  FindingCode
@@ -77,6 +81,7 @@ func (j *judge) atMost(c claim, most ceiling) {
 		required = most.start
 	}
 	f := j.finding(c, required, tables.DifferenceOf("margin", 0, nil, required, c.found))
+	f.Ceiling = true
 	switch {
 	case f.Margin.Cmp(tables.Figure{}) >= 0:
 		f.Text = worded(c.found, "is within", required, f.Margin)
