@@ -245,7 +245,7 @@ func (r *Result) dropCautions() (list []tables.Caution) {
 		list = append(list, tables.Caution{Text: "fault duty is for bolted faults: compare the withstand time with the device's own clearing curve, and its interrupting rating with the fault current at the source and what motors add"})
 	}
 	if r.Branch.Size.Cmp(r.BySize) > 0 && r.BySize != 0 {
-		list = append(list, tables.Caution{Text: "the branch-circuit conductors are larger than the " + r.BySize.String() + " that ampacity asks for, on account of voltage drop or a least size"})
+		list = append(list, tables.Caution{Text: "the branch-circuit conductors are larger than the " + r.BySize.String() + " that ampacity asks for: the bonding conductor grows with them"})
 	}
 	return list
 }
