@@ -33,6 +33,9 @@ func accepts(t *testing.T, r motorcircuit.Result) {
 
 // What Size designs, Check accepts: the whole grid.
 func TestCheckAcceptsTheGrid(t *testing.T) {
+	if testing.Short() {
+		t.Skip("the random designs stand for it")
+	}
 	count := 0
 	grid(t, func(_ motorcircuit.Circuit, results []motorcircuit.Result) {
 		for _, r := range results {
