@@ -26,7 +26,7 @@ func CheckFeeder(f Feeder, in InstalledFeeder) (Report, error) {
 	if err := k.g.plan(); err != nil {
 		return Report{}, err
 	}
-	for _, part := range []func() error{k.conductors, k.device, k.bonding, k.raceway, k.drop} {
+	for _, part := range []func() error{k.conductors, k.device, k.disconnect, k.bonding, k.raceway, k.drop} {
 		if err := part(); err != nil {
 			return Report{}, err
 		}
@@ -53,7 +53,7 @@ func (in *InstalledFeeder) stands(f Feeder) Feeder {
 }
 
 // conductors judges the feeder's conductors. Where they are not given, or may not
-// be used, those that SizeFeeder would choose stand in for the rest.
+// be used, those that SizeFeeder would choose stand in for the rest, if any would.
 func (k *feederChecker) conductors() (err error) {
 	r, w := &k.r, k.r.Feeder.Wiring
 	r.ampacity(&k.g)
@@ -62,14 +62,17 @@ func (k *feederChecker) conductors() (err error) {
 	if r.Conductors, err = k.run("conductors", w, k.in.Conductors, k.load, nil); err != nil || !r.Conductors.IsZero() {
 		return err
 	}
-	r.Conductors, err = w.Select(k.edition, k.load)
+	r.Conductors, err = chosen(w.Select(k.edition, k.load))
 	return err
 }
 
-// device judges the feeder's short-circuit device and the disconnecting means of
-// the group.
+// device judges the feeder's short-circuit device.
 func (k *feederChecker) device() error {
 	r, in := &k.r, k.in.Device
+	if r.Conductors.IsZero() && k.edition.Code() == tables.CEC { // whose ceilings may go by them
+		k.skip("device", noConductors)
+		return nil
+	}
 	if err := r.device(&k.g); err != nil {
 		return err
 	}
@@ -80,8 +83,13 @@ func (k *feederChecker) device() error {
 	}
 	k.atMost(claim{code: InstantaneousSetting, part: "device.instantaneous_amperes", found: in.Instantaneous.Figure("instantaneous-trip setting")}, ceiling{})
 	k.interrupts(in.Interrupting, r.Feeder.Fault)
-	r.Disconnect = k.g.disconnect()
-	x := &r.Disconnect
+	return nil
+}
+
+// disconnect judges the disconnecting means of the group.
+func (k *feederChecker) disconnect() error {
+	k.r.Disconnect = k.g.disconnect()
+	x := &k.r.Disconnect
 	k.rated("disconnecting_means", k.in.Disconnect, x.Amperes, x.LockedRotor, x.Horsepower, x.Cite)
 	return nil
 }
@@ -89,6 +97,10 @@ func (k *feederChecker) device() error {
 // bonding judges the bonding conductor of the feeder.
 func (k *feederChecker) bonding() error {
 	r, w := &k.r, k.r.Feeder.Wiring
+	if r.Conductors.IsZero() {
+		k.skip("bonding", noConductors)
+		return nil
+	}
 	base, err := bySize(k.edition, w, &r.Conductors, k.load)
 	if err != nil {
 		return err
@@ -116,8 +128,8 @@ func (k *feederChecker) raceway() error {
 // drop judges the voltage drop along the feeder.
 func (k *feederChecker) drop() (err error) {
 	r, f := &k.r, &k.r.Feeder
-	if f.Wiring.Length.IsZero() {
-		k.skip("length", "not given")
+	if f.Wiring.Length.IsZero() || r.Conductors.IsZero() {
+		k.skip("length", noLength)
 		return nil
 	}
 	r.Drop.Limit = dropLimit(k.edition)

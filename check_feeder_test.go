@@ -211,3 +211,19 @@ func TestCheckFeederBonding(t *testing.T) {
 		assert.Equal(t, fill, found(report, motorcircuit.RacewayFilled)[0].Found.String())
 	}
 }
+
+// A load that no conductors carry in as many sets as there may be: what does not go
+// by them is judged all the same. 20 motors of 500 hp at 460 V: 590 × 20.25 A.
+func TestCheckFeederThatNothingCarries(t *testing.T) {
+	for _, e := range everyone {
+		f := feeder(e)
+		for i := range 20 {
+			f.Circuits = append(f.Circuits, with(cage(fmt.Sprint("m", i), "500", 460), func(fc *motorcircuit.FeederCircuit) { fc.Circuit.Edition = e }))
+		}
+		report := checkedFeeder(t, f, motorcircuit.InstalledFeeder{Bonding: motorcircuit.BondingConductors{Size: sizeOf("4/0")}, Disconnect: motorcircuit.Switch{Amperes: motor.Amps("4000")}, Length: conductor.Metres("20")})
+		assert.Equal(t, motorcircuit.SwitchAmperes, report.Violations()[0].Code)
+		assert.Empty(t, found(report, motorcircuit.BondingSize))
+		_, err := motorcircuit.SizeFeeder(f)
+		require.ErrorAs(t, err, new(*tables.NoSizeError))
+	}
+}

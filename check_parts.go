@@ -122,7 +122,7 @@ func (k *judge) rated(part string, in Switch, amperes, rotor tables.Figure, hors
 // bonding judges the bonding conductor by the device that stands.
 func (k *checker) bonding() error {
 	if k.r.Branch.IsZero() {
-		k.skip("bonding", "the conductors that it goes with cannot be judged or chosen")
+		k.skip("bonding", noConductors)
 		return nil
 	}
 	x := &k.r.ShortCircuit
@@ -190,7 +190,7 @@ func (k *judge) filled(part string, kind tables.Raceway, in InstalledRaceway, pu
 		k.skip(part, "not given")
 		return nil
 	case pulls[0].Size == 0 || pulls[1].Size == 0:
-		k.skip(part, "the conductors in it cannot be judged or chosen")
+		k.skip(part, noConductors)
 		return nil
 	}
 	for _, other := range in.Others {
@@ -219,7 +219,7 @@ func (k *judge) filled(part string, kind tables.Raceway, in InstalledRaceway, pu
 func (k *checker) drop() error {
 	c := k.r.Circuit
 	if c.Wiring.Length.IsZero() || k.r.Branch.IsZero() {
-		k.skip("length", "not given, or of conductors that cannot be judged or chosen")
+		k.skip("length", noLength)
 		return nil
 	}
 	err := k.r.drops(c)

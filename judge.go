@@ -42,6 +42,12 @@ func (j *judge) missing(c claim, required tables.Figure) bool {
 	return true
 }
 
+// Why what depends on the conductors was not judged.
+const (
+	noConductors = "the conductors that it goes with cannot be judged or chosen"
+	noLength     = "not given, or of conductors that cannot be judged or chosen"
+)
+
 func (j *judge) skip(part, why string) {
 	j.report.NotJudged = append(j.report.NotJudged, NotJudged{part, why})
 }
