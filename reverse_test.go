@@ -118,6 +118,25 @@ func TestReverseWithoutAnAnswer(t *testing.T) {
 	assert.Contains(t, h.Motor.Why, "nameplate")
 	assert.Contains(t, h.Conductors.Why, "not in a raceway")
 
+	for why, change := range map[string]func(*motor.Motor){
+		"goes by its nameplate": func(m *motor.Motor) { m.Kind, m.Power = motor.Hermetic, tables.Power{} },
+		"another drive":         func(m *motor.Motor) { m.Starting, m.Nameplate.DriveInput = motor.Drive, motor.Amps("36") },
+		"rectifier": func(m *motor.Motor) {
+			m.Kind, m.Power, m.Voltage, m.Rectifier, m.Nameplate.RectifierInput = motor.DirectCurrent, motor.HP("10"), 240, motor.HalfWave, motor.Amps("44")
+		},
+		"several speeds": func(m *motor.Motor) {
+			m.Nameplate = motor.Nameplate{Windings: []motor.Winding{{Amperes: motor.Amps("33")}, {Amperes: motor.Amps("20")}}}
+		},
+	} {
+		c, in := installedRun()
+		change(&c.Motor)
+		h, err := motorcircuit.Reverse(c, in)
+		require.NoError(t, err, why)
+		assert.Contains(t, h.Motor.Why, why)
+		assert.True(t, h.Motor.Value.IsZero() && h.Power.IsZero())
+		assert.Contains(t, h.String(), "-  largest motor: "+h.Motor.Why[:20])
+	}
+
 	c, in = installedRun()
 	in.Overload.Setting = motor.Amps("90") // stands over every motor that the conductors carry
 	h, err = motorcircuit.Reverse(c, in)
