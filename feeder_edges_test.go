@@ -4,6 +4,7 @@ import (
 	"testing"
 
 	"github.com/stretchr/testify/assert"
+	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
 	"example.org/motorcircuit/internal/testkit"
@@ -273,4 +274,12 @@ func TestFeederText(t *testing.T) {
 	assert.Contains(t, text, "the device of only governs")
 	var none motorcircuit.FeederResult
 	assert.NotPanics(t, func() { _ = none.String() }, "the zero result prints")
+}
+
+// Other loads may be as large as a feeder could carry, and not larger: 100000 A.
+func TestFeederLargestLoad(t *testing.T) {
+	f := feeder(tables.NEC2023, cage("a", "5", 460))
+	f.Other, f.Continuous = motor.Amps("100000"), motor.Amps("100000")
+	_, err := motorcircuit.SizeFeeder(f)
+	require.ErrorAs(t, err, new(*tables.NoSizeError), "it stands as input, and no conductors carry it")
 }

@@ -185,3 +185,30 @@ func TestConcurrentUse(t *testing.T) {
 	}
 	assert.Contains(t, first, "CV-204")
 }
+
+// The ends of what may be given are sized: 1000 V, by the nameplate of a torque motor.
+func TestSizeAtTheEnds(t *testing.T) {
+	for _, e := range tables.Editions() {
+		r, err := motorcircuit.Size(motorcircuit.Circuit{Edition: e, Motor: motor.Motor{Kind: motor.Torque, Voltage: motorcircuit.MaxVolts, Nameplate: motor.Nameplate{Amperes: motor.Amps("12")}}})
+		require.NoError(t, err)
+		assert.Equal(t, "15 A", r.Demand.Branch.String(), "12 × 125 %")
+	}
+}
+
+// Conductors that share the raceway count for every run of a circuit: 9 are taken at 70
+// percent by Table 310.15(C)(1) of NFPA 70 and Table 5C of CSA C22.1.
+func TestSizeCountsForEveryRun(t *testing.T) {
+	for _, e := range tables.Editions() {
+		c := motorcircuit.Circuit{Edition: e, Motor: motor.Motor{Kind: motor.WoundRotor, Power: motor.HP("30"), Voltage: 460, Resistor: tables.LightStarting,
+			Nameplate: motor.Nameplate{Secondary: motor.Amps("65")}}, Wiring: conductor.Wiring{Conductors: 9, Termination: 75}}
+		r, err := motorcircuit.Size(c)
+		require.NoError(t, err)
+		runs := []conductor.Selection{r.Branch, r.Secondary, r.Resistor}
+		if e.Code() == tables.CEC {
+			runs = append(runs, r.MotorSupply)
+		}
+		for _, s := range runs {
+			assert.Contains(t, []string{"70 %", "0.7"}, s.Together.String(), e)
+		}
+	}
+}

@@ -177,3 +177,35 @@ func TestAmpacityAtLeast(t *testing.T) {
 	assert.True(t, table.Ampacity(0, 75).IsZero(), "no size")
 	assert.True(t, table.Ampacity(all[7], 80).IsZero(), "no such column")
 }
+
+// Columns and ends of a search: NFPA 70-2023 Table 310.16, copper.
+func TestAmpacityEnds(t *testing.T) {
+	table, err := tables.NEC2023.Ampacities(tables.InRaceway, tables.Copper)
+	require.NoError(t, err)
+	for celsius, want := range map[int]int{59: 0, 60: 60, 74: 60, 75: 75, 89: 75, 90: 90, 250: 90} {
+		assert.Equal(t, want, table.Column(celsius), celsius)
+	}
+	size := func(s string) tables.Size { return tables.Must(tables.ParseSize(s)) }
+	assert.Equal(t, size("14"), table.AtLeast(amps("15"), 60, size("14"), size("2000")), "the first column")
+	assert.Equal(t, size("6"), table.AtLeast(amps("65"), 75, size("14"), size("6")), "just the largest that may be")
+	assert.Zero(t, table.AtLeast(amps("65.01"), 75, size("14"), size("6")))
+	assert.Zero(t, table.AtLeast(amps("1"), 70, size("14"), size("6")), "no such column")
+	last := tables.Sizes()[len(tables.Sizes())-1]
+	assert.False(t, table.Ampacity(last, 75).IsZero())
+	assert.True(t, table.Ampacity(last+1, 75).IsZero())
+	assert.Zero(t, tables.AmpacityTable{}.Column(75))
+}
+
+// The first value that is none of an enumeration.
+func TestFirstUnknown(t *testing.T) {
+	for _, e := range tables.Editions() {
+		_, err := e.Ampacities(tables.InFreeAir+1, tables.Copper)
+		assert.Equal(t, "wiring.run", tables.FieldOf(err))
+		_, err = e.Ampacities(tables.InRaceway, tables.Aluminum+1)
+		assert.Equal(t, "wiring.material", tables.FieldOf(err))
+		_, _, err = e.BondingSize(tables.Aluminum+1, amps("15"))
+		assert.Equal(t, "wiring.material", tables.FieldOf(err))
+	}
+	assert.Empty(t, (tables.InstantaneousBreaker + 1).Name())
+	assert.False(t, (tables.InstantaneousBreaker + 1).IsValid())
+}

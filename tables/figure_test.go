@@ -69,6 +69,8 @@ func TestLargestAndSmallest(t *testing.T) {
 	g := tables.SmallestOf("limit", tables.NEC2023, &ruleA, amps("65"), none, amps("40"))
 	assert.Equal(t, "40 A", g.String())
 	assert.Equal(t, "the smallest of current 65 A, current 40 A", g.How())
+	assert.Equal(t, "65 A", tables.LargestOf("base", tables.NEC2023, &ruleA, amps("65"), amps("40"), amps("50")).String(), "the first")
+	assert.Equal(t, "40 A", tables.SmallestOf("limit", tables.NEC2023, &ruleA, amps("40"), amps("65"), amps("50")).String(), "the first")
 	assert.True(t, tables.LargestOf("none", tables.NEC2023, &ruleA, none, none).IsZero())
 	assert.True(t, tables.SmallestOf("none", tables.NEC2023, &ruleA).IsZero())
 	assert.Equal(t, "0 A", tables.SmallestOf("zero is a number", tables.NEC2023, &ruleA, amps("1"), amps("0")).String())
