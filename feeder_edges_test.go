@@ -7,6 +7,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
+	"example.org/motorcircuit/conductor"
 	"example.org/motorcircuit/internal/testkit"
 	"example.org/motorcircuit/motor"
 	"example.org/motorcircuit/protection"
@@ -282,4 +283,47 @@ func TestFeederLargestLoad(t *testing.T) {
 	f.Other, f.Continuous = motor.Amps("100000"), motor.Amps("100000")
 	_, err := motorcircuit.SizeFeeder(f)
 	require.ErrorAs(t, err, new(*tables.NoSizeError), "it stands as input, and no conductors carry it")
+}
+
+// A neutral is pulled beside three lines and does not count as carrying current (NEC
+// 310.15(E), CEC Rule 4-004(3): common practice for a balanced system): 30 hp at 208 V
+// and a motor of 115 V to line A.
+func TestFeederNeutral(t *testing.T) {
+	for _, e := range everyone {
+		f := feeder(e, cage("a", "30", 208), single("b", "1", 115, "A"))
+		f.Wiring.Raceway = conductor.EMT
+		r := sized(t, f)
+		assert.Equal(t, 4, r.Count)
+		assert.True(t, r.Conductors.Together.IsOne(), "%v", r.Conductors.Together)
+		assert.Equal(t, 5, r.Raceway.Conductors)
+		r = sized(t, feeder(e, cage("a", "30", 208), single("b", "2", 208, "AB")))
+		assert.Equal(t, 3, r.Count, "no neutral between lines")
+	}
+}
+
+// One disconnecting means serves the set of most load, whichever comes first: NEC
+// 430.110(C)(2), CEC Rule 28-602(2), 115 percent of 40 A and of 14 A.
+func TestFeederDisconnectOfInterlocks(t *testing.T) {
+	lock := func(fc *motorcircuit.FeederCircuit) { fc.Interlock = "x" }
+	for _, e := range everyone {
+		for _, order := range [][]string{{"10", "30"}, {"30", "10"}} {
+			r := sized(t, feeder(e, cage("a", order[0], 460, lock), cage("b", order[1], 460, lock)))
+			assert.Equal(t, "46 A", r.Disconnect.Amperes.String())
+			assert.Equal(t, "30 hp", r.Disconnect.Horsepower.String())
+		}
+	}
+}
+
+// CEC Rule 28-714: the largest locked-rotor current of the compressors, and the
+// currents of the rest.
+func TestFeederLargestCompressor(t *testing.T) {
+	marked := func(rotor string) change {
+		return func(fc *motorcircuit.FeederCircuit) { fc.Circuit.Motor.Nameplate.LockedRotor = motor.Amps(rotor) }
+	}
+	for _, e := range cecEditions {
+		for _, order := range [][2]string{{"150", "240"}, {"240", "150"}} {
+			r := sized(t, feeder(e, with(compressor("a", "30", ""), marked(order[0])), with(compressor("b", "30", ""), marked(order[1])), cage("c", "10", 460)))
+			assert.Equal(t, "284 A", r.Disconnect.LockedRotor.String(), "240 + 30 + 14")
+		}
+	}
 }

@@ -206,6 +206,18 @@ func TestFirstUnknown(t *testing.T) {
 		_, _, err = e.BondingSize(tables.Aluminum+1, amps("15"))
 		assert.Equal(t, "wiring.material", tables.FieldOf(err))
 	}
+	for _, e := range []tables.Edition{tables.NEC2023, tables.CEC2024} {
+		_, err := e.FullLoadCurrent(tables.DirectCurrentTable+1, tables.Must(tables.ParseHP("10")), 240)
+		assert.Equal(t, "motor.kind", tables.FieldOf(err))
+		_, err = e.DutyPercent(tables.Varying+1, 60)
+		assert.Equal(t, "motor.duty.kind", tables.FieldOf(err))
+		_, err = e.Impedance(tables.Aluminum+1, tables.Sizes()[10], tables.EMT)
+		assert.Error(t, err)
+		_, err = e.DCResistance(tables.Aluminum+1, tables.Sizes()[10])
+		assert.Error(t, err)
+	}
+	assert.Empty(t, (tables.DirectCurrentTable + 1).String())
+	assert.Empty(t, (tables.Computed + 1).String())
 	assert.Empty(t, (tables.InstantaneousBreaker + 1).Name())
 	assert.False(t, (tables.InstantaneousBreaker + 1).IsValid())
 }
