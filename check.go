@@ -113,7 +113,7 @@ func (k *checker) overload() (err error) {
 	}
 	most := ceiling{limit: o.Limit, start: o.StartLimit, confirmed: k.in.HardStart, over: Violation}
 	if in.Share {
-		most = ceiling{limit: o.Share, over: Violation}
+		most.limit, most.start = o.Share, k.shareOf(o)
 	}
 	k.settings("overload", in, most)
 	for i, w := range o.Windings {
@@ -125,6 +125,16 @@ func (k *checker) overload() (err error) {
 	}
 	return nil
 }
+
+// shareOf returns the share of the second step, absent where there is none.
+func (k *checker) shareOf(o *protection.Overload) tables.Figure {
+	if o.Share.IsZero() || o.StartLimit.IsZero() {
+		return tables.Figure{}
+	}
+	return tables.ProductOf(o.Share.Name()+" if the motor will not start", k.edition, &necShareStart, o.StartLimit, o.Share.Operands()[1])
+}
+
+var necShareStart = tables.Rule{Ref: "430.32(C)", Note: "device that does not carry the whole motor current"}
 
 // settings judges the setting and the heater of overload protection, of which one
 // is enough.

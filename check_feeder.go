@@ -112,7 +112,7 @@ func (k *feederChecker) bonding() error {
 	if k.in.Bonding.Size != 0 {
 		run.Material = k.in.Bonding.Material
 	}
-	r.Bonding, err = conductor.SelectBonding(k.edition, k.counted(k.in.Device.Rating, r.Rating, r.StartRating), run, base)
+	r.Bonding, err = conductor.SelectBonding(k.edition, k.counted(k.in.Device.Rating, r.Rating, r.Limit, r.StartLimit, r.StartRating), run, base)
 	return k.bonded(k.in.Bonding, &r.Bonding, err)
 }
 

@@ -32,6 +32,9 @@ func (k *checker) device() (err error) {
 	case k.misplaced:
 		k.skip("device.rating_amperes", "a device of its kind may not protect the motor")
 	case x.Device == protection.InstantaneousBreaker:
+		if !in.Rating.IsZero() {
+			k.skip(rating.part, "of an instantaneous-trip breaker the setting is limited")
+		}
 		k.atMost(setting, most)
 	default:
 		most.limit, most.start = greater(x.Limit, x.Rating), greater(x.StartLimit, x.StartRating)
@@ -66,7 +69,10 @@ func (k *checker) carries(rating claim) {
 		k.atLeast(rating, k.r.ShortCircuit.Limit, Violation)
 	default:
 		current := d.Design
-		if !d.Input.IsZero() {
+		switch {
+		case k.r.Circuit.Motor.Bypass: // the line feeds drive or motor
+			current = greater(d.Input, d.Design)
+		case !d.Input.IsZero():
 			current = d.Input
 		}
 		rule := &carriesLoad
@@ -128,7 +134,7 @@ func (k *checker) bonding() error {
 	x := &k.r.ShortCircuit
 	rating := x.Rating
 	if !rating.IsZero() && !k.misplaced { // an instantaneous trip has none
-		rating = k.counted(k.in.Device.Rating, rating, x.StartRating)
+		rating = k.counted(k.in.Device.Rating, rating, x.Limit, x.StartLimit, x.StartRating)
 	}
 	material := k.r.Branch.Material
 	if k.in.Bonding.Size != 0 {
@@ -139,13 +145,16 @@ func (k *checker) bonding() error {
 }
 
 // counted returns the rating by which the bonding conductor is judged: that of the
-// device that stands, if it may; otherwise the ordinary one.
-func (k *judge) counted(given tables.Current, rating, start tables.Figure) tables.Figure {
-	in := given.Figure("rating of the device")
+// device that stands, if it may by any of the ceilings; otherwise the ordinary one.
+func (k *judge) counted(given tables.Current, rating tables.Figure, ceilings ...tables.Figure) tables.Figure {
+	in, most := given.Figure("rating of the device"), rating
+	for _, c := range ceilings {
+		most = greater(most, c)
+	}
 	switch {
 	case in.IsZero():
 		return rating
-	case in.Cmp(greater(rating, start)) > 0:
+	case in.Cmp(most) > 0:
 		k.cautions.add(tables.Caution{Text: "the bonding conductor is judged by a device of " + rating.String() + ", since the one that is installed, of " + in.String() + ", may not stand"})
 		return rating
 	}

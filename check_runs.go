@@ -85,7 +85,7 @@ func (k *judge) run(part string, w conductor.Wiring, given Conductors, load cond
 		why = "not given"
 	case unfit != nil:
 		k.tellUnfit(part, unfit)
-		why = "its insulation may not be used where it is"
+		why = unfitHere
 	}
 	if why != "" {
 		k.skip(part, why)
@@ -97,6 +97,11 @@ func (k *judge) run(part string, w conductor.Wiring, given Conductors, load cond
 		s, err = w.RateMotorSupply(k.edition, load, *end, given.Size, given.Sets)
 	} else {
 		s, err = w.Rate(k.edition, load, given.Size, given.Sets)
+	}
+	if cold := coldIn(end, err); cold != nil {
+		k.tellUnfit(part, cold)
+		k.skip(part, unfitHere)
+		return conductor.Selection{}, nil
 	}
 	if err != nil {
 		return conductor.Selection{}, within("installed."+part, err)
@@ -137,9 +142,34 @@ func (k *judge) unfitIn(w conductor.Wiring) *tables.InputError {
 		if errors.As(fault, &input) && input.Field == "wiring.insulation" && !input.Cite.IsZero() {
 			return input
 		}
+		if cold := tooCold(w.Insulation, fault); cold != nil {
+			return cold
+		}
 	}
 	return nil
 }
+
+// tooCold words an error of an ambient that an insulation is not allowed in; nil is
+// another error.
+func tooCold(insulation string, err error) *tables.InputError {
+	var missing *tables.NotTabulatedError
+	if !errors.As(err, &missing) || missing.Field != "wiring.ambient" {
+		return nil
+	}
+	return &tables.InputError{Field: "wiring.insulation", Value: insulation, Want: "a type that may be used at " + missing.Col, Cite: missing.Table}
+}
+
+// coldIn is [tooCold] of motor supply conductors whose insulation is given by its
+// rating.
+func coldIn(end *conductor.MotorEnd, err error) *tables.InputError {
+	if end == nil || end.Insulated.IsZero() {
+		return nil
+	}
+	return tooCold("rated "+end.Insulated.String(), err)
+}
+
+// unfitHere is why conductors of such an insulation were not judged.
+const unfitHere = "its insulation may not be used where it is"
 
 func (k *judge) tellUnfit(part string, why *tables.InputError) {
 	k.say(ConductorInsulation, part+".insulation", Violation, "the insulation is "+why.Value+", and the code asks for "+why.Want, why.Cite)

@@ -85,8 +85,14 @@ var steps = []step{
 		return !r.Overload.Limit.IsZero()
 	}},
 	{motorcircuit.OverloadSetting, "overload.setting_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
-		in.Overload.Setting, in.Overload.Share = more(r.Overload.Share), true
-		return !r.Overload.Share.IsZero()
+		o := &r.Overload
+		if o.Share.IsZero() {
+			return false
+		}
+		percent := o.Share.Operands()[1].Value()
+		most := last(o.Limit, o.StartLimit).Value().Mul(percent).Div(decimal.New(100, 0))
+		in.Overload.Setting, in.Overload.Share = motor.Amps(most.Add(decimal.New(1, -2)).String()), true
+		return true
 	}},
 	{motorcircuit.OverloadSetting, "windings[1].overload.setting_amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		if len(in.Windings) < 2 {

@@ -1,6 +1,7 @@
 package motorcircuit
 
 import (
+	"cmp"
 	"errors"
 
 	"example.org/motorcircuit/conductor"
@@ -77,7 +78,7 @@ func (x *inspection) conductors(part string, in Conductors, rated bool) {
 
 func (x *inspection) size(part string, size tables.Size) {
 	if size != 0 && (!size.IsValid() || size.IsMetric()) {
-		x.add(part+".size", size.String(), "an AWG or kcmil size")
+		x.add(part+".size", cmp.Or(size.String(), itoa(int(size))), "an AWG or kcmil size")
 	}
 }
 
@@ -137,6 +138,9 @@ func (x *inspection) bonding(in BondingConductors) {
 func (x *inspection) raceway(part string, in InstalledRaceway, kind tables.Raceway) {
 	if in.Trade != "" && kind == 0 {
 		x.add(part+".type", "", "the type of the raceway whose trade size is given")
+	}
+	if most := 20; len(in.Trade) > most {
+		x.add(part+".trade_size", in.Trade[:most]+"...", "a trade size in inches or by metric designator")
 	}
 	for i, p := range in.Others {
 		at := part + ".others[" + itoa(i) + "]"

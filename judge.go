@@ -82,9 +82,10 @@ func (j *judge) atMost(c claim, most ceiling) {
 		return
 	}
 	required := most.limit
-	within := !most.start.IsZero() && c.found.Cmp(most.start) <= 0 && c.found.Cmp(most.limit) > 0
-	if within && most.confirmed {
-		required = most.start
+	over := c.found.Cmp(most.limit) > 0
+	within := over && c.found.Cmp(most.start) <= 0
+	if over && most.confirmed {
+		required = greater(most.limit, most.start)
 	}
 	f := j.finding(c, required, tables.DifferenceOf("margin", 0, nil, required, c.found))
 	f.Ceiling = true

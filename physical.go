@@ -104,7 +104,7 @@ func bondingBase(e tables.Edition, w conductor.Wiring, s conductor.Selection, lo
 	if e != tables.NEC2017 || s.Ambient.IsOne() && s.Together.IsOne() {
 		return bySize, nil
 	}
-	w.Ambient, w.Conductors, w.Rooftop, w.Least, w.Sets = tables.Temperature{}, 0, false, 0, s.Sets
+	w.Ambient, w.Conductors, w.Rooftop, w.Least, w.Sets, w.Insulation = tables.Temperature{}, 0, false, 0, s.Sets, s.Insulation
 	load.Count = 1
 	s, err := chosen(w.Select(e, load)) // none: nothing is larger than it need be
 	return s.Size, err

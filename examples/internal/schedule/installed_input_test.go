@@ -73,7 +73,6 @@ func TestInstalledBadCells(t *testing.T) {
 		{cells("motor_supply_sets", "-1"), `motor_supply_sets "-1": want 1 to 12`},
 		{cells("motor_supply_insulation_c", "90"), `motor_supply_insulation_c "90 °C": want none but for motor supply conductors under the CEC`},
 		{cells("motor_supply_insulation_c", "300", "code", "CEC-2024", "volts", "575"), `motor_supply_insulation_c "300 °C": want 60 to 250 °C`},
-		{cells("motor_supply_insulation_c", "60", "motor_supply_size", "14", "ambient_c", "65", "insulation", "RW90", "code", "CEC-2024", "volts", "575"), `ambient_c: CSA C22.1:24 Table 5A has no`},
 		{cells("secondary_size", "16 mm²"), `secondary_size "16 mm²": want an AWG`},
 		{cells("resistor_size", "16 mm²"), `resistor_size "16 mm²": want an AWG`},
 		{cells("overload_setting_a", "-1"), `overload_setting_a "-1": want a plain decimal in amperes`},

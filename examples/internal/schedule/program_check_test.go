@@ -88,7 +88,7 @@ func TestCheckSampleByHand(t *testing.T) {
 		{"WH-13", "instantaneous_setting", "device.instantaneous_amperes", "violation"},           // 250 A; 16.7 A × 8 = 133.6 A, and × 13 = 217.1 A (430.52(C)(3))
 		{"WH-14", "raceway_jam", "raceway", "caution"},                                            // 0.622 in over 0.216 in is 2.88 (Chapter 9 Tables 1, 4, 5)
 		{"LP-13", "overload_setting", "overload.setting_amperes", "caution"},                      // 48 A; 39.5 A × 1.15 = 45.425 A, to × 1.3 = 51.35 A if it will not start (430.32)
-		{"WH-15", "overload_setting", "overload.setting_amperes", "violation"},                    // 68 A; half of 98 A × 1.25 is 61.25 A (430.32(A)(1), part winding)
+		{"WH-15", "overload_setting", "overload.setting_amperes", "violation"},                    // 69 A; half of 98 A × 1.4 is 68.6 A (430.32(C), part winding)
 		{"LP-14", "drop_running", "length", "violation"},                                          // 656 ft × 2 Ω/1000 ft × 0.83 × 1.732 × 11 A = 21 V, 4.5 % and the reactance; 3 % is the owner's
 		{"NB-15", "raceway_fill", "raceway", "violation"},                                         // 142 mm²; 40 % of 330 mm² (CEC Tables 6, 8, 9)
 		{"NB-14", "", "", ""}, // the bad row
