@@ -105,6 +105,10 @@ var specialCases = []checkCase{
 	{"unfused switch of too little power", necEditions, pump("50", 460, 0), motorcircuit.Installed{Disconnect: motorcircuit.Switch{Amperes: motor.Amps("60"), Horsepower: motor.HP("40"), Unfused: true}},
 		map[string]string{"switch_amperes disconnecting_means.amperes": "violation 74.75 A 60 A", "switch_horsepower disconnecting_means.horsepower": "violation 50 hp 40 hp"}, "430.110(A) and its exception"},
 
+	{"instantaneous trip of a marked breaker", cecEditions, pump("50", 460, protection.InverseTimeBreaker, func(c *motorcircuit.Circuit) { c.Motor.Nameplate.MaximumDevice = motor.Amps("100") }),
+		motorcircuit.Installed{Device: motorcircuit.InstalledDevice{Rating: motor.Amps("100"), Instantaneous: motor.Amps("500")}},
+		map[string]string{"device_rating device.rating_amperes": "note 100 A 100 A", "instantaneous_setting device.instantaneous_amperes": "note 845 A 500 A"}, "Rule 28-202 marks a rating, and 28-210 holds the setting: 65 × 1300 %"},
+
 	{"bonding, CEC", cecEditions, pump("50", 460, protection.InverseTimeBreaker), motorcircuit.Installed{Branch: wire("4"), Device: rated("150"), Bonding: motorcircuit.BondingConductors{Size: sizeOf("8")}},
 		map[string]string{"bonding_size bonding": "violation 13.3 mm² 8.367 mm²"}, "Rule 10-616, Table 16: 6 AWG to 200 A"},
 	{"bonding by ampacity, CEC", cecEditions, pump("50", 460, protection.InverseTimeBreaker), motorcircuit.Installed{Branch: wire("250"), Device: rated("150"), Bonding: motorcircuit.BondingConductors{Size: sizeOf("6")}},

@@ -59,7 +59,7 @@ type CircuitError struct {
 }
 
 func (e *CircuitError) Error() string {
-	return fmt.Sprintf("circuits[%d] %q: %v", e.Index, e.Tag, e.Err)
+	return fmt.Sprintf("circuits[%d] %.40q: %v", e.Index, e.Tag, e.Err)
 }
 
 // Unwrap returns the error of the circuit.

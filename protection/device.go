@@ -71,7 +71,11 @@ func (s *ShortCircuit) heldToMarking(e tables.Edition, m motor.Motor) error {
 	if m.Use == motor.FirePump && s.Rating.Cmp(marked) > 0 {
 		return &tables.NoSizeError{Field: "motor.nameplate.maximum_device_rating", Need: s.Limit, Cite: rule.In(e), Constraint: "the marked maximum of " + marked.String() + " is below what a fire pump's device must carry"}
 	}
-	for _, limit := range []*tables.Figure{&s.Limit, &s.StartLimit, &s.Instantaneous, &s.Half, &s.Smallest} {
+	limits := []*tables.Figure{&s.Limit, &s.StartLimit, &s.Half, &s.Smallest}
+	if s.Device == InstantaneousBreaker { // of a breaker with a rating, that is what is marked, and its trip is always above it
+		limits = append(limits, &s.Instantaneous)
+	}
+	for _, limit := range limits {
 		if !limit.IsZero() && limit.Cmp(marked) > 0 {
 			*limit = tables.SmallestOf(limit.Name(), e, rule, limit.Renamed("by rule"), marked)
 		}

@@ -10,7 +10,7 @@ import (
 // a text that does not parse.
 type InputError struct {
 	Field string   // path of the field, such as "motor.nameplate.service_factor"
-	Value string   // what was given, shortened if long; "" if nothing was
+	Value string   // what was given, shortened in the message if long; "" if nothing was
 	Want  string   // what is allowed
 	Cite  Citation // the rule that says so, if one does
 }
@@ -19,7 +19,7 @@ func (e *InputError) Error() string {
 	var b strings.Builder
 	b.WriteString(e.Field)
 	if e.Value != "" {
-		fmt.Fprintf(&b, " %q", e.Value)
+		fmt.Fprintf(&b, " %q", clip(e.Value))
 	} else {
 		b.WriteString(" is not given")
 	}
