@@ -112,6 +112,8 @@ func TestCheckErrorsTellValues(t *testing.T) {
 	assert.Less(t, len(err.Error()), 400)
 	_, err = motorcircuit.CheckFeeder(feeder(tables.NEC2023, cage("a", "30", 460)), motorcircuit.InstalledFeeder{Raceway: motorcircuit.InstalledRaceway{Type: conductor.EMT, Trade: strings.Repeat("7", 4096)}})
 	assert.Less(t, len(err.Error()), 400)
+	_, err = motorcircuit.CheckFeeder(feeder(tables.NEC2023, cage(longText, "51", 460)), motorcircuit.InstalledFeeder{})
+	assert.Less(t, len(err.Error()), 400)
 }
 
 // Where a hard start is confirmed, the higher ceiling is what is required, also of
