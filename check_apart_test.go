@@ -133,7 +133,7 @@ func TestCheckMarginsMoveOneWay(t *testing.T) {
 			{motorcircuit.SwitchAmperes, "disconnecting_means.amperes", true, func(in *motorcircuit.Installed) { in.Disconnect.Amperes = motor.Amps("9000") }},
 			{motorcircuit.BondingSize, "bonding", true, func(in *motorcircuit.Installed) { in.Bonding.Size = grown(in.Bonding.Size) }},
 			{motorcircuit.BondingSize, "bonding", false, func(in *motorcircuit.Installed) {
-				in.Device.Rating = tables.CurrentOf(last(r.ShortCircuit.Rating, r.ShortCircuit.StartRating))
+				in.Device.Rating = tables.CurrentAtMost(last(r.ShortCircuit.Rating, r.ShortCircuit.StartRating))
 			}},
 			{motorcircuit.RacewayFilled, "raceway", false, func(in *motorcircuit.Installed) {
 				in.Raceway.Others = []conductor.Pull{{Size: in.Branch.Size, Count: 3}}

@@ -108,11 +108,11 @@ func (k *feederChecker) bonding() error {
 	if base, err = bondingBase(k.edition, w, r.Conductors, k.load, base); err != nil {
 		return err
 	}
-	run := r.Conductors
+	material := r.Conductors.Material
 	if k.in.Bonding.Size != 0 {
-		run.Material = k.in.Bonding.Material
+		material = k.in.Bonding.Material
 	}
-	r.Bonding, err = conductor.SelectBonding(k.edition, k.counted(k.in.Device.Rating, r.Rating, r.Limit, r.StartLimit, r.StartRating), run, base)
+	r.Bonding, err = conductor.SelectBonding(k.edition, material, k.counted(k.in.Device.Rating, r.Rating, r.Limit, r.StartLimit, r.StartRating), r.Conductors, base)
 	return k.bonded(k.in.Bonding, &r.Bonding, err)
 }
 

@@ -107,7 +107,7 @@ func TestCheckAcceptsPublishedFeeders(t *testing.T) {
 			}
 			assert.Empty(t, checkedFeeder(t, f, in).Violations(), "%s of %s under %v", x.id, x.publication, e)
 			if ok {
-				in.Device.Rating = tables.CurrentOf(f.Edition.RatingAtOrAbove(protection.TimeDelayFuse, more(in.Device.Rating.Figure("rating")).Figure("rating"), "next", nil))
+				in.Device.Rating = tables.CurrentAtMost(f.Edition.RatingAtOrAbove(protection.TimeDelayFuse, more(in.Device.Rating.Figure("rating")).Figure("rating"), "next", nil))
 				bad := checkedFeeder(t, f, in).Violations()
 				if assert.Len(t, bad, 1, x.id) {
 					assert.Equal(t, motorcircuit.DeviceRating, bad[0].Code)

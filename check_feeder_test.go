@@ -69,7 +69,7 @@ func TestCheckFeederStartingTogether(t *testing.T) {
 		r := sized(t, f)
 		require.False(t, r.StartRating.IsZero())
 		in := r.AsInstalled()
-		in.Device.Rating = tables.CurrentOf(r.StartRating)
+		in.Device.Rating = tables.CurrentAtMost(r.StartRating)
 		assert.Empty(t, checkedFeeder(t, f, in).Violations())
 		in.Device.Rating = more(last(r.StartLimit, r.StartRating))
 		assert.Equal(t, motorcircuit.DeviceRating, checkedFeeder(t, f, in).Violations()[0].Code)

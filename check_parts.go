@@ -104,8 +104,8 @@ func (k *checker) switches() error {
 	k.r.Disconnect = protection.SizeDisconnect(k.edition, m, d)
 	k.r.Controller = protection.SizeController(k.edition, m, d)
 	x, y, in := k.r.Disconnect, &k.r.Controller, k.in.Disconnect
-	if in.Unfused && !x.Unfused.IsZero() && in.Horsepower.IsHP() && in.Horsepower.Cmp(x.Horsepower) >= 0 {
-		k.skip("disconnecting_means.amperes", "a listed unfused switch of the motor's horsepower may have a lower ampere rating ("+x.Unfused.String()+")")
+	if suited := in.Unfused || k.edition.Code() == tables.CEC; suited && !x.ByPower.IsZero() && in.Horsepower.Unit() == x.Horsepower.Unit() && in.Horsepower.Cmp(x.Horsepower) >= 0 {
+		k.skip("disconnecting_means.amperes", "a switch of the motor's horsepower needs no such ampere rating ("+x.ByPower.String()+")")
 		in.Amperes, x.Amperes = tables.Current{}, tables.Figure{}
 	}
 	k.rated("disconnecting_means", in, x.Amperes, x.LockedRotor, x.Horsepower, x.Cite)

@@ -58,7 +58,7 @@ func nextRating(r *motorcircuit.Result) tables.Current {
 	}
 	for _, rating := range r.Circuit.Edition.StandardRatings(x.Device) {
 		if rating.Cmp(most) > 0 {
-			return tables.CurrentOf(rating)
+			return tables.CurrentAtMost(rating)
 		}
 	}
 	return tables.Current{}
@@ -133,6 +133,9 @@ var steps = []step{
 	}},
 	{motorcircuit.SwitchAmperes, "disconnecting_means.amperes", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {
 		in.Disconnect.Amperes = less(r.Disconnect.Amperes)
+		if r.Circuit.Edition.Code() == tables.CEC { // where the power alone would do
+			in.Disconnect.Horsepower = tables.Power{}
+		}
 		return !in.Disconnect.Amperes.IsZero()
 	}},
 	{motorcircuit.SwitchHorsepower, "disconnecting_means.horsepower", func(r *motorcircuit.Result, in *motorcircuit.Installed) bool {

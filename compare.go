@@ -10,17 +10,17 @@ import (
 
 // A Comparison is one circuit under several editions.
 type Comparison struct {
-	Editions    []tables.Edition `json:"editions"`
+	Editions    []tables.Edition `json:"editions"`    // in the order given
 	Results     []Result         `json:"results"`     // by edition
 	Differences []Difference     `json:"differences"` // in the order of the derivation; none if the editions agree
 }
 
 // A Difference is a figure or a choice that is not the same under all editions.
 type Difference struct {
-	Section string            `json:"section"`
-	What    string            `json:"what"`
-	Values  []string          `json:"values"` // by edition; "" where an edition has none
-	Cites   []tables.Citation `json:"cites"`  // the rule behind each value, by edition
+	Section string            `json:"section"` // heading of the part of the derivation
+	What    string            `json:"what"`    // name of the figure, or the choice
+	Values  []string          `json:"values"`  // by edition; "" where an edition has none
+	Cites   []tables.Citation `json:"cites"`   // the rule behind each value, by edition
 }
 
 // An EditionError is why a circuit cannot be sized under one of the editions of

@@ -42,6 +42,14 @@ func TestJSONRoundTrip(t *testing.T) {
 		written(t, f)
 		written(t, sized(t, f).AsInstalled())
 	}
+	// Limits of more places than can be read back are written to the side that stands.
+	c := pump("50", 460, protection.InverseTimeBreaker, plate("50.123457", "1"))
+	c.Edition = tables.NEC2023
+	c.Motor.Starting, c.Motor.Nameplate.DriveInput = motor.Drive, motor.Amps("61.234567")
+	r, err := motorcircuit.Size(c)
+	require.NoError(t, err)
+	written(t, r.AsInstalled())
+	require.Empty(t, checked(t, c, r.AsInstalled()).Violations())
 	written(t, motorcircuit.Group{Tag: "g", Edition: tables.CEC2024, Circuits: []motorcircuit.Circuit{{Tag: "a"}}, Listed: true, MarkedMost: motor.Amps("15")})
 	written(t, motorcircuit.Installed{Raceway: motorcircuit.InstalledRaceway{Type: conductor.EMT, Trade: "3/4", Others: []conductor.Pull{{Size: tables.Must(tables.ParseSize("12")), Count: 3, Bare: true}}},
 		Overload: motorcircuit.InstalledOverload{Share: true}, Windings: []motorcircuit.InstalledWinding{{}, {}}, HardStart: true})

@@ -29,11 +29,12 @@ type Feeder struct {
 
 // A FeederCircuit is a branch circuit as the feeder sees it.
 type FeederCircuit struct {
-	Circuit Circuit `json:"circuit"`
+	Circuit Circuit `json:"circuit"` // the motor and its branch circuit
 
-	// Interlock names a group of which only one alternative runs at a time;
-	// Alternative names that of this motor, "" one of its own.
-	Interlock   string `json:"interlock,omitzero"`
+	// Interlock names a group of which only one alternative runs at a time.
+	Interlock string `json:"interlock,omitzero"`
+
+	// Alternative names the motor's alternative of the interlock; "" is one of its own.
 	Alternative string `json:"alternative,omitzero"`
 
 	// StartsWith names a set of motors that must start together (CEC Rule 28-204(2)).
@@ -80,20 +81,20 @@ type FeederResult struct {
 	Limit       tables.Figure         `json:"limit"`                 // greatest feeder device
 	Rating      tables.Figure         `json:"rating"`                // standard rating at or below the limit
 	StartLimit  tables.Figure         `json:"start_limit,omitzero"`  // the same, for motors that must start together (CEC)
-	StartRating tables.Figure         `json:"start_rating,omitzero"`
+	StartRating tables.Figure         `json:"start_rating,omitzero"` // standard rating at or below that
 	Disconnect  protection.Disconnect `json:"disconnecting_means"`   // one disconnecting means for the whole group
 	Bonding     conductor.Bonding     `json:"bonding"`               // bonding conductor of the feeder
 	Raceway     conductor.Filled      `json:"raceway,omitzero"`      // raceway of each set of conductors
 	Drop        VoltageDrop           `json:"voltage_drop,omitzero"` // along the feeder
 	TotalDrop   []tables.Figure       `json:"total_drop,omitempty"`  // running, of feeder and branch circuit together, in the order given; absent without lengths
 	FaultDuty   FaultDuty             `json:"fault_duty,omitzero"`   // at the end of the feeder; its circuits, where they give no fault current, begin with that
-	Cautions    []tables.Caution      `json:"cautions"`
+	Cautions    []tables.Caution      `json:"cautions"`              // assumptions, readings, limits; never empty
 }
 
 // A Term is one part of a sum: a motor or another load.
 type Term struct {
-	Tag    string        `json:"tag"` // of the motor; "" for another load
-	Figure tables.Figure `json:"figure"`
+	Tag    string        `json:"tag"`    // of the motor; "" for another load
+	Figure tables.Figure `json:"figure"` // its part
 }
 
 // SizeFeeder works out a feeder: its branch circuits, conductors, short-circuit

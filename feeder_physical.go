@@ -28,7 +28,7 @@ func (r *FeederResult) physical(g *group) error {
 	if base, err = bondingBase(e, f.Wiring, r.Conductors, load, base); err != nil {
 		return err
 	}
-	if r.Bonding, err = conductor.SelectBonding(e, r.Rating, r.Conductors, base); err != nil {
+	if r.Bonding, err = conductor.SelectBonding(e, r.Conductors.Material, r.Rating, r.Conductors, base); err != nil {
 		return err
 	}
 	if f.Wiring.Raceway != 0 {

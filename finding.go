@@ -15,7 +15,7 @@ type Report struct {
 // Part together name the check, so that a later run of the same check can take
 // the place of an earlier one.
 type Finding struct {
-	Code     FindingCode       `json:"code"`
+	Code     FindingCode       `json:"code"`              // what the finding is about
 	Part     string            `json:"part"`              // what is judged, as a path in [Installed] or [InstalledFeeder]: "branch", "windings[1].overload.setting_amperes"
 	Severity Severity          `json:"severity"`          // a note tells of a requirement that is met
 	Required tables.Figure     `json:"required,omitzero"` // the least or the greatest that the code allows
@@ -29,7 +29,7 @@ type Finding struct {
 // A NotJudged is a part, or a property of one, that was not judged.
 type NotJudged struct {
 	Part string `json:"part"` // path in [Installed] or [InstalledFeeder]
-	Why  string `json:"why"`
+	Why  string `json:"why"`  // not given, not asked for, or not to be judged
 }
 
 // A Severity tells how grave a finding is. The zero Severity is a note.

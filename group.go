@@ -8,8 +8,8 @@ import (
 // A Group is several motors on one branch circuit, behind one short-circuit
 // device: NEC 430.53, CEC Rule 28-206.
 type Group struct {
-	Tag        string           `json:"tag,omitzero"`
-	Edition    tables.Edition   `json:"edition"`
+	Tag        string           `json:"tag,omitzero"`                    // the caller's name for it, carried through
+	Edition    tables.Edition   `json:"edition"`                         // the code in force
 	Circuits   []Circuit        `json:"circuits"`                        // the motors; their device is the group's
 	Other      tables.Current   `json:"other_load_amperes,omitzero"`     // other load on the circuit
 	Device     tables.Device    `json:"device,omitzero"`                 // zero takes a time-delay fuse
@@ -21,19 +21,19 @@ type Group struct {
 
 // A GroupResult is a group sized by [SizeGroup].
 type GroupResult struct {
-	Group      Group               `json:"group"`
+	Group      Group               `json:"group"`      // the input
 	Circuits   []Result            `json:"circuits"`   // each motor as if alone, in the order given
 	Terms      []Term              `json:"terms"`      // the parts of the least ampacity
 	Ampacity   tables.Figure       `json:"ampacity"`   // least ampacity of the branch circuit
 	Conductors conductor.Selection `json:"conductors"` // branch-circuit conductors
 	Ways       []GroupWay          `json:"ways"`       // each way in which the code allows a group, and whether it does this one
-	Cautions   []tables.Caution    `json:"cautions"`
+	Cautions   []tables.Caution    `json:"cautions"`   // assumptions, readings, limits; never empty
 }
 
 // A GroupWay is one of the ways in which a code allows motors behind one device.
 type GroupWay struct {
-	Cite    tables.Citation `json:"cite"`
-	Allowed bool            `json:"allowed"`
+	Cite    tables.Citation `json:"cite"`            // the rule of the way
+	Allowed bool            `json:"allowed"`         // whether it allows this group
 	Why     string          `json:"why"`             // what it asks for
 	Limit   tables.Figure   `json:"limit,omitzero"`  // greatest device, if it is allowed
 	Rating  tables.Figure   `json:"rating,omitzero"` // standard rating at or below the limit

@@ -51,8 +51,8 @@ type Conductors struct {
 // An InstalledWinding is what stands of the circuit to one winding of a multispeed
 // motor.
 type InstalledWinding struct {
-	Conductors Conductors        `json:"conductors,omitzero"`
-	Overload   InstalledOverload `json:"overload,omitzero"`
+	Conductors Conductors        `json:"conductors,omitzero"` // run to the winding
+	Overload   InstalledOverload `json:"overload,omitzero"`   // overload protection of the winding
 }
 
 // An InstalledOverload is overload protection as it is set.
@@ -73,10 +73,10 @@ type InstalledDevice struct {
 
 // A Switch is a disconnecting means or a controller: what it is rated.
 type Switch struct {
-	Amperes     tables.Current `json:"amperes,omitzero"`
-	Horsepower  tables.Power   `json:"horsepower,omitzero"`
-	LockedRotor tables.Current `json:"locked_rotor_amperes,omitzero"`
-	Unfused     bool           `json:"unfused,omitzero"` // a listed unfused motor-circuit switch (NEC 430.110(A) Exception)
+	Amperes     tables.Current `json:"amperes,omitzero"`              // ampere rating
+	Horsepower  tables.Power   `json:"horsepower,omitzero"`           // horsepower rating, in the unit that it is marked in
+	LockedRotor tables.Current `json:"locked_rotor_amperes,omitzero"` // locked-rotor rating
+	Unfused     bool           `json:"unfused,omitzero"`              // a listed unfused motor-circuit switch (NEC 430.110(A) Exception)
 }
 
 // BondingConductors are the bonding conductors of a run, one with each set of
@@ -94,13 +94,14 @@ type InstalledRaceway struct {
 }
 
 // AsInstalled returns the circuit as it was designed, for [Check] to judge when
-// the motor, the length or the surroundings have changed.
+// the motor, the length or the surroundings have changed. Currents of more than six
+// places are rounded to the side that stands: settings down, ratings up.
 func (r Result) AsInstalled() Installed {
 	x := &r.ShortCircuit
 	in := Installed{
 		Branch: asInstalled(&r.Branch), MotorSupply: asInstalled(&r.MotorSupply), Secondary: asInstalled(&r.Secondary), Resistor: asInstalled(&r.Resistor),
-		Overload:   InstalledOverload{Setting: tables.CurrentOf(r.Overload.Limit), Units: int(r.Overload.Units.Value().IntPart())},
-		Device:     InstalledDevice{Kind: x.Device, Rating: tables.CurrentOf(x.Rating), Instantaneous: tables.CurrentOf(x.Instantaneous), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
+		Overload:   InstalledOverload{Setting: tables.CurrentAtMost(r.Overload.Limit), Units: int(r.Overload.Units.Value().IntPart())},
+		Device:     InstalledDevice{Kind: x.Device, Rating: tables.CurrentAtMost(x.Rating), Instantaneous: tables.CurrentAtMost(x.Instantaneous), Interrupting: tables.CurrentAtLeast(r.FaultDuty.Source)},
 		Disconnect: switchAsInstalled(r.Disconnect.Amperes, r.Disconnect.LockedRotor, r.Disconnect.Horsepower),
 		Controller: switchAsInstalled(r.Controller.Amperes, r.Controller.LockedRotor, r.Controller.Horsepower),
 		Bonding:    BondingConductors{Size: r.Bonding.Size, Material: r.Bonding.Material},
@@ -109,7 +110,7 @@ func (r Result) AsInstalled() Installed {
 		Length:     r.Circuit.Wiring.Length,
 	}
 	if x.Device == protection.InstantaneousBreaker { // whose limit is a setting
-		in.Device.Instantaneous = tables.CurrentOf(x.Limit)
+		in.Device.Instantaneous = tables.CurrentAtMost(x.Limit)
 	}
 	if least := r.MotorSupply.LeastRating; !least.IsZero() {
 		if _, err := r.Circuit.Edition.Insulation(r.MotorSupply.Insulation); err != nil { // hotter than the branch circuit's, of no certain type
@@ -119,7 +120,7 @@ func (r Result) AsInstalled() Installed {
 	for i := range r.Windings {
 		w := InstalledWinding{Conductors: asInstalled(&r.Windings[i])}
 		if i < len(r.Overload.Windings) {
-			w.Overload.Setting = tables.CurrentOf(r.Overload.Windings[i].Limit)
+			w.Overload.Setting = tables.CurrentAtMost(r.Overload.Windings[i].Limit)
 		}
 		in.Windings = append(in.Windings, w)
 	}
@@ -130,7 +131,7 @@ func (r Result) AsInstalled() Installed {
 func (r FeederResult) AsInstalled() InstalledFeeder {
 	return InstalledFeeder{
 		Conductors: asInstalled(&r.Conductors),
-		Device:     InstalledDevice{Kind: r.Device, Rating: tables.CurrentOf(r.Rating), Interrupting: tables.CurrentOf(r.FaultDuty.Source)},
+		Device:     InstalledDevice{Kind: r.Device, Rating: tables.CurrentAtMost(r.Rating), Interrupting: tables.CurrentAtLeast(r.FaultDuty.Source)},
 		Disconnect: switchAsInstalled(r.Disconnect.Amperes, r.Disconnect.LockedRotor, r.Disconnect.Horsepower),
 		Bonding:    BondingConductors{Size: r.Bonding.Size, Material: r.Bonding.Material},
 		Raceway:    InstalledRaceway{Type: r.Raceway.Raceway, Trade: r.Raceway.Trade},
@@ -143,5 +144,5 @@ func asInstalled(s *conductor.Selection) Conductors {
 }
 
 func switchAsInstalled(amperes, rotor tables.Figure, horsepower tables.Power) Switch {
-	return Switch{Amperes: tables.CurrentOf(amperes), Horsepower: horsepower, LockedRotor: tables.CurrentOf(rotor)}
+	return Switch{Amperes: tables.CurrentAtLeast(amperes), Horsepower: horsepower, LockedRotor: tables.CurrentAtLeast(rotor)}
 }

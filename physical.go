@@ -151,9 +151,7 @@ func (r *Result) bonding(c Circuit, rating tables.Figure, material tables.Materi
 	if err != nil {
 		return err
 	}
-	run := r.Branch
-	run.Material = material
-	r.Bonding, err = conductor.SelectBonding(e, rating, run, base)
+	r.Bonding, err = conductor.SelectBonding(e, material, rating, r.Branch, base)
 	return err
 }
 

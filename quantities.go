@@ -10,10 +10,10 @@ import (
 // A Quantity is one line of a bill of quantities: so much of one thing. Lines
 // of the same kind, item and unit may be added up.
 type Quantity struct {
-	Kind   string          `json:"kind"` // "conductor", "bonding_conductor", "raceway", "device", "overload", "disconnect" or "controller"
-	Item   string          `json:"item"` // what it is, in the trade's words
-	Amount decimal.Decimal `json:"amount"`
-	Unit   string          `json:"unit"` // "m", "each" or "set": fuses come in sets, one for each ungrounded conductor
+	Kind   string          `json:"kind"`   // "conductor", "bonding_conductor", "raceway", "device", "overload", "disconnect" or "controller"
+	Item   string          `json:"item"`   // what it is, in the trade's words
+	Amount decimal.Decimal `json:"amount"` // in that unit
+	Unit   string          `json:"unit"`   // "m", "each" or "set": fuses come in sets, one for each ungrounded conductor
 }
 
 // MakeUp is the allowance for ends in [Result.Quantities], in metres for each

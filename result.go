@@ -29,9 +29,9 @@ type Result struct {
 	Bonding      conductor.Bonding       `json:"bonding"`                   // bonding conductor
 	Raceway      conductor.Filled        `json:"raceway,omitzero"`          // raceway of each set of conductors
 	Flexible     conductor.Filled        `json:"flexible,omitzero"`         // flexible connection at the motor
-	Drop         VoltageDrop             `json:"voltage_drop,omitzero"`
-	FaultDuty    FaultDuty               `json:"fault_duty,omitzero"`
-	Cautions     []tables.Caution        `json:"cautions"` // assumptions, readings, limits; never empty
+	Drop         VoltageDrop             `json:"voltage_drop,omitzero"`     // along the run
+	FaultDuty    FaultDuty               `json:"fault_duty,omitzero"`       // of a bolted fault
+	Cautions     []tables.Caution        `json:"cautions"`                  // assumptions, readings, limits; never empty
 }
 
 // supplyEnd is the rule of the other end of motor supply conductors.

@@ -14,7 +14,7 @@ import (
 // A Headroom is what else an installed circuit would do, each thing alone, all else
 // as it is.
 type Headroom struct {
-	Tag        string       `json:"tag,omitzero"`
+	Tag        string       `json:"tag,omitzero"`    // of the circuit
 	Power      tables.Power `json:"power,omitzero"`  // of the largest motor
 	Motor      Edge         `json:"largest_motor"`   // the largest standard motor of its kind that the circuit may feed
 	Run        Edge         `json:"longest_run"`     // in metres: within the circuit's limit of voltage drop or, without one, the code's figure

@@ -13,7 +13,7 @@ import (
 
 // A FeederHeadroom is what else an installed feeder would carry, each thing alone.
 type FeederHeadroom struct {
-	Tag   string       `json:"tag,omitzero"`
+	Tag   string       `json:"tag,omitzero"`   // of the feeder
 	Spare Edge         `json:"spare_amperes"`  // of other load that is not continuous, in amperes
 	Power tables.Power `json:"power,omitzero"` // of the largest motor
 	Motor Edge         `json:"largest_motor"`  // the largest standard motor that may be added: continuous, across the line, of the feeder's system

@@ -47,8 +47,31 @@ func TestSchemas(t *testing.T) {
 		reflect.TypeFor[motorcircuit.Installed](), reflect.TypeFor[motorcircuit.InstalledFeeder](), reflect.TypeFor[motorcircuit.Report](),
 		reflect.TypeFor[motorcircuit.Headroom](), reflect.TypeFor[motorcircuit.FeederHeadroom]())
 	require.Len(t, files, len(schemaFiles))
+	for path, text := range files {
+		described(t, path, text)
+	}
 	for path, file := range schemaFiles {
 		testkit.Golden(t, file, string(files[path]))
+	}
+}
+
+// described holds that every type and every property says what it is.
+func described(t *testing.T, path string, text []byte) {
+	t.Helper()
+	var doc struct {
+		Defs map[string]struct {
+			Description string `json:"description"`
+			Properties  map[string]struct {
+				Description string `json:"description"`
+			} `json:"properties"`
+		} `json:"$defs"`
+	}
+	require.NoError(t, json.Unmarshal(text, &doc))
+	for name, def := range doc.Defs {
+		assert.NotEmpty(t, def.Description, "%s %s", path, name)
+		for key, p := range def.Properties {
+			assert.NotEmpty(t, p.Description, "%s %s.%s", path, name, key)
+		}
 	}
 }
 

@@ -12,8 +12,8 @@ type SharedResult struct {
 	Circuits []Result          `json:"circuits"` // each sized for the conductors of all, in the order given
 	Count    int               `json:"count"`    // current-carrying conductors in the raceway
 	Bonding  conductor.Bonding `json:"bonding"`  // one bonding conductor for all, by the largest device
-	Raceway  conductor.Filled  `json:"raceway"`
-	Cautions []tables.Caution  `json:"cautions"`
+	Raceway  conductor.Filled  `json:"raceway"`  // the raceway of all
+	Cautions []tables.Caution  `json:"cautions"` // assumptions, readings, limits; never empty
 }
 
 var (

@@ -5,10 +5,10 @@ import "example.org/motorcircuit/tables"
 // A Bonding is a circuit's wire-type bonding conductor (in the NEC's words, its
 // equipment grounding conductor); one for each set of conductors in parallel.
 type Bonding struct {
-	Size     tables.Size      `json:"size"`
-	Material tables.Material  `json:"material"`
-	Row      tables.Figure    `json:"row"` // the device rating of the table row that sizes it
-	Why      string           `json:"why"` // what the size rests on
+	Size     tables.Size      `json:"size"`     // of each conductor
+	Material tables.Material  `json:"material"` // its metal
+	Row      tables.Figure    `json:"row"`      // the device rating of the table row that sizes it
+	Why      string           `json:"why"`      // what the size rests on
 	Cautions []tables.Caution `json:"-"`
 }
 
@@ -24,8 +24,8 @@ var (
 // IsZero reports whether no bonding conductor was selected.
 func (b Bonding) IsZero() bool { return b.Size == 0 }
 
-// SelectBonding chooses the bonding conductor of a circuit from the rating of
-// the device ahead of it: NEC 250.122, CEC Rule 10-616 with Table 16. It is
+// SelectBonding chooses the bonding conductor of a circuit, of a metal, from the
+// rating of the device ahead of it: NEC 250.122, CEC Rule 10-616 with Table 16. It is
 // never larger than the circuit conductors. With conductors in parallel each
 // set has one: of full size under the NEC, by its share of the device rating
 // under the CEC.
@@ -34,8 +34,8 @@ func (b Bonding) IsZero() bool { return b.Size == 0 }
 // they are larger, the bonding conductor grows in proportion to their area (NEC
 // 250.122(B)), or goes by their ampacity in place of the device (CEC Rule
 // 10-616(3)(b)); zero is no increase.
-func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection, base tables.Size) (Bonding, error) {
-	b := Bonding{Material: circuit.Material}
+func SelectBonding(e tables.Edition, m tables.Material, device tables.Figure, circuit Selection, base tables.Size) (Bonding, error) {
+	b := Bonding{Material: m}
 	rating, rule, why := device, &necBonding, "by the rating of the device"
 	if e.Code() == tables.CEC {
 		rule = &cecBonding
@@ -65,8 +65,9 @@ func SelectBonding(e tables.Edition, device tables.Figure, circuit Selection, ba
 		b.Size, b.Why = inProportion(size, circuit.Size, base), "enlarged from "+size.String()+" in proportion to the circuit conductors ("+necBondingLarger.In(e).String()+")"
 	}
 	// The NEC asks for full size with every set, and of no more than the circuit
-	// conductors where there is one set.
-	if capped := circuit.Sets <= 1 || e.Code() == tables.CEC; capped && circuit.Size.Cmp(b.Size) < 0 {
+	// conductors where there is one set; aluminum is not held to the size of copper.
+	alike := m == circuit.Material || m == tables.Copper
+	if capped := circuit.Sets <= 1 || e.Code() == tables.CEC; capped && alike && circuit.Size.Cmp(b.Size) < 0 {
 		b.Size, b.Why = circuit.Size, "as large as the circuit conductors, which it need not exceed ("+rule.In(e).String()+")"
 	}
 	return b, nil

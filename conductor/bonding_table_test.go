@@ -44,7 +44,7 @@ func TestBondingByTableRow(t *testing.T) {
 		{"70", tables.Copper, "10", "10", "10", "100 A"},
 	} {
 		for _, e := range tables.Editions() {
-			b, err := conductor.SelectBonding(e, amps(tt.device), circuit(tt.material, tt.circuit, 1), 0)
+			b, err := conductor.SelectBonding(e, tt.material, amps(tt.device), circuit(tt.material, tt.circuit, 1), 0)
 			require.NoError(t, err)
 			want := tt.nec
 			if e.Code() == tables.CEC {
@@ -68,10 +68,10 @@ func TestBondingByTableRow(t *testing.T) {
 func TestBondingWhy(t *testing.T) {
 	for e, rule := range map[tables.Edition]string{tables.NEC2017: "NFPA 70-2017 250.122(A)", tables.NEC2023: "NFPA 70-2023 250.122(A)",
 		tables.CEC2021: "CSA C22.1:21 Rule 10-616", tables.CEC2024: "CSA C22.1:24 Rule 10-616"} {
-		b, err := conductor.SelectBonding(e, amps("40"), circuit(tables.Copper, "14", 1), 0)
+		b, err := conductor.SelectBonding(e, tables.Copper, amps("40"), circuit(tables.Copper, "14", 1), 0)
 		require.NoError(t, err)
 		assert.Contains(t, b.Why, rule)
-		b, err = conductor.SelectBonding(e, amps("40"), circuit(tables.Copper, "8", 1), 0)
+		b, err = conductor.SelectBonding(e, tables.Copper, amps("40"), circuit(tables.Copper, "8", 1), 0)
 		require.NoError(t, err)
 		assert.Equal(t, "by the rating of the device", b.Why)
 	}
@@ -92,7 +92,7 @@ func TestBondingInParallel(t *testing.T) {
 		{"2000", "500", 6, "250", "3"}, // CEC 333.3 A
 	} {
 		for _, e := range tables.Editions() {
-			b, err := conductor.SelectBonding(e, amps(tt.device), circuit(tables.Copper, tt.circuit, tt.sets), 0)
+			b, err := conductor.SelectBonding(e, tables.Copper, amps(tt.device), circuit(tables.Copper, tt.circuit, tt.sets), 0)
 			require.NoError(t, err)
 			want, rule := tt.nec, "250.122(F)"
 			if e.Code() == tables.CEC {
@@ -107,15 +107,15 @@ func TestBondingInParallel(t *testing.T) {
 // Above the last row, 6000 A, there is no size.
 func TestBondingRefusals(t *testing.T) {
 	for _, e := range tables.Editions() {
-		b, err := conductor.SelectBonding(e, amps("6000"), circuit(tables.Copper, "2000", 1), 0)
+		b, err := conductor.SelectBonding(e, tables.Copper, amps("6000"), circuit(tables.Copper, "2000", 1), 0)
 		require.NoError(t, err)
 		assert.Equal(t, "800", b.Size.Name())
-		b, err = conductor.SelectBonding(e, amps("6000.01"), circuit(tables.Copper, "2000", 1), 0)
+		b, err = conductor.SelectBonding(e, tables.Copper, amps("6000.01"), circuit(tables.Copper, "2000", 1), 0)
 		assert.Equal(t, "device", tables.FieldOf(err))
 		assert.True(t, b.IsZero())
 	}
-	_, err := conductor.SelectBonding(0, amps("20"), circuit(tables.Copper, "14", 1), 0)
+	_, err := conductor.SelectBonding(0, tables.Copper, amps("20"), circuit(tables.Copper, "14", 1), 0)
 	assert.Equal(t, "edition", tables.FieldOf(err))
-	_, err = conductor.SelectBonding(tables.NEC2023, amps("20"), circuit(9, "14", 1), 0)
+	_, err = conductor.SelectBonding(tables.NEC2023, 9, amps("20"), circuit(9, "14", 1), 0)
 	assert.Equal(t, "wiring.material", tables.FieldOf(err))
 }

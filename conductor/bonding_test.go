@@ -20,7 +20,7 @@ func bonded(t *testing.T, e tables.Edition, m tables.Material, device, awg, base
 	if base != "" {
 		from = size(base)
 	}
-	b, err := conductor.SelectBonding(e, amps(device), s, from)
+	b, err := conductor.SelectBonding(e, s.Material, amps(device), s, from)
 	require.NoError(t, err)
 	return b
 }
@@ -128,10 +128,25 @@ func TestBondingProperties(t *testing.T) {
 func TestBondingRefused(t *testing.T) {
 	for _, e := range tables.Editions() {
 		s := chosen(t, conductor.Wiring{Termination: 75, Least: size("1/0")}, e, load("1"))
-		b, err := conductor.SelectBonding(e, amps("6001"), s, 0)
+		b, err := conductor.SelectBonding(e, s.Material, amps("6001"), s, 0)
 		var missing *tables.NotTabulatedError
 		require.ErrorAs(t, err, &missing)
 		assert.True(t, b.IsZero())
 		assert.Equal(t, "device", missing.Field)
+	}
+}
+
+// Copper beside aluminum is no larger than that, and aluminum beside copper may be:
+// Table 250.122 has 14 AWG copper and 12 AWG aluminum to 15 A, 250.122(A).
+func TestBondingOfAnotherMetal(t *testing.T) {
+	for _, e := range necEditions {
+		copper := chosen(t, conductor.Wiring{Termination: 75}, e, load("15"))
+		b, err := conductor.SelectBonding(e, conductor.Aluminum, amps("15"), copper, 0)
+		require.NoError(t, err)
+		assert.Equal(t, "12 AWG aluminum", b.Size.String()+" "+b.Material.String())
+		aluminum := chosen(t, conductor.Wiring{Termination: 75, Material: conductor.Aluminum}, e, load("15"))
+		b, err = conductor.SelectBonding(e, conductor.Copper, amps("60"), aluminum, 0)
+		require.NoError(t, err)
+		assert.Equal(t, "12 AWG copper", b.Size.String()+" "+b.Material.String(), "10 AWG by the table")
 	}
 }

@@ -26,20 +26,20 @@ const (
 // A Pull is conductors of one size and insulation that are pulled into a raceway.
 type Pull struct {
 	Insulation string      `json:"insulation,omitzero"` // the edition's designation; of a bare conductor that of the others
-	Size       tables.Size `json:"size"`
-	Count      int         `json:"count"`
-	Bare       bool        `json:"bare,omitzero"` // bare: NEC Table 8; the CEC's tables have only insulated ones
+	Size       tables.Size `json:"size"`                // of each conductor
+	Count      int         `json:"count"`               // of conductors
+	Bare       bool        `json:"bare,omitzero"`       // bare: NEC Table 8; the CEC's tables have only insulated ones
 }
 
 // A Filled is a raceway chosen for what is pulled into it.
 type Filled struct {
-	Raceway    tables.Raceway   `json:"raceway"`
+	Raceway    tables.Raceway   `json:"raceway"`           // its type
 	Trade      string           `json:"trade_size"`        // in inches: "3/4", "1-1/4"
 	Metric     int              `json:"metric_designator"` // "21", "35"
-	Conductors int              `json:"conductors"`
-	Area       tables.Figure    `json:"area"`         // of all conductors
-	Limit      tables.Figure    `json:"limit"`        // area that may be filled
-	Percent    tables.Figure    `json:"fill_percent"` // of the inside area
+	Conductors int              `json:"conductors"`        // that are pulled into it
+	Area       tables.Figure    `json:"area"`              // of all conductors
+	Limit      tables.Figure    `json:"limit"`             // area that may be filled
+	Percent    tables.Figure    `json:"fill_percent"`      // of the inside area
 	Cautions   []tables.Caution `json:"-"`
 }
 

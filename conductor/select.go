@@ -16,13 +16,13 @@ type Load struct {
 
 // A Selection is the conductors chosen for a load, and why.
 type Selection struct {
-	Required    tables.Figure   `json:"required"` // least ampacity asked for
-	Size        tables.Size     `json:"size"`
-	Sets        int             `json:"sets"` // conductors in parallel for each phase, 1 for none
-	Material    tables.Material `json:"material"`
-	Insulation  string          `json:"insulation"` // designation of the insulation
-	Location    tables.Location `json:"location"`
-	Run         tables.Run      `json:"run"`
+	Required    tables.Figure   `json:"required"`              // least ampacity asked for
+	Size        tables.Size     `json:"size"`                  // of each conductor
+	Sets        int             `json:"sets"`                  // conductors in parallel for each phase, 1 for none
+	Material    tables.Material `json:"material"`              // metal of the conductors
+	Insulation  string          `json:"insulation"`            // designation of the insulation
+	Location    tables.Location `json:"location"`              // dry, damp or wet
+	Run         tables.Run      `json:"run"`                   // how they are run
 	Termination tables.Figure   `json:"termination"`           // temperature that the terminals allow, °C
 	Ambient     tables.Figure   `json:"ambient_factor"`        // factor for ambient air
 	Together    tables.Figure   `json:"together_factor"`       // factor or percent for conductors together
@@ -37,10 +37,10 @@ type Selection struct {
 
 // A Rejected is a size that does not do.
 type Rejected struct {
-	Size     tables.Size     `json:"size"`
+	Size     tables.Size     `json:"size"`              // of each conductor
 	Ampacity tables.Figure   `json:"ampacity,omitzero"` // its usable ampacity, absent if it fails for another reason
-	Why      string          `json:"why"`
-	Cite     tables.Citation `json:"cite,omitzero"`
+	Why      string          `json:"why"`               // it does not do
+	Cite     tables.Citation `json:"cite,omitzero"`     // the rule, where it is not the ampacity
 }
 
 // IsZero reports whether nothing was selected.

@@ -43,7 +43,7 @@ func TestBondingInParallelIsNotCapped(t *testing.T) {
 		if e.Code() != tables.NEC {
 			continue
 		}
-		b, err := conductor.SelectBonding(e, amps("1200"), conductor.Selection{Size: tables.Must(tables.ParseSize("1/0")), Sets: 8}, 0)
+		b, err := conductor.SelectBonding(e, tables.Copper, amps("1200"), conductor.Selection{Size: tables.Must(tables.ParseSize("1/0")), Sets: 8}, 0)
 		require.NoError(t, err)
 		assert.Equal(t, "3/0", b.Size.Name())
 	}

@@ -13,7 +13,7 @@ type Demand struct {
 	Table       tables.Figure `json:"table_current,omitzero"`    // full-load current of the code's table, where it is used
 	Design      tables.Figure `json:"design_current,omitzero"`   // current for conductors, switches and short-circuit devices
 	Overload    tables.Figure `json:"overload_current,omitzero"` // current that overload protection is set by
-	LockedRotor LockedRotor   `json:"locked_rotor,omitzero"`
+	LockedRotor LockedRotor   `json:"locked_rotor,omitzero"`     // and where it comes from
 
 	Branch    tables.Figure `json:"branch_ampacity,omitzero"`       // least ampacity of the branch-circuit conductors
 	Supply    tables.Figure `json:"motor_supply_ampacity,omitzero"` // least ampacity of the run to the motor, where the code treats it apart
@@ -31,9 +31,9 @@ type Demand struct {
 // A LockedRotor is a motor's locked-rotor current and where it comes from. Low
 // and High are the ends of a code letter's range; otherwise they are equal.
 type LockedRotor struct {
-	Source Source        `json:"source,omitzero"`
-	Low    tables.Figure `json:"low,omitzero"`
-	High   tables.Figure `json:"high,omitzero"` // absent for code letter V, which has no upper end
+	Source Source        `json:"source,omitzero"` // where it comes from
+	Low    tables.Figure `json:"low,omitzero"`    // the lower end
+	High   tables.Figure `json:"high,omitzero"`   // absent for code letter V, which has no upper end
 }
 
 // A Source tells where a locked-rotor current comes from.

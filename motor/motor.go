@@ -6,7 +6,7 @@ import "example.org/motorcircuit/tables"
 // required; Power may give way to Nameplate.Amperes where the code sizes by the
 // nameplate. The comment of each other field says what its zero means.
 type Motor struct {
-	Kind      Kind         `json:"kind"`
+	Kind      Kind         `json:"kind"`               // what motor it is
 	Phases    int          `json:"phases,omitzero"`    // 1, 2 or 3; zero is the kind's own (direct current has none)
 	Power     tables.Power `json:"power,omitzero"`     // rated output in hp or kW, see [HP] and [KW]; never converted
 	Voltage   int          `json:"voltage,omitzero"`   // rated volts, or a system voltage that the tables allow for it

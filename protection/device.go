@@ -20,7 +20,7 @@ const (
 // protection of a motor. For an instantaneous-trip breaker the limits are
 // settings and there is no rating.
 type ShortCircuit struct {
-	Device        tables.Device    `json:"kind"`
+	Device        tables.Device    `json:"kind"`                            // of device
 	Limit         tables.Figure    `json:"limit"`                           // calculated ceiling: percent times current
 	Rating        tables.Figure    `json:"rating,omitzero"`                 // standard rating that the code lets stand
 	Half          tables.Figure    `json:"half_limit,omitzero"`             // ceiling of each of two devices, one for each half of a part winding

@@ -19,8 +19,8 @@ type Overload struct {
 
 // A WindingLimit is the overload protection of one winding of a multispeed motor.
 type WindingLimit struct {
-	Limit      tables.Figure `json:"limit"`
-	StartLimit tables.Figure `json:"start_limit,omitzero"`
+	Limit      tables.Figure `json:"limit"`                // greatest trip setting
+	StartLimit tables.Figure `json:"start_limit,omitzero"` // the same if the motor will not start
 }
 
 // SizeOverload works out the overload protection of a motor.

@@ -12,7 +12,7 @@ type Disconnect struct {
 	Horsepower  tables.Power     `json:"horsepower,omitzero"`      // least horsepower rating; zero where none follows from the code
 	Cite        tables.Citation  `json:"horsepower_cite,omitzero"` // the rule that asks for the horsepower rating
 	LockedRotor tables.Figure    `json:"locked_rotor,omitzero"`    // locked-rotor current that the switch must be able to break
-	Unfused     tables.Citation  `json:"unfused_cite,omitzero"`    // the rule under which a listed unfused switch of the horsepower may have a lower ampere rating; zero where there is none
+	ByPower     tables.Citation  `json:"by_power_cite,omitzero"`   // the rule under which a switch of that horsepower needs no such ampere rating: under the NEC a listed unfused one; zero where there is none
 	Sight       tables.Figure    `json:"in_sight"`                 // farthest that "in sight" reaches, in metres
 	Cautions    []tables.Caution `json:"-"`
 }

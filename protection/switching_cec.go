@@ -30,6 +30,9 @@ func disconnectCEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 	if !x.Horsepower.IsZero() {
 		x.Cite = rule.In(e)
 	}
+	if rule == &cecDisconnect { // a motor-circuit switch by its power, a breaker by its amperes
+		x.ByPower = x.Cite
+	}
 	base := d.Design
 	if m.Starting == motor.Drive {
 		base = tables.LargestOf("current at the disconnecting means", e, rule, d.Design, d.Input)

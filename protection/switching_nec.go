@@ -57,7 +57,7 @@ func disconnectNEC(e tables.Edition, m motor.Motor, d motor.Demand) Disconnect {
 		}
 	}
 	if rule == &necDisconnect {
-		x.Unfused = necUnfused.In(e)
+		x.ByPower = necUnfused.In(e)
 		caution(&necUnfused, "a listed unfused switch rated in horsepower not below the motor's may have a lower ampere rating")
 	}
 	ac, dc := !m.Power.AtMost(100), !m.Power.AtMost(40)

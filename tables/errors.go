@@ -121,8 +121,8 @@ func clip(s string) string {
 // A Caution is what a designer should know of a result although it stands: an
 // assumption, a default taken, a limit that is near, a reading of a rule.
 type Caution struct {
-	Text string   `json:"text"`
-	Cite Citation `json:"cite,omitzero"`
+	Text string   `json:"text"`          // in plain words
+	Cite Citation `json:"cite,omitzero"` // the rule behind it, if there is one
 }
 
 // FromMemory returns the caution of a figure that rests on a mark C.

@@ -266,8 +266,13 @@ func TestStepAndPercentFigures(t *testing.T) {
 // Quantities of figures, and figures of sizes and powers: a third has no decimal
 // and is told to be rounded. Areas by NFPA 70 Chapter 9 Table 8.
 func TestFiguresOfInputs(t *testing.T) {
-	assert.Equal(t, "81.25 A", tables.CurrentOf(amps("81.25")).String())
-	assert.True(t, tables.CurrentOf(tables.Figure{}).IsZero())
+	assert.Equal(t, "81.25 A", tables.CurrentAtMost(amps("81.25")).String())
+	product := tables.ProductOf("setting", 0, nil, amps("50.123457"), tables.StatedFigure("of the current", 0, nil, tables.Percent, 115, 0))
+	assert.Equal(t, "57.64197555 A", product.String())
+	assert.Equal(t, "57.641975 A", tables.CurrentAtMost(product).String())
+	assert.Equal(t, "57.641976 A", tables.CurrentAtLeast(product).String())
+	assert.Equal(t, "81.25 A", tables.CurrentAtLeast(amps("81.25")).String())
+	assert.True(t, tables.CurrentAtMost(tables.Figure{}).IsZero())
 	assert.Equal(t, "110 °C", tables.TemperatureOf(tables.Whole("rating", tables.Celsius, 110)).String())
 	assert.True(t, tables.TemperatureOf(tables.Figure{}).IsZero())
 	for text, want := range map[string]string{"6 AWG": "13.3 mm²", "1/0": "53.49 mm²", "500": "253 mm²", "16 mm²": "16 mm²"} {

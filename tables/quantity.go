@@ -109,9 +109,19 @@ func (q Quantity[U]) String() string {
 	return withUnit(q.n, u.unit())
 }
 
-// CurrentOf returns a figure in amperes as a quantity; not given for an absent
-// figure.
-func CurrentOf(f Figure) Current { return Current{f.value, !f.IsZero()} }
+// CurrentAtMost returns a figure in amperes as a quantity of at most six places,
+// which can be written and read, rounded down; not given for an absent figure.
+func CurrentAtMost(f Figure) Current { return currentOf(f, exact.Num.DivDown) }
+
+// CurrentAtLeast is [CurrentAtMost] rounded up.
+func CurrentAtLeast(f Figure) Current { return currentOf(f, exact.Num.DivUp) }
+
+func currentOf(f Figure, round func(n, by exact.Num, places int32) exact.Num) Current {
+	if f.IsZero() {
+		return Current{}
+	}
+	return Current{round(f.value, exact.Int(1), 6), true}
+}
 
 // TemperatureOf returns a figure in degrees Celsius as a quantity; not given for
 // an absent figure.

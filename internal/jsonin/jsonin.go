@@ -44,7 +44,17 @@ type decoder struct {
 	faults []error
 }
 
+// mostFaults is how many faults are told: input that is of something else altogether
+// would bring as many as it has keys.
+const mostFaults = 100
+
 func (d *decoder) fault(path, value, want string) {
+	switch n := len(d.faults); {
+	case n == mostFaults:
+		path, value, want = "", "", "fewer faults than these: the rest is not told"
+	case n > mostFaults:
+		return
+	}
 	if path == "" {
 		path = "document"
 	}

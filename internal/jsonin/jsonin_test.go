@@ -103,3 +103,11 @@ func TestDecodeDeep(t *testing.T) {
 	deep := `{"x":` + strings.Repeat("[", 5000) + strings.Repeat("]", 5000) + `}`
 	assert.Len(t, tables.Faults(jsonin.Decode([]byte(deep), &outer{})), 1)
 }
+
+// Of a document of something else the first hundred faults are told.
+func TestDecodeTellsSoManyFaults(t *testing.T) {
+	err := jsonin.Decode([]byte(`{`+strings.Repeat(`"x":1,`, 5000)+`"y":2}`), &outer{})
+	faults := tables.Faults(err)
+	require.Len(t, faults, 101)
+	assert.ErrorContains(t, faults[100], "document is not given: want fewer faults")
+}

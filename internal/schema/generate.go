@@ -154,8 +154,8 @@ func (g *generator) figure() object {
 	return object{{"type", []string{"object", "null"}}, {"properties", object{
 		{"name", append(object{{"description", "what the number is"}}, text...)},
 		{"value", object{{"description", "exactly; a string, so that no reader rounds it"}, {"type", "string"}, {"pattern", `^-?[0-9]+(\.[0-9]+)?$`}}},
-		{"unit", g.schemaOf(reflect.TypeFor[tables.Unit]())},
-		{"op", g.schemaOf(reflect.TypeFor[tables.Op]())},
+		{"unit", append(object{{"description", "of the value; none for a plain number"}}, g.schemaOf(reflect.TypeFor[tables.Unit]())...)},
+		{"op", append(object{{"description", "the way in which it came about"}}, g.schemaOf(reflect.TypeFor[tables.Op]())...)},
 		{"how", append(object{{"description", "how it was worked out, in one line"}}, text...)},
 		{"cites", object{{"description", "the rules and tables that it rests on, the deciding one first"}, {"type", "array"}, {"items", g.schemaOf(reflect.TypeFor[tables.Citation]())}}},
 	}}, {"required", []string{"name", "value", "op", "how"}}, {"additionalProperties", false}}
