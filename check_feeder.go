@@ -77,13 +77,26 @@ func (k *feederChecker) device() error {
 		return err
 	}
 	rating := claim{code: DeviceRating, part: "device.rating_amperes", found: in.Rating.Figure("rating of the device")}
-	k.atMost(rating, ceiling{limit: greater(r.Limit, r.Rating), start: greater(r.StartLimit, r.StartRating), confirmed: true, over: Violation})
+	k.atMost(rating, ceiling{limit: greater(greater(r.Limit, r.Rating), k.byAmpacity()), start: greater(r.StartLimit, r.StartRating), confirmed: true, over: Violation})
 	if rating.code, rating.cites = DeviceCarries, []tables.Citation{carriesLoad.In(k.edition)}; !rating.found.IsZero() {
 		k.atLeast(rating, r.lineLoad(&k.g).Current, Caution)
 	}
 	k.atMost(claim{code: InstantaneousSetting, part: "device.instantaneous_amperes", found: in.Instantaneous.Figure("instantaneous-trip setting")}, ceiling{})
 	k.interrupts(in.Interrupting, r.Feeder.Fault)
 	return nil
+}
+
+var necLargerFeeder = tables.Rule{Ref: "430.62(B)"}
+
+// byAmpacity is the greatest device by the ampacity of conductors that are larger than
+// the loads ask for, under the NEC; without the step to the next standard rating, and
+// of small conductors not above their own limit.
+func (k *feederChecker) byAmpacity() tables.Figure {
+	s := &k.r.Conductors
+	if k.edition.Code() != tables.NEC || s.Ampacity.Cmp(k.r.Ampacity) <= 0 {
+		return tables.Figure{}
+	}
+	return tables.SmallestOf("greatest feeder device, by the ampacity of the conductors", k.edition, &necLargerFeeder, s.Ampacity, s.SmallLimit)
 }
 
 // disconnect judges the disconnecting means of the group.

@@ -122,6 +122,9 @@ func TestCheckFeederAcceptsDesigns(t *testing.T) {
 		}{
 			{motorcircuit.DeviceRating, "device.rating_amperes", func(in *motorcircuit.InstalledFeeder) bool {
 				in.Device.Rating = more(last(last(r.Limit, r.Rating), last(r.StartLimit, r.StartRating)))
+				if f.Edition.Code() == tables.NEC && r.Conductors.Ampacity.Cmp(r.Limit) >= 0 { // 430.62(B)
+					return false
+				}
 				return f.MaxDrop.IsZero() // larger conductors raise the ceilings that go by them, after the device is chosen
 			}},
 			{motorcircuit.InterruptingRating, "device.interrupting_amperes", func(in *motorcircuit.InstalledFeeder) bool {
@@ -225,5 +228,23 @@ func TestCheckFeederThatNothingCarries(t *testing.T) {
 		assert.Empty(t, found(report, motorcircuit.BondingSize))
 		_, err := motorcircuit.SizeFeeder(f)
 		require.ErrorAs(t, err, new(*tables.NoSizeError))
+	}
+}
+
+// NEC 430.62(B): conductors larger than the loads ask for let the device follow their
+// ampacity. Two motors of 3 hp at 460 V, 4.8 × 1.25 + 4.8 = 10.8 A, behind breakers of
+// 15 A: 15 + 4.8 = 19.8 A; 6 AWG copper carries 65 A at 75 °C. The CEC has no such rule.
+func TestCheckFeederByAmpacity(t *testing.T) {
+	for _, e := range everyone {
+		breaker := func(fc *motorcircuit.FeederCircuit) { fc.Circuit.Device = protection.InverseTimeBreaker }
+		f := feeder(e, cage("a", "3", 460, breaker), cage("b", "3", 460, breaker))
+		f.Device, f.Wiring.Termination = protection.InverseTimeBreaker, 75
+		severity := func(amps, size string) motorcircuit.Severity {
+			return found(checkedFeeder(t, f, motorcircuit.InstalledFeeder{Conductors: wire(size), Device: motorcircuit.InstalledDevice{Rating: motor.Amps(amps)}}), motorcircuit.DeviceRating)[0].Severity
+		}
+		nec := e.Code() == tables.NEC
+		assert.Equal(t, nec, severity("60", "6") == motorcircuit.Note)
+		assert.Equal(t, motorcircuit.Violation, severity("70", "6"))
+		assert.Equal(t, motorcircuit.Violation, severity("25", "12"), "25 A at 75 °C, and 20 A for a small conductor (240.4(D))")
 	}
 }

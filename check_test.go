@@ -90,6 +90,12 @@ var checkCases = []checkCase{
 	{"switches", everyone, pump("50", 460, 0), motorcircuit.Installed{Disconnect: motorcircuit.Switch{Amperes: motor.Amps("74.75"), Horsepower: motor.HP("40")}, Controller: motorcircuit.Switch{Horsepower: motor.HP("50")}},
 		map[string]string{"switch_amperes disconnecting_means.amperes": "note 74.75 A 74.75 A", "switch_horsepower disconnecting_means.horsepower": "violation 50 hp 40 hp", "switch_horsepower controller.horsepower": "note 50 hp 50 hp"},
 		"430.110(A), 28-602(1): 65 × 115 %; 430.109, 28-602; 430.83, 28-500"},
+	{"a switch by its amperes alone", everyone, pump("50", 460, 0), motorcircuit.Installed{Disconnect: motorcircuit.Switch{Amperes: motor.Amps("74.7")}},
+		map[string]string{"switch_amperes disconnecting_means.amperes": "violation 74.75 A 74.7 A"}, "115 % of 65 A"},
+	{"a switch by its power, CEC", cecEditions, pump("50", 460, 0), motorcircuit.Installed{Disconnect: motorcircuit.Switch{Amperes: motor.Amps("60"), Horsepower: motor.HP("50")}},
+		map[string]string{"switch_horsepower disconnecting_means.horsepower": "note 50 hp 50 hp", "switch_amperes disconnecting_means.amperes": ""}, "28-602(1): a motor-circuit switch by its power, a breaker by 115 %"},
+	{"a switch by its power, NEC", necEditions, pump("50", 460, 0), motorcircuit.Installed{Disconnect: motorcircuit.Switch{Amperes: motor.Amps("60"), Horsepower: motor.HP("50")}},
+		map[string]string{"switch_amperes disconnecting_means.amperes": "violation 74.75 A 60 A"}, "430.110(A): an exception for listed unfused switches alone"},
 	{"locked rotor of a switch", necEditions, pump("50", 460, 0), motorcircuit.Installed{Disconnect: motorcircuit.Switch{LockedRotor: motor.Amps("360")}},
 		map[string]string{"switch_locked_rotor disconnecting_means.locked_rotor_amperes": "violation 363 A 360 A"}, "Table 430.251(B)"},
 
