@@ -5,6 +5,7 @@ import (
 
 	"github.com/shopspring/decimal"
 	"github.com/stretchr/testify/assert"
+	"github.com/stretchr/testify/require"
 
 	"example.org/motorcircuit"
 	"example.org/motorcircuit/conductor"
@@ -74,5 +75,31 @@ func TestQuantitiesOfASetting(t *testing.T) {
 		if q.Kind == "device" {
 			assert.Contains(t, q.Item, "set to 272 A") // 800 % of 34 A
 		}
+	}
+}
+
+// One raceway is as long as the longest run in it, in whatever order; an overload
+// relay of one unit is told so (NEC Table 430.37).
+func TestQuantitiesOfLongestRun(t *testing.T) {
+	run := func(tag, length string) motorcircuit.Circuit {
+		c := single(tag, "1", 115, "").Circuit
+		c.Edition, c.Wiring.Termination, c.Wiring.Length = tables.NEC2023, 75, conductor.Metres(length)
+		c.Motor.Nameplate.Amperes = motor.Amps("15")
+		return c
+	}
+	for _, order := range [][2]string{{"20", "35"}, {"35", "20"}} {
+		s, err := motorcircuit.SizeShared(conductor.EMT, []motorcircuit.Circuit{run("a", order[0]), run("b", order[1])})
+		require.NoError(t, err)
+		units := 0
+		for _, q := range s.Quantities() {
+			switch q.Kind {
+			case "raceway":
+				assert.Equal(t, "35", q.Amount.String())
+			case "overload":
+				units++
+				assert.Equal(t, "overload relay of 1 unit", q.Item)
+			}
+		}
+		assert.Equal(t, 2, units)
 	}
 }
