@@ -49,38 +49,30 @@ func (k *checker) device() (err error) {
 	return nil
 }
 
-// greater returns the greater of a calculated limit and the standard rating that
-// the code lets stand, which may be above or below it.
-func greater(limit, rating tables.Figure) tables.Figure {
-	if rating.Cmp(limit) > 0 {
-		return rating
+// greater returns the greater of two figures, such as a calculated limit and the
+// standard rating that the code lets stand, which may be above or below it.
+func greater(a, b tables.Figure) tables.Figure {
+	if b.Cmp(a) > 0 {
+		return b
 	}
-	return limit
+	return a
 }
 
 // carries judges whether the device carries the motor's current: of a fire pump
 // with its rotor locked.
 func (k *checker) carries(rating claim) {
 	rating.code = DeviceCarries
-	d := &k.r.Demand
 	switch {
 	case rating.found.IsZero():
 	case k.r.Circuit.Motor.Use == motor.FirePump:
 		k.atLeast(rating, k.r.ShortCircuit.Limit, Violation)
 	default:
-		current := d.Design
-		switch {
-		case k.r.Circuit.Motor.Bypass: // the line feeds drive or motor
-			current = greater(d.Input, d.Design)
-		case !d.Input.IsZero():
-			current = d.Input
-		}
 		rule := &carriesLoad
 		if k.edition.Code() == tables.NEC {
 			rule = &necCarries
 		}
 		rating.cites = []tables.Citation{rule.In(k.edition)}
-		k.atLeast(rating, current, Caution)
+		k.atLeast(rating, k.r.lineCurrent(), Caution)
 	}
 }
 

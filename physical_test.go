@@ -264,3 +264,20 @@ func TestPhysicalRefusals(t *testing.T) {
 		assert.NoError(t, c.Validate(), "on the edge")
 	}
 }
+
+// A drive with a bypass drops for the motor where that draws more: 30 hp at 460 V, 40
+// A (Table 430.250), beside an input of 36 A.
+func TestDropOfBypass(t *testing.T) {
+	for _, e := range necEditions {
+		c := cage("d", "30", 460, onDrive("36", "")).Circuit
+		c.Edition, c.Wiring.Termination, c.Wiring.Length = e, 75, conductor.Metres("80")
+		through, err := motorcircuit.Size(c)
+		require.NoError(t, err)
+		c.Motor.Bypass = true
+		c.Wiring.Least = through.Branch.Size
+		past, err := motorcircuit.Size(c)
+		require.NoError(t, err)
+		assert.Equal(t, "36 A", through.Drop.Running.Operands()[0].String())
+		assert.Equal(t, "40 A", past.Drop.Running.Operands()[0].String())
+	}
+}

@@ -46,13 +46,22 @@ func upsized(e tables.Edition, w conductor.Wiring, s conductor.Selection, load c
 	}
 }
 
+// lineCurrent is what the line feeds: the motor, or its drive.
+func (r *Result) lineCurrent() tables.Figure {
+	d := &r.Demand
+	switch {
+	case r.Circuit.Motor.Bypass: // drive or motor
+		return greater(d.Input, d.Design)
+	case !d.Input.IsZero():
+		return d.Input
+	}
+	return d.Design
+}
+
 // lineLoad is the running motor as a load of the branch circuit.
 func (r *Result) lineLoad() conductor.LineLoad {
 	c := &r.Circuit
-	current := r.Demand.Design
-	if !r.Demand.Input.IsZero() {
-		current = r.Demand.Input
-	}
+	current := r.lineCurrent()
 	if c.Motor.Use == motor.FirePump { // 695.7 asks for the drop at 115 percent
 		current = percent("115 percent of full-load current", c.Edition, &pumpDrop, current, 115)
 	}
